@@ -6,7 +6,7 @@ import "gonum.org/v1/gonum/spatial/r2"
 // [0, 1] into the plane. Derivatives are with respect to that parameter, and
 // the first derivative vanishes nowhere.
 //
-// The kinds are Line, Arc (circular) and EllipticArc. Lengths carry the one
+// The kinds are Line, Arc (circular), EllipticArc and Bezier (cubic). Lengths carry the one
 // unit that the whole outline is drawn in.
 type Curve interface {
 	// At gives the point at parameter t.
