@@ -1,0 +1,27 @@
+// Package cubature integrates over the reference triangle with corners (0,0),
+// (1,0), (0,1) and over the interval [0, 1].
+//
+// A rule of degree d is exact, but for rounding, for every polynomial of total
+// degree d. All weights are positive and all points lie strictly inside, so
+// that rounding is never magnified and no integrand is asked for at an edge.
+package cubature
+
+// MaxDegree is the highest degree that Triangle delivers.
+const MaxDegree = 40
+
+// A Rule approximates an integral over the reference triangle by the sum of
+// Weights[i] f(Points[i]). The weights sum to the triangle's area, 1/2.
+type Rule struct {
+	Degree  int // true degree, at least the one asked for
+	Points  [][2]float64
+	Weights []float64
+}
+
+// Triangle returns a rule that is exact to a degree between 0 and MaxDegree.
+// The caller owns it.
+func Triangle(degree int) Rule {
+	if degree < 0 || degree > MaxDegree {
+		panic("cubature: degree out of range")
+	}
+	return conical(degree/2 + 1)
+}
