@@ -128,7 +128,7 @@ func nearerEnd(c Curve, p r2.Vec) float64 {
 func (a Arc) Bounds() r2.Box { return boundsBy(a) }
 
 func (a Arc) Reverse() Curve {
-	return Arc{a.Center, a.Radius, a.Start + a.Sweep, -a.Sweep, a.pins.reverse()}
+	return Arc{a.Center, a.Radius, a.Start + a.Sweep, -a.Sweep, pinned(a.At(1), a.At(0))}
 }
 
 func (a Arc) stationary(n r2.Vec) []float64 {

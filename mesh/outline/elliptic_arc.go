@@ -61,7 +61,7 @@ func (e EllipticArc) Length(t0, t1 float64) float64 { return arcLength(e, t0, t1
 func (e EllipticArc) Bounds() r2.Box { return boundsBy(e) }
 
 func (e EllipticArc) Reverse() Curve {
-	return EllipticArc{e.Center, e.A, e.B, e.Tilt, e.Start + e.Sweep, -e.Sweep, e.pins.reverse()}
+	return EllipticArc{e.Center, e.A, e.B, e.Tilt, e.Start + e.Sweep, -e.Sweep, pinned(e.At(1), e.At(0))}
 }
 
 func (e EllipticArc) stationary(n r2.Vec) []float64 {

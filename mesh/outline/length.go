@@ -5,7 +5,6 @@ import (
 	"sync"
 
 	"gonum.org/v1/gonum/integrate/quad"
-	"gonum.org/v1/gonum/spatial/r2"
 )
 
 // A rule is a Gauss-Legendre rule on [0, 1].

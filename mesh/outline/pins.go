@@ -24,5 +24,3 @@ func (p pins) at(t float64) (r2.Vec, bool) {
 	}
 	return r2.Vec{}, false
 }
-
-func (p pins) reverse() pins { return pins{p.set, p.to, p.from} }
