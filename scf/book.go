@@ -1,0 +1,30 @@
+package scf
+
+// Sources, cited in full once.
+const (
+	roark7  = "W. C. Young, R. G. Budynas, Roark's Formulas for Stress and Strain, 7th ed., McGraw-Hill 2002, Table 17.1, "
+	pilkey3 = "W. D. Pilkey, D. F. Pilkey, Peterson's Stress Concentration Factors, 3rd ed., Wiley 2008, "
+)
+
+// A cubicCase is a published cubic with what is printed beside its values.
+type cubicCase struct {
+	id       string
+	source   string
+	sureness Sureness
+	bias     string
+	fit      cubic
+}
+
+// value evaluates the case for h/r = q and the depth ratio x.
+func (c cubicCase) value(q, x float64) Value {
+	v := Value{
+		ID:       c.id,
+		Factor:   c.fit.factor(q, x),
+		Accuracy: fitAccuracy,
+		Source:   c.source,
+		Sureness: c.sureness,
+		Bias:     c.bias,
+	}
+	v.hold(c.fit.limit(q))
+	return v
+}
