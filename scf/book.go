@@ -12,11 +12,16 @@ type cubicCase struct {
 	source   string
 	sureness Sureness
 	bias     string
+	ratio    string // what q is; empty: h/r
 	fit      cubic
 }
 
-// value evaluates the case for h/r = q and the depth ratio x.
+// value evaluates the case for the shape ratio q and the depth ratio x.
 func (c cubicCase) value(q, x float64) Value {
+	ratio := c.ratio
+	if ratio == "" {
+		ratio = "h/r"
+	}
 	v := Value{
 		ID:       c.id,
 		Factor:   c.fit.factor(q, x),
@@ -25,6 +30,6 @@ func (c cubicCase) value(q, x float64) Value {
 		Sureness: c.sureness,
 		Bias:     c.bias,
 	}
-	v.hold(c.fit.limit(q))
+	v.hold(c.fit.limit(ratio, q))
 	return v
 }

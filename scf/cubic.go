@@ -42,9 +42,10 @@ func (f cubic) factor(q, x float64) float64 {
 	return f[len(f)-1].factor(q, x)
 }
 
-// limit is the range of q, all branches together.
-func (f cubic) limit(q float64) limit {
-	return limit{name: "h/r", value: q, lo: f[0].lo, hi: f[len(f)-1].hi}
+// limit is the range of q, all branches together, under the name that the
+// source has for q.
+func (f cubic) limit(name string, q float64) limit {
+	return limit{name: name, value: q, lo: f[0].lo, hi: f[len(f)-1].hi}
 }
 
 // horner evaluates c[0] + c[1] x + c[2] x² + … with the products rounded, so

@@ -38,7 +38,15 @@ type Family struct {
 func Families() []*Family {
 	return []*Family{
 		barShoulder(),
+		barNotch(),
+		barEdgeNotch(),
+		barHole(),
+		barEllipse(),
+		barCollar(),
 		shaftShoulder(),
+		shaftGroove(),
+		shaftRingGroove(),
+		shaftCollar(),
 	}
 }
 

@@ -49,10 +49,7 @@ func mustLookup(t *testing.T, name string) *Family {
 func TestPublishedFits(t *testing.T) {
 	const half = 5.01e-6
 	for _, row := range readTable(t, "published_fits.csv") {
-		f, ok := Lookup(row[0])
-		if !ok {
-			continue
-		}
+		f := mustLookup(t, row[0])
 		load := Load(row[1])
 		dims := Dims{"D": mustFloat(t, row[2]), "d": 1, "r": mustFloat(t, row[3])}
 		want := mustFloat(t, row[5])

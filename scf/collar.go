@@ -1,0 +1,31 @@
+package scf
+
+// What collars of bars and shafts have in common. No formula is published for
+// a short collar; as it grows longer it becomes two shoulders, whose factor is
+// the higher one.
+
+func collarDimensions(size string) []Dimension {
+	return []Dimension{
+		{Name: "D", Meaning: size + " of the collar"},
+		{Name: "d", Meaning: size + " beside the collar"},
+		{Name: "r", Meaning: "fillet radius at both faces, outside L"},
+		{Name: "L", Meaning: "distance between the collar's faces"},
+	}
+}
+
+func checkCollar(dims Dims) error {
+	s, L := stepOf(dims), dims["L"]
+	if err := checkStep(s.D, s.d, s.r); err != nil {
+		return err
+	}
+	if err := notBelow("L", L, "L/D", L, s.D); err != nil {
+		return err
+	}
+	return notLonger("L", L, "length", L, "D", s.D)
+}
+
+// collarHints turns the values of the shoulder into hints.
+func collarHints(values []Value) []Value {
+	return asHints(values, "a shoulder with an endless wide part, not a collar",
+		"an upper value: a short collar has a lower factor")
+}
