@@ -1,0 +1,256 @@
+package mesh
+
+import (
+	"fmt"
+	"math"
+
+	"gonum.org/v1/gonum/spatial/r2"
+
+	"notchproof/mesh/outline"
+)
+
+// The refiner inserts vertices until every triangle inside is small enough and
+// has no small angle, except where the outline forbids it.
+//
+// This is Delaunay refinement in the manner of Chew's second algorithm (Chew
+// 1993; Shewchuk, "Delaunay refinement algorithms for triangular mesh
+// generation", Computational Geometry 22, 2002): a vertex is put at a bad
+// triangle's circumcentre, unless it would lie beyond a piece of the boundary or
+// too near to it, in which case that piece is cut instead. In place of the
+// circumcentre comes an off-centre where that is nearer (Üngör 2004): a point on
+// the bisector of the shortest edge, just far enough to make a good triangle
+// with it, or, if the triangle is too large, one of the size wished for (Rebay
+// 1993; Engwirda and Ivers 2016). So a front of well-shaped triangles grows from
+// the boundary into the inside, and their number stays low.
+type refiner struct {
+	*triangulation
+	*boundary
+	field *sizeField
+	queue queue
+
+	sharp []bool  // by vertex: a corner sharper than 60°
+	shell []int32 // by vertex: the sharp corner whose shell it lies on, or -1
+
+	shortest2 float64 // square of the length below which nothing is cut
+}
+
+const (
+	goodAngle    = 28      // smallest angle aimed for, degrees
+	oversize     = 1.2     // an edge this many times longer than wished for is cut
+	maxTriangles = 1 << 23 // a mesh of more is given up
+	lensCosine   = -0.5    // of the angle, 120°, at which a point sees a segment that it is too near to
+)
+
+// refine does all that.
+func refine(t *triangulation, b *boundary, field *sizeField) (*refiner, error) {
+	r := &refiner{triangulation: t, boundary: b, field: field, shortest2: math.Pow(shortestPiece*b.extent, 2)}
+	r.markShells()
+	for i := range t.tris {
+		r.judge(int32(i))
+	}
+	for {
+		e, ok := r.queue.pop()
+		if !ok {
+			return r, nil
+		}
+		if t.tris[e.tri].stamp != e.stamp {
+			continue
+		}
+		if err := r.improve(e.tri); err != nil {
+			return nil, err
+		}
+		if len(t.tris) > maxTriangles {
+			return nil, fmt.Errorf("more than %d triangles: the sizes wished for are too small for this region", maxTriangles)
+		}
+	}
+}
+
+// markShells finds the sharp corners and the vertices at the ends of the pieces
+// that begin or end there.
+func (r *refiner) markShells() {
+	r.sharp = make([]bool, len(r.triangulation.points))
+	r.shell = make([]int32, len(r.triangulation.points))
+	for i := range r.shell {
+		r.shell[i] = -1
+	}
+	segs := r.triangulation.segs
+	begin := make(map[int32]int32) // only looked up, never ranged over
+	for s := range segs {
+		if s == int(r.first[segs[s].side]) {
+			begin[segs[s].a] = int32(s)
+		}
+	}
+	for s := range segs {
+		if segs[s].next >= 0 {
+			continue
+		}
+		n, ok := begin[segs[s].b]
+		if !ok || !sharpCorner(r.sides[segs[s].side].Curve, r.sides[segs[n].side].Curve) {
+			continue
+		}
+		corner := segs[s].b
+		r.sharp[corner] = true
+		r.shell[segs[s].a] = corner
+		r.shell[segs[n].b] = corner
+	}
+}
+
+// A shape is what decides about a triangle.
+type shape struct {
+	k       int     // corner opposite the shortest edge
+	short2  float64 // square of the shortest edge
+	area2   float64 // twice the area
+	small   bool    // it has a small angle
+	large   bool    // it has an edge longer than wished for
+	badness float64
+}
+
+// sin2Good is sin² of the smallest angle aimed for.
+var sin2Good = math.Pow(math.Sin(goodAngle*math.Pi/180), 2)
+
+// measure looks at triangle i.
+func (r *refiner) measure(i int32) shape {
+	tr := &r.tris[i]
+	p, q, o := r.point(tr.v[0]), r.point(tr.v[1]), r.point(tr.v[2])
+	d := [3]float64{dist2(q, o), dist2(o, p), dist2(p, q)}
+	k, l := 0, 0
+	for j := 1; j < 3; j++ {
+		if d[j] < d[k] {
+			k = j
+		}
+		if d[j] > d[l] {
+			l = j
+		}
+	}
+	s := shape{k: k, short2: d[k], area2: area2(p, q, o)}
+	// sin α = 2·area / (product of the edges at α).
+	s.small = s.area2*s.area2 < sin2Good*d[after[k]]*d[after[after[k]]]
+	v := tr.v
+	mid := r2.Scale(0.5, r2.Add(r.point(v[after[l]]), r.point(v[after[after[l]]])))
+	h := r.field.at(mid)
+	limit := min(oversize*h, r.field.largest)
+	s.large = d[l] > limit*limit
+	s.badness = d[k]
+	return s
+}
+
+func (r *refiner) point(v int32) r2.Vec { return r.triangulation.points[v] }
+
+// judge puts triangle i into the queue if it is bad.
+func (r *refiner) judge(i int32) {
+	if !r.tris[i].inside {
+		return
+	}
+	if s := r.measure(i); s.small || s.large {
+		r.queue.push(entry{float32(s.badness), i, r.tris[i].stamp})
+	}
+}
+
+// improve inserts a vertex for the sake of triangle i, or cuts a segment that is
+// in the way of that.
+func (r *refiner) improve(i int32) error {
+	s := r.measure(i)
+	if s.short2 < r.shortest2 {
+		return nil
+	}
+	v := r.tris[i].v
+	if !s.large && r.excused(v[after[s.k]], v[after[after[s.k]]]) {
+		return nil
+	}
+	c := r.steiner(i, s)
+	tri, wall := r.walk(i, c)
+	if wall >= 0 {
+		return r.cutFor(i, r.tris[tri].s[wall])
+	}
+	r.find(c, tri)
+	for _, e := range r.cavity.ring {
+		if e.seg >= 0 && r.encroaches(c, e.seg) {
+			return r.cutFor(i, e.seg)
+		}
+	}
+	if _, ok := r.sound(c); !ok {
+		return nil
+	}
+	r.fill(r.addVertex(c))
+	for _, f := range r.cavity.tris {
+		r.judge(f)
+	}
+	return nil
+}
+
+func (r *refiner) addVertex(p r2.Vec) int32 {
+	v := int32(len(r.triangulation.points))
+	r.triangulation.points = append(r.triangulation.points, p)
+	r.at = append(r.at, 0)
+	r.sharp = append(r.sharp, false)
+	r.shell = append(r.shell, -1)
+	return v
+}
+
+// excused tells whether an edge spans a sharp corner from one side to the other
+// on a shell: then it is as short as the corner makes it.
+func (r *refiner) excused(u, v int32) bool {
+	corner := r.shell[u]
+	if corner < 0 || r.shell[v] != corner {
+		return false
+	}
+	du, dv := dist(r.point(u), r.point(corner)), dist(r.point(v), r.point(corner))
+	return math.Abs(du-dv) <= 1e-6*du
+}
+
+// encroaches tells whether p sees a segment at more than 120°.
+func (r *refiner) encroaches(p r2.Vec, seg int32) bool {
+	s := &r.triangulation.segs[seg]
+	u, w := r2.Sub(r.point(s.a), p), r2.Sub(r.point(s.b), p)
+	dot := r2.Dot(u, w)
+	return dot < 0 && dot*dot > lensCosine*lensCosine*r2.Norm2(u)*r2.Norm2(w)
+}
+
+// steiner gives the point to insert for triangle i: on the bisector of its
+// shortest edge, at the circumcentre or before it.
+func (r *refiner) steiner(i int32, s shape) r2.Vec {
+	v := r.tris[i].v
+	p, q, o := r.point(v[after[s.k]]), r.point(v[after[after[s.k]]]), r.point(v[s.k])
+	m := r2.Scale(0.5, r2.Add(p, q))
+	l := math.Sqrt(s.short2)
+	n := r2.Scale(1/l, r2.Vec{X: p.Y - q.Y, Y: q.X - p.X}) // towards o
+	// With m the origin and pq along x, o = (x, y) has the circumcentre
+	// (0, (x² + y² − l²/4) / 2y).
+	d := (dist2(o, m) - s.short2/4) / (2 * s.area2 / l)
+	d = min(d, l*offCentre)
+	if s.large {
+		h := r.field.at(m)
+		h = r.field.at(r2.Add(m, r2.Scale(0.4*min(h, 2*l), n)))
+		if l < 1.5*h {
+			d = min(d, math.Sqrt(h*h-s.short2/4))
+		}
+	}
+	return r2.Add(m, r2.Scale(d, n))
+}
+
+// offCentre is the height of the triangle with base 1 whose smallest angle, at
+// the top, is a little better than the smallest aimed for.
+var offCentre = 0.5 / math.Tan((goodAngle+0.5)/2*math.Pi/180)
+
+// cutFor cuts a segment for the sake of triangle i, which is looked at again.
+func (r *refiner) cutFor(i, seg int32) error {
+	stamp := r.tris[i].stamp
+	if seg < 0 {
+		return nil
+	}
+	done, err := r.cutSegment(seg, 0)
+	if err != nil || !done {
+		return err
+	}
+	if r.tris[i].stamp == stamp {
+		r.judge(i)
+	}
+	return nil
+}
+
+// curvePoint gives a point of a segment's curve.
+func (r *refiner) curvePoint(s *segment, t float64) r2.Vec {
+	return r.sides[s.side].Curve.At(t)
+}
+
+var _ outline.Curve = outline.Line{}

@@ -1,0 +1,111 @@
+package mesh
+
+import (
+	"math"
+
+	"gonum.org/v1/gonum/spatial/r2"
+
+	"notchproof/mesh/outline"
+)
+
+// Two sides that meet at less than 60° cannot both be cut in their middles
+// forever: each cut would encroach upon the other side and ask for the next. The
+// pieces next to such a corner are instead cut at common distances from it, on
+// "concentric shells" (Ruppert 1995), and a small angle that only reflects the
+// corner's own is left alone (Miller, Pav and Walkington 2003).
+
+// sharpAngle is the corner angle below which all this is needed.
+const sharpAngle = math.Pi / 3
+
+// sharpCorner tells whether the material's angle between the end of one side and
+// the begin of the next is sharp.
+func sharpCorner(before, next outline.Curve) bool {
+	u, w := r2.Scale(-1, before.Deriv(1)), next.Deriv(0)
+	// The material's angle runs counter-clockwise from the next side to the
+	// one before. Sides that fold back onto each other by less than rounding
+	// count as sharp.
+	angle := math.Atan2(r2.Cross(w, u), r2.Dot(w, u))
+	return angle > -1e-9 && angle < sharpAngle
+}
+
+// shellCuts gives the sides that meet in a sharp corner equal first pieces.
+func shellCuts(region *outline.Region, cuts [][]float64) {
+	first := 0
+	for _, loop := range loops(region) {
+		for j := range loop {
+			k := (j + 1) % len(loop)
+			if !sharpCorner(loop[j].Curve, loop[k].Curve) {
+				continue
+			}
+			end := shellSide{curve: loop[j].Curve.Reverse(), cuts: reversed(cuts[first+j])}
+			begin := shellSide{curve: loop[k].Curve, cuts: cuts[first+k]}
+			if j == k { // a loop of one side: both ends are the same list
+				begin.cuts = cuts[first+j]
+				r := min(end.radius(), begin.radius())
+				cuts[first+j] = reversed(end.cut(r))
+				begin.cuts = cuts[first+j]
+				cuts[first+j] = begin.cut(r)
+				continue
+			}
+			r := min(end.radius(), begin.radius())
+			cuts[first+j] = reversed(end.cut(r))
+			cuts[first+k] = begin.cut(r)
+		}
+		first += len(loop)
+	}
+}
+
+// A shellSide is a side seen from a sharp corner at its begin.
+type shellSide struct {
+	curve outline.Curve
+	cuts  []float64
+}
+
+func reversed(ts []float64) []float64 {
+	out := make([]float64, len(ts))
+	for i, t := range ts {
+		out[len(ts)-1-i] = 1 - t
+	}
+	return out
+}
+
+// radius is that of the shell that suits the side: the end of its first piece,
+// or the middle if there is but one.
+func (s shellSide) radius() float64 {
+	r := dist(s.curve.At(0), s.curve.At(s.cuts[1]))
+	if len(s.cuts) == 2 {
+		r /= 2
+	}
+	return r
+}
+
+// cut gives the side's cuts with one on the shell: the first cut moves if it is
+// near, else there is one more.
+func (s shellSide) cut(r float64) []float64 {
+	t := shellParameter(s.curve, 0, s.cuts[1], r)
+	if d := dist(s.curve.At(0), s.curve.At(s.cuts[1])); len(s.cuts) > 2 && d < 1.5*r {
+		ts := append([]float64(nil), s.cuts...)
+		ts[1] = t
+		return ts
+	}
+	return append([]float64{0, t}, s.cuts[1:]...)
+}
+
+// shellParameter finds where the curve is at distance r from its point at t0,
+// between t0 and t1; the distance grows along so short a piece. t0 may be the
+// greater.
+func shellParameter(c outline.Curve, t0, t1, r float64) float64 {
+	center := c.At(t0)
+	if straight(c) {
+		return t0 + (t1-t0)*min(1, r/dist(center, c.At(t1)))
+	}
+	for range 60 {
+		tm := (t0 + t1) / 2
+		if dist(center, c.At(tm)) < r {
+			t0 = tm
+		} else {
+			t1 = tm
+		}
+	}
+	return t1
+}

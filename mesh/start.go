@@ -1,0 +1,149 @@
+package mesh
+
+import (
+	"fmt"
+	"slices"
+
+	"gonum.org/v1/gonum/spatial/r2"
+
+	"notchproof/mesh/outline"
+	"notchproof/mesh/predicate"
+)
+
+// start triangulates the boundary alone. Where chords of curves cross or leave
+// vertices on their wrong side although the true curves do not, the curves are
+// cut finer and all is done again.
+func start(region *outline.Region, field *sizeField, size Sizing, box r2.Box) (*triangulation, *boundary, error) {
+	cuts, err := sideCuts(region, field, size.Sides)
+	if err != nil {
+		return nil, nil, err
+	}
+	shellCuts(region, cuts)
+	for {
+		b := cutSides(region, cuts, box)
+		t, coarse, err := triangulate(b)
+		if err != nil {
+			return nil, nil, err
+		}
+		if len(coarse) == 0 {
+			return t, b, t.classify()
+		}
+		for _, s := range coarse {
+			seg := &b.segs[s]
+			tm := (seg.t0 + seg.t1) / 2
+			if dist(b.points[seg.a], b.points[seg.b]) < shortestPiece*b.extent {
+				p := b.points[seg.a]
+				return nil, nil, fmt.Errorf("side %d (%q) touches or crosses another near (%g, %g)", seg.side, b.sides[seg.side].Name, p.X, p.Y)
+			}
+			ts := cuts[seg.side]
+			at, _ := slices.BinarySearch(ts, tm)
+			cuts[seg.side] = slices.Insert(ts, at, tm)
+		}
+	}
+}
+
+// shortestPiece is the length, in extents of the region, below which a boundary
+// piece is not cut any more: a thousandth of it is still well above the rounding
+// errors of points on curves.
+const shortestPiece = 1e-11
+
+// triangulate makes the constrained Delaunay triangulation of the boundary, or
+// lists the segments that are too coarse for that.
+func triangulate(b *boundary) (*triangulation, []int32, error) {
+	t := newTriangulation(b.box, len(b.points))
+	t.points = append(t.points, b.points...)
+	t.at = append(t.at, make([]int32, len(b.points))...)
+	t.segs = slices.Clone(b.segs)
+	for i := range t.segs {
+		t.segs[i].a += boxCorners
+		t.segs[i].b += boxCorners
+	}
+	for _, i := range insertionOrder(b.points, b.box) {
+		p := b.points[i]
+		tri, _ := t.walk(t.last, p)
+		for _, v := range t.tris[tri].v {
+			if t.points[v] == p {
+				return nil, nil, fmt.Errorf("the outline meets itself at (%g, %g)", p.X, p.Y)
+			}
+		}
+		t.find(p, tri)
+		if _, ok := t.sound(p); !ok {
+			return nil, nil, fmt.Errorf("no place for a vertex at (%g, %g)", p.X, p.Y)
+		}
+		t.fill(i + boxCorners)
+	}
+	var coarse []int32
+	for s := range t.segs {
+		bad, ok := t.recover(int32(s))
+		if ok {
+			continue
+		}
+		curved := bad.of(t)
+		if len(curved) == 0 {
+			return nil, nil, bad.err(t, b)
+		}
+		coarse = append(coarse, curved...)
+	}
+	if len(coarse) == 0 {
+		for s := range t.segs {
+			coarse = append(coarse, t.lens(b, int32(s))...)
+		}
+	}
+	slices.Sort(coarse)
+	return t, slices.Compact(coarse), nil
+}
+
+// of lists the segments that can be cut finer to undo a crossing.
+func (c crossing) of(t *triangulation) []int32 {
+	var curved []int32
+	for _, s := range []int32{c.seg, c.other} {
+		if s >= 0 && t.segs[s].curved {
+			curved = append(curved, s)
+		}
+	}
+	return curved
+}
+
+func (c crossing) err(t *triangulation, b *boundary) error {
+	s := t.segs[c.seg]
+	if c.other >= 0 {
+		o := t.segs[c.other]
+		p := t.points[o.a]
+		return fmt.Errorf("sides %d (%q) and %d (%q) cross near (%g, %g)", s.side, b.sides[s.side].Name, o.side, b.sides[o.side].Name, p.X, p.Y)
+	}
+	p := t.points[c.vertex]
+	return fmt.Errorf("side %d (%q) runs through the vertex (%g, %g)", s.side, b.sides[s.side].Name, p.X, p.Y)
+}
+
+// lens lists the curved segments to be cut if something lies between a segment's
+// chord and its curve: then a later cut of the segment would put that on the
+// wrong side.
+func (t *triangulation) lens(b *boundary, seg int32) []int32 {
+	s := &t.segs[seg]
+	if !s.curved {
+		return nil
+	}
+	p := b.sides[s.side].Curve.At((s.t0 + s.t1) / 2)
+	i, k := t.edge(s.a, s.b)
+	from, to := t.points[s.a], t.points[s.b]
+	switch predicate.Orient(from, to, p) {
+	case 0:
+		return nil
+	case -1:
+		n := t.tris[i].n[k]
+		i, k = n, t.entry(n, i)
+		from, to = to, from
+	}
+	// The circle through a, p, b stands for the curve.
+	if predicate.InCircle(from, to, p, t.points[t.tris[i].v[k]]) > 0 {
+		return []int32{seg}
+	}
+	tri, wall := t.walk(i, p)
+	if wall < 0 {
+		return nil
+	}
+	if other := t.tris[tri].s[wall]; other >= 0 {
+		return crossing{seg, other, -1}.of(t)
+	}
+	return []int32{seg}
+}
