@@ -1,0 +1,191 @@
+package fem
+
+import (
+	"context"
+	"errors"
+	"fmt"
+	"math"
+	"runtime"
+
+	"notchproof/fem/sparse"
+)
+
+// A Workspace keeps memory from one solve to the next. The zero value is ready.
+// It must not be shared by solves that run at the same time.
+type Workspace struct {
+	factor sparse.Workspace
+}
+
+// A Solution holds the unknowns of one load case and what the solver saw.
+type Solution struct {
+	Problem  *Problem
+	Values   []float64 // unknown c of node i at i·u + c
+	Unknowns int       // unknowns that were solved for
+	// Residual is the norm of the unbalanced nodal forces at free unknowns over
+	// the norm of all nodal forces, found from the stresses, not from the matrix.
+	Residual float64
+	// Reactions are the forces of the pins over the norm of all nodal forces.
+	// Where loads balance and pins only hold rigid motion they are rounding.
+	Reactions []Reaction
+	// Pivots are the extreme pivots of the factorisation.
+	Pivots sparse.Pivots
+
+	sampler
+}
+
+// Reaction is the force of one pin, relative to all nodal forces.
+type Reaction struct {
+	Pin   Pin
+	Force float64
+}
+
+// UnsupportedError says that the supports leave the part a motion of its own.
+type UnsupportedError struct {
+	Node    int
+	Unknown int
+	X, Y    float64
+	Err     error
+}
+
+func (e *UnsupportedError) Error() string {
+	return fmt.Sprintf("unknown %d of the node at (%g, %g) is not supported: %v", e.Unknown+1, e.X, e.Y, e.Err)
+}
+
+func (e *UnsupportedError) Unwrap() error { return e.Err }
+
+// Solve solves all load cases of a problem with one factorisation. workers is
+// the number of goroutines (0: one a processor); the result does not depend on
+// it. w may be nil.
+func (p *Problem) Solve(ctx context.Context, w *Workspace, workers int) ([]*Solution, error) {
+	if w == nil {
+		w = new(Workspace)
+	}
+	if !(p.Material.E > 0) || !(p.Material.Nu > -1 && p.Material.Nu < 0.5) {
+		return nil, fmt.Errorf("material: E=%g, nu=%g: want E > 0 and −1 < nu < 0.5", p.Material.E, p.Material.Nu)
+	}
+	num := p.number()
+	plan, err := sparse.Analyse(p.pattern(&num))
+	if err != nil {
+		return nil, err
+	}
+	tabs := newTables(p.Shape.Element, p.Model.Revolved())
+	if workers <= 0 {
+		workers = runtime.GOMAXPROCS(0)
+	}
+	assemblers := make([]*assembler, workers)
+	for i := range assemblers {
+		assemblers[i] = newAssembler(p.Shape, p.Model, p.Material, tabs)
+	}
+	fill := func(worker, element int, k []float64) { assemblers[worker].stiffness(element, k) }
+	factor, err := plan.Factor(ctx, fill, &w.factor, workers)
+	if err != nil {
+		return nil, p.explain(err, &num)
+	}
+	return p.solveCases(factor, &num, assemblers[0]), nil
+}
+
+func (p *Problem) solveCases(factor *sparse.Factor, num *numbering, a *assembler) []*Solution {
+	lifted := p.internal(num.value, a)
+	solutions := make([]*Solution, len(p.Cases))
+	loads := make([][]float64, len(p.Cases))
+	right := make([][]float64, len(p.Cases))
+	for i, c := range p.Cases {
+		loads[i] = p.forces(c, a)
+		right[i] = make([]float64, num.count)
+		for place, e := range num.equation {
+			if e >= 0 {
+				right[i][e] = loads[i][place] - lifted[place]
+			}
+		}
+	}
+	factor.Solve(right...)
+	for i := range solutions {
+		values := append([]float64(nil), num.value...)
+		for place, e := range num.equation {
+			if e >= 0 {
+				values[place] = right[i][e]
+			}
+		}
+		s := &Solution{Problem: p, Values: values, Unknowns: num.count, Pivots: factor.Pivots()}
+		s.sampler = newSampler(p)
+		s.balance(num, loads[i], a)
+		solutions[i] = s
+	}
+	return solutions
+}
+
+// internal gives the nodal forces that a displacement field exerts.
+func (p *Problem) internal(values []float64, a *assembler) []float64 {
+	f := make([]float64, len(values))
+	if norm(values) == 0 {
+		return f
+	}
+	for tri := range p.Shape.Mesh.Triangles {
+		a.addForces(tri, values, f)
+	}
+	return f
+}
+
+// balance compares nodal forces with loads: residual and reactions.
+func (s *Solution) balance(num *numbering, load []float64, a *assembler) {
+	f := s.Problem.internal(s.Values, a)
+	total, free := 0.0, 0.0
+	for place, e := range num.equation {
+		total += f[place] * f[place]
+		if e >= 0 {
+			d := f[place] - load[place]
+			free += d * d
+		}
+	}
+	scale := math.Sqrt(total)
+	if scale == 0 {
+		return
+	}
+	s.Residual = math.Sqrt(free) / scale
+	u := s.Problem.Model.Unknowns()
+	for _, place := range num.pinned {
+		pin := Pin{Point: place / u, Unknown: place % u}
+		s.Reactions = append(s.Reactions, Reaction{pin, (f[place] - load[place]) / scale})
+	}
+}
+
+// pattern describes the elements to the solver.
+func (p *Problem) pattern(num *numbering) sparse.Pattern {
+	shape, u := p.Shape, p.Model.Unknowns()
+	nt, n := len(shape.Mesh.Triangles), shape.Element.Count
+	pat := sparse.Pattern{
+		Unknowns: num.count,
+		Start:    make([]int32, nt+1),
+		Index:    make([]int32, 0, nt*n*u),
+		Center:   make([][2]float64, nt),
+	}
+	for tri, corners := range shape.Mesh.Triangles {
+		for _, node := range shape.Triangle(tri) {
+			for c := range u {
+				pat.Index = append(pat.Index, num.equation[int(node)*u+c])
+			}
+		}
+		pat.Start[tri+1] = int32(len(pat.Index))
+		for _, k := range corners {
+			pat.Center[tri][0] += shape.Mesh.Points[k].X / 3
+			pat.Center[tri][1] += shape.Mesh.Points[k].Y / 3
+		}
+	}
+	return pat
+}
+
+// explain turns a failed pivot into the place and unknown it belongs to.
+func (p *Problem) explain(err error, num *numbering) error {
+	var pivot *sparse.PivotError
+	if !errors.As(err, &pivot) {
+		return err
+	}
+	u := p.Model.Unknowns()
+	for place, e := range num.equation {
+		if int(e) == int(pivot.Unknown) {
+			at := p.Shape.Nodes[place/u]
+			return &UnsupportedError{Node: place / u, Unknown: place % u, X: at.X, Y: at.Y, Err: err}
+		}
+	}
+	return err
+}
