@@ -1,0 +1,114 @@
+// Package verify computes the factor of a part on a ladder of solves, with its
+// uncertainty, and judges handbook factors and the user's claim by it. The
+// computed number and the handbook number meet here and nowhere else.
+package verify
+
+import (
+	"context"
+	"fmt"
+	"runtime"
+	"sync"
+
+	"notchproof/scf"
+	"notchproof/verify/specimen"
+)
+
+// Run checks a part under the given loads (none: all that it carries).
+func Run(ctx context.Context, p *specimen.Part, loads []scf.Load, o Options) (*Result, error) {
+	chosen, err := choose(p, loads)
+	if err != nil {
+		return nil, err
+	}
+	result := &Result{Part: p, Findings: make([]Finding, len(chosen))}
+	errs := make([]error, len(chosen))
+	shared := &shapes{part: p}
+	inner, outer := share(o.Workers, len(chosen))
+	gate := make(chan struct{}, outer)
+	var group sync.WaitGroup
+	for i, l := range chosen {
+		group.Go(func() {
+			gate <- struct{}{}
+			defer func() { <-gate }()
+			c := &climb{part: p, load: l, shapes: shared, options: o, workers: inner}
+			result.Findings[i], errs[i] = c.finding(ctx)
+		})
+	}
+	group.Wait()
+	for _, err := range errs {
+		if err != nil {
+			return nil, err
+		}
+	}
+	return result, nil
+}
+
+// share splits the workers: loads side by side first, the rest inside each.
+func share(workers, loads int) (inner, outer int) {
+	if workers <= 0 {
+		workers = runtime.GOMAXPROCS(0)
+	}
+	outer = min(workers, loads)
+	return max(1, workers/outer), outer
+}
+
+func choose(p *specimen.Part, loads []scf.Load) ([]*specimen.Load, error) {
+	var chosen []*specimen.Load
+	if len(loads) == 0 {
+		for i := range p.Loads {
+			chosen = append(chosen, &p.Loads[i])
+		}
+		return chosen, nil
+	}
+	for _, name := range loads {
+		l, ok := p.Load(name)
+		if !ok {
+			return nil, fmt.Errorf("%s does not carry %s", p.Family.Name, name)
+		}
+		chosen = append(chosen, l)
+	}
+	return chosen, nil
+}
+
+// finding climbs the ladder and judges.
+func (c *climb) finding(ctx context.Context) (Finding, error) {
+	computed, s, err := c.run(ctx)
+	if err != nil {
+		return Finding{}, err
+	}
+	computed.Gross = computed.Factor.Value * c.load.Nominal.Net / c.load.Nominal.Gross
+	for i, at := range computed.peaks {
+		found := peak(c.load, computed.Last, at)
+		if i == 0 {
+			computed.Peak = found
+		} else {
+			computed.Others = append(computed.Others, found)
+		}
+	}
+	f := Finding{Load: c.load, Computed: computed}
+	f.Checks = c.checks(s, &computed)
+	f.judge(c.part, c.options)
+	return f, nil
+}
+
+// shapes are the meshes of a part, one a stage, made once for all loads.
+type shapes struct {
+	part *specimen.Part
+	mu   sync.Mutex
+	made []*shape
+}
+
+func (s *shapes) stage(i int, g grading) (*shape, error) {
+	s.mu.Lock()
+	defer s.mu.Unlock()
+	for len(s.made) <= i {
+		s.made = append(s.made, nil)
+	}
+	if s.made[i] == nil {
+		made, err := newShape(s.part, g)
+		if err != nil {
+			return nil, err
+		}
+		s.made[i] = made
+	}
+	return s.made[i], nil
+}

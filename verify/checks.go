@@ -1,0 +1,104 @@
+package verify
+
+import (
+	"math"
+
+	"gonum.org/v1/gonum/spatial/r2"
+
+	"notchproof/fem"
+	"notchproof/verify/specimen"
+)
+
+// Limits of the checks. They are wide against what a sound solve shows and
+// narrow against what a broken one does; none of them enters the factor.
+const (
+	forceLimit    = 1e-3 // resultant across the net section, relative
+	farLimit      = 1e-3 // far stress, relative to its largest
+	leftoverLimit = 2e-2 // traction left on the free surface at the peak, relative to the peak
+	solveLimit    = 1e-8 // unbalanced nodal forces and support forces, relative
+	plainLimit    = 1.5  // length of a plain end in units of its size
+	angleLimit    = 20.0 // degrees
+	jacobianLimit = 0.05 // smallest Jacobian of a bent triangle over that of the straight one
+)
+
+// checks are the conditions beside the answer.
+func (c *climb) checks(s *shape, out *Computed) []Check {
+	sol := out.Last
+	last := out.Ladder[len(out.Ladder)-1]
+	jacobian, _ := s.order(last.Order).Quality()
+	list := []Check{
+		below("balance of forces and moments across the net section", imbalance(c.part, c.load, sol), forceLimit),
+		below("free-surface traction at the root", last.Leftover, leftoverLimit),
+	}
+	for i, plain := range c.part.Plain {
+		list = append(list, below("far-field stress in the "+plain.Name, farError(c.part, c.load, sol, i), farLimit))
+	}
+	for _, plain := range c.part.Plain {
+		length := math.Abs(plain.To-plain.From) / plainSize(c.part, plain)
+		list = append(list, above("length of the plain "+plain.Name+" in sizes", length, plainLimit))
+	}
+	return append(list,
+		below("observed contraction of the ladder", out.Factor.Order, 1),
+		below("unbalanced nodal forces", sol.Residual, solveLimit),
+		below("support forces", reactions(sol), solveLimit),
+		above("smallest angle of the mesh in degrees", s.mesh.Quality().SmallestAngle, angleLimit),
+		above("smallest Jacobian of the bent triangles", jacobian, jacobianLimit),
+	)
+}
+
+// plainSize is the width or diameter of a plain stretch.
+func plainSize(p *specimen.Part, plain specimen.Plain) float64 {
+	if p.Half {
+		return 2 * plain.High
+	}
+	return plain.High - plain.Low
+}
+
+// imbalance is the largest deviation of the resultants that the outside fixes,
+// relative to the force or moment that the nominal stress gives.
+func imbalance(p *specimen.Part, l *specimen.Load, s *fem.Solution) float64 {
+	got, want := s.Section(p.Net), l.Resultant
+	switch {
+	case want.Torque != 0:
+		return math.Abs(got.Torque/want.Torque - 1)
+	case want.Moment != 0:
+		size := p.Plain[1].High
+		return math.Max(math.Abs(got.Moment/want.Moment-1), math.Abs(got.Transverse)*size/math.Abs(want.Moment))
+	}
+	return math.Abs(got.Axial/want.Axial - 1)
+}
+
+// farError compares the stress along the part (in torsion the shear around it)
+// with the far stress, one size before the loaded end of a plain stretch, at
+// places across the section, relative to the largest far stress there.
+func farError(p *specimen.Part, l *specimen.Load, s *fem.Solution, plain int) float64 {
+	st := p.Plain[plain]
+	size := math.Min(plainSize(p, st), math.Abs(st.To-st.From)/2)
+	x := st.To - math.Copysign(size, st.To-st.From)
+	worst, scale := 0.0, 0.0
+	const places = 8
+	for i := range places {
+		y := st.Low + (st.High-st.Low)*(float64(i)+0.5)/places
+		want := l.Far(plain, y)
+		scale = math.Max(scale, math.Abs(want))
+		tri, xi, eta, ok := s.Find(r2.Vec{X: x, Y: y})
+		if !ok {
+			return math.Inf(1)
+		}
+		got := s.Amplitude(tri, xi, eta)
+		value := got.XX
+		if l.Shear {
+			value = got.XZ
+		}
+		worst = math.Max(worst, math.Abs(value-want))
+	}
+	return worst / scale
+}
+
+func reactions(s *fem.Solution) float64 {
+	worst := 0.0
+	for _, r := range s.Reactions {
+		worst = math.Max(worst, math.Abs(r.Force))
+	}
+	return worst
+}

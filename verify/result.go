@@ -1,0 +1,102 @@
+package verify
+
+import (
+	"notchproof/fem"
+	"notchproof/scf"
+	"notchproof/verify/specimen"
+)
+
+// A Result is the answer about a part: one finding a load.
+type Result struct {
+	Part     *specimen.Part
+	Findings []Finding
+}
+
+// A Finding is the answer about a part under one load.
+type Finding struct {
+	Load     *specimen.Load
+	Computed Computed
+	Handbook []HandbookComparison
+	Claim    *ClaimComparison // nil: none was made
+	Checks   []Check
+	// Verdict is the claim's where there is one, else that of the handbook
+	// value in range with the best accuracy.
+	Verdict     Verdict
+	Because     []string // what the verdict rests on, and what is missing
+	Misreadings []Misreading
+}
+
+// Computed is the factor that the ladder gives.
+type Computed struct {
+	Factor   Estimate // on the net nominal stress
+	VonMises Estimate // von Mises stress ÷ nominal (in torsion ÷ √3 nominal shear)
+	Gross    float64  // the factor on the gross section
+	Peak     Peak     // where the factor sits
+	Others   []Peak   // other local maxima, largest first
+	Ladder   []Rung
+	Last     *fem.Solution // of the last rung
+
+	peaks []fem.SurfacePoint
+}
+
+// A Peak is a local maximum of the stress on the notch.
+type Peak struct {
+	X, Y       float64
+	ArcDegrees float64 // angle between the surface normal and the transverse direction
+	Factor     float64
+	Side       string // name of the side it lies on
+}
+
+// A Rung is one solve of a ladder.
+type Rung struct {
+	Order      int
+	Triangles  int
+	PerQuarter float64 // elements per 90° of arc on the notch
+	Unknowns   int
+	Factor     float64
+	VonMises   float64
+	Leftover   float64 // traction left on the free surface at the peak ÷ its stress
+}
+
+// A Check is one of the conditions without which no factor is judged.
+type Check struct {
+	Name   string
+	Value  float64
+	Limit  float64
+	Above  bool // the value must be above the limit, not below it
+	Passed bool
+}
+
+func below(name string, value, limit float64) Check {
+	return Check{Name: name, Value: value, Limit: limit, Passed: value <= limit}
+}
+
+func above(name string, value, limit float64) Check {
+	return Check{Name: name, Value: value, Limit: limit, Above: true, Passed: value >= limit}
+}
+
+// A Claim is the user's own factor.
+type Claim struct {
+	Factor    float64
+	LastDigit float64 // one unit of its last digit, as it was written
+	Reading   float64 // relative tolerance of the reading; 0: 3 %
+	From      string  // where it came from
+}
+
+// ClaimComparison holds the claim against the computed factor.
+type ClaimComparison struct {
+	Claim Claim
+	Comparison
+}
+
+// HandbookComparison holds a published factor against the computed one.
+type HandbookComparison struct {
+	Value scf.Value
+	Comparison
+}
+
+// A Misreading is a known slip whose factor would explain a claim.
+type Misreading struct {
+	What   string
+	Factor float64
+}
