@@ -1,0 +1,157 @@
+package main
+
+import (
+	"encoding/json"
+	"io"
+
+	"notchproof/scf"
+	"notchproof/verify"
+)
+
+// The object that check --json prints. Its names are a contract with whoever
+// reads it; schema counts the changes that would break a reader.
+type jsonResult struct {
+	Schema  int           `json:"schema"`
+	Part    jsonPart      `json:"part"`
+	Results []jsonFinding `json:"results"`
+}
+
+type jsonPart struct {
+	Family string   `json:"family"`
+	Dims   scf.Dims `json:"dims"`
+	Unit   string   `json:"unit"`
+	Nu     float64  `json:"nu"`
+}
+
+type jsonFinding struct {
+	Load        scf.Load         `json:"load"`
+	Nominal     jsonNominal      `json:"nominal"`
+	Computed    jsonComputed     `json:"computed"`
+	Handbook    []jsonHandbook   `json:"handbook"`
+	Claim       *jsonClaim       `json:"claim,omitempty"`
+	Checks      []jsonCheck      `json:"checks"`
+	Verdict     verify.Verdict   `json:"verdict"`
+	Because     []string         `json:"because"`
+	Misreadings []jsonMisreading `json:"misreadings"`
+}
+
+type jsonNominal struct {
+	Section string   `json:"section"`
+	Formula string   `json:"formula"`
+	Notes   []string `json:"notes,omitempty"`
+}
+
+type jsonComputed struct {
+	Factor      float64    `json:"factor"`
+	Uncertainty float64    `json:"uncertainty"`
+	VonMises    float64    `json:"vonMises"`
+	Gross       float64    `json:"gross"`
+	At          jsonPlace  `json:"at"`
+	Status      string     `json:"status"`
+	Ladder      []jsonRung `json:"ladder"`
+	Others      []jsonPeak `json:"others,omitempty"`
+}
+
+type jsonPlace struct {
+	X          float64 `json:"x"`
+	Y          float64 `json:"y"`
+	ArcDegrees float64 `json:"arcDegrees"`
+}
+
+type jsonPeak struct {
+	Side   string    `json:"side"`
+	Factor float64   `json:"factor"`
+	At     jsonPlace `json:"at"`
+}
+
+type jsonRung struct {
+	Order     int     `json:"order"`
+	Triangles int     `json:"triangles"`
+	Unknowns  int     `json:"unknowns"`
+	Factor    float64 `json:"factor"`
+}
+
+type jsonHandbook struct {
+	ID         string         `json:"id"`
+	Factor     float64        `json:"factor"`
+	InRange    bool           `json:"inRange"`
+	Accuracy   float64        `json:"accuracy"`
+	Source     string         `json:"source"`
+	Difference float64        `json:"difference"`
+	Verdict    verify.Verdict `json:"verdict"`
+	Warnings   []string       `json:"warnings"`
+}
+
+type jsonClaim struct {
+	Factor     float64        `json:"factor"`
+	Source     string         `json:"source"`
+	Tolerance  float64        `json:"tolerance"`
+	Difference float64        `json:"difference"`
+	Verdict    verify.Verdict `json:"verdict"`
+}
+
+type jsonCheck struct {
+	Name   string  `json:"name"`
+	Value  float64 `json:"value"`
+	Limit  float64 `json:"limit"`
+	Passed bool    `json:"passed"`
+}
+
+type jsonMisreading struct {
+	What   string  `json:"what"`
+	Factor float64 `json:"factor"`
+}
+
+// writeJSON prints a result as one object.
+func writeJSON(w io.Writer, r *verify.Result) error {
+	out := jsonResult{
+		Schema: 1,
+		Part:   jsonPart{Family: r.Part.Family.Name, Dims: r.Part.Given, Unit: r.Part.Unit, Nu: r.Part.Options.Nu},
+	}
+	for i := range r.Findings {
+		out.Results = append(out.Results, jsonOf(&r.Findings[i]))
+	}
+	encoder := json.NewEncoder(w)
+	encoder.SetEscapeHTML(false)
+	encoder.SetIndent("", "  ")
+	return encoder.Encode(out)
+}
+
+func jsonOf(f *verify.Finding) jsonFinding {
+	c := &f.Computed
+	out := jsonFinding{
+		Load:    f.Load.Name,
+		Nominal: jsonNominal{f.Load.Nominal.Section, f.Load.Nominal.Formula, f.Load.Nominal.Notes},
+		Computed: jsonComputed{
+			Factor: c.Factor.Value, Uncertainty: c.Factor.Uncertainty,
+			VonMises: c.VonMises.Value, Gross: c.Gross,
+			At:     jsonPlace{c.Peak.X, c.Peak.Y, c.Peak.ArcDegrees},
+			Status: c.Factor.Status.String(),
+			Ladder: []jsonRung{},
+		},
+		Handbook: []jsonHandbook{}, Checks: []jsonCheck{}, Misreadings: []jsonMisreading{},
+		Verdict: f.Verdict, Because: append([]string{}, f.Because...),
+	}
+	for _, r := range c.Ladder {
+		out.Computed.Ladder = append(out.Computed.Ladder, jsonRung{r.Order, r.Triangles, r.Unknowns, r.Factor})
+	}
+	for _, p := range c.Others {
+		out.Computed.Others = append(out.Computed.Others, jsonPeak{p.Side, p.Factor, jsonPlace{p.X, p.Y, p.ArcDegrees}})
+	}
+	for _, h := range f.Handbook {
+		out.Handbook = append(out.Handbook, jsonHandbook{
+			h.Value.ID, h.Value.Factor, h.Value.InRange, h.Value.Accuracy, h.Value.Source,
+			h.Difference, h.Verdict, append(append([]string{}, h.Value.Outside...), h.Value.Warnings...),
+		})
+	}
+	if f.Claim != nil {
+		out.Claim = &jsonClaim{f.Claim.Factor, f.Claim.Claim.From, f.Claim.Tolerance, f.Claim.Difference, f.Claim.Verdict}
+	}
+	for _, k := range f.Checks {
+		out.Checks = append(out.Checks, jsonCheck{k.Name, k.Value, k.Limit, k.Passed})
+	}
+	for _, m := range f.Misreadings {
+		out.Misreadings = append(out.Misreadings, jsonMisreading{m.What, m.Factor})
+	}
+	return out
+}
