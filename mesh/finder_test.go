@@ -11,7 +11,7 @@ import (
 // their corners and edges.
 func TestLocateInvertsTheMap(t *testing.T) {
 	for order := 1; order <= 8; order++ {
-		for _, m := range []*Mesh{disc(1, 1, 1), disc(2, 1, 3), sector(1, 2, 1), sector(0.3, 2, 4), lens()} {
+		for _, m := range []*Mesh{disc(1, 1, 1), disc(2, 1, 3), sector(1, 2, 1), sector(0.3, 2, 4), arch(1)} {
 			c := m.Curve(order)
 			f := c.Finder()
 			for tri := range m.Triangles {

@@ -22,4 +22,5 @@ package lagrange
 // MaxOrder is the highest order of element that the package builds.
 const MaxOrder = 12
 
-const maxCount = (MaxOrder + 1) * (MaxOrder + 2) / 2
+// MaxCount is the number of nodes at MaxOrder.
+const MaxCount = (MaxOrder + 1) * (MaxOrder + 2) / 2

@@ -50,7 +50,7 @@ func (m modal) norms() []float64 {
 }
 
 // values sets psi to ψ_ij(ξ, η).
-func (m modal) values(xi, eta float64, psi *[maxCount]float64) {
+func (m modal) values(xi, eta float64, psi *[MaxCount]float64) {
 	var (
 		a, b = 2*xi + eta - 1, 1 - eta
 		bb   = b * b
@@ -74,7 +74,7 @@ func (m modal) values(xi, eta float64, psi *[maxCount]float64) {
 
 // gradients sets psi as values does, and dx, de to the derivatives of ψ_ij
 // with respect to ξ and η: the same recurrences, differentiated.
-func (m modal) gradients(xi, eta float64, psi, dx, de *[maxCount]float64) {
+func (m modal) gradients(xi, eta float64, psi, dx, de *[MaxCount]float64) {
 	var (
 		a, b = 2*xi + eta - 1, 1 - eta
 		bb   = b * b

@@ -11,7 +11,7 @@ func (m modal) interpolation(nodes [][2]float64) []float64 {
 	n := len(nodes)
 	norms := m.norms()
 	v := make([]float64, n*n)
-	var psi [maxCount]float64
+	var psi [MaxCount]float64
 	for k, x := range nodes {
 		m.values(x[0], x[1], &psi)
 		for j := range n {

@@ -89,7 +89,7 @@ func (t *Triangle) Edge(k int) []int { return t.edges[k] }
 // n and 0 at the others. Phi has length Count. The point may lie anywhere, but
 // the values grow fast outside the triangle.
 func (t *Triangle) Basis(xi, eta float64, phi []float64) {
-	var modes [maxCount]float64
+	var modes [MaxCount]float64
 	t.modal.values(xi, eta, &modes)
 	psi := modes[:t.Count]
 	phi = phi[:t.Count]
@@ -113,7 +113,7 @@ func (t *Triangle) Basis(xi, eta float64, phi []float64) {
 // basis functions with respect to ξ and η, and phi as Basis does to their
 // values unless it is nil.
 func (t *Triangle) Gradients(xi, eta float64, phi, dxi, deta []float64) {
-	var psi, px, pe [maxCount]float64
+	var psi, px, pe [MaxCount]float64
 	t.modal.gradients(xi, eta, &psi, &px, &pe)
 	dxi, deta = dxi[:t.Count], deta[:t.Count]
 	for n := range dxi {

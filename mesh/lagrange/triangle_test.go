@@ -105,7 +105,7 @@ func TestModesAreOrthonormal(t *testing.T) {
 	gram := make([]float64, n*n)
 	x, w := make([]float64, MaxOrder+2), make([]float64, MaxOrder+2)
 	quad.Legendre{}.FixedLocations(x, w, 0, 1)
-	var psi [maxCount]float64
+	var psi [MaxCount]float64
 	for i := range x {
 		for j := range x {
 			m.values(x[i]*(1-x[j]), x[j], &psi)
