@@ -51,9 +51,9 @@ func checkEllipse(dims Dims) error {
 	for _, err := range []error{
 		notBelow("a", a, "a/W", a, W),
 		notBelow("b", b, "b/W", b, W),
-		notBelow("a", a, "what is left beside the hole, as part of W,", W/2-a, W),
-		notBelow("b", b, "radius at the tip, b²/a, as part of W,", b*(b/a), W),
-		notBelow("b", b, "radius at the flat end, a²/b, as part of W,", a*(a/b), W),
+		notBelow("a", a, "ligament/W", W/2-a, W),
+		notBelow("b", b, "tip radius b²/(a W)", b*(b/a), W),
+		notBelow("b", b, "end radius a²/(b W)", a*(a/b), W),
 		notLonger("b", b, "semi-axis", b, "W", W),
 	} {
 		if err != nil {

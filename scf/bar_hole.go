@@ -39,9 +39,9 @@ func checkHole(dims Dims) error {
 		return err
 	}
 	if e > 0 {
-		return notBelow("e", dims["e"], "what is left beside the hole, as part of W,", ligament, W)
+		return notBelow("e", dims["e"], "ligament/W", ligament, W)
 	}
-	return notBelow("d", d, "what is left beside the hole, as part of W,", ligament, W)
+	return notBelow("d", d, "ligament/W", ligament, W)
 }
 
 func holeNominal(load Load, dims Dims, _ Options) Nominal {

@@ -16,8 +16,9 @@ const (
 	biasGrooveTension        = biasBasis + "fits of this case are 2 % low on average, 10 % low at worst, 7 % high at most"
 	biasGrooveBending        = biasBasis + "fits of this case are 1 % low on average, 11 % low at worst, 6 % high at most"
 	biasGrooveTorsion        = biasBasis + "fits of this case are 1 % low on average, 15 % low at worst, 5 % high at most"
-	biasStripHole            = biasBasis + "fits of this case are 0.5 % low on average and 0.8 % low at worst"
-	biasStripHoleHeywood     = biasBasis + "this fit is 2 % low at worst and never high"
+	biasStripHole            = biasBasisHole + "fits of this case are 0.5 % low on average and 0.8 % low at worst"
+	biasStripHoleHeywood     = biasBasisHole + "this fit is 2 % low at worst and never high"
 
-	biasBasis = "against converged solutions (ν = 0.3; D/d 1.02 to 3, r/d 0.02 to 0.3) "
+	biasBasis     = "against converged solutions (ν = 0.3; D/d 1.02 to 3, r/d 0.02 to 0.3) "
+	biasBasisHole = "against converged solutions "
 )

@@ -3,6 +3,7 @@ package scf
 import (
 	"errors"
 	"math"
+	"math/rand/v2"
 	"strings"
 	"testing"
 )
@@ -94,6 +95,32 @@ func TestCheckHostileNumbers(t *testing.T) {
 	}
 }
 
+// All dimensions nasty at once: an error or finite numbers, never a panic. A
+// third of the draws is a plain number, so that some get through.
+func TestCheckHostileTogether(t *testing.T) {
+	nasty := []float64{0, -1, 1e-15, 1e-9, 1e-6, 1, 1 + 1e-9, 1 + 2e-6, 1e3, 1e4, 1e9, 1e15, 1e308, 90, 179}
+	rng := rand.New(rand.NewPCG(5, 6))
+	for _, f := range Families() {
+		passed, plain := 0, good()[f.Name]
+		for range 5000 {
+			dims := Dims{}
+			for _, n := range f.Dimensions {
+				dims[n.Name] = nasty[rng.IntN(len(nasty))]
+				if rng.IntN(3) == 0 {
+					dims[n.Name] = plain[n.Name]
+				}
+			}
+			if f.Check(dims) == nil {
+				passed++
+				checkFinite(t, f, dims)
+			}
+		}
+		if passed < 20 {
+			t.Errorf("%s: only %d draws made a shape", f.Name, passed)
+		}
+	}
+}
+
 // checkFinite wants finite numbers from a shape that passed Check.
 func checkFinite(t *testing.T, f *Family, dims Dims) {
 	t.Helper()
@@ -139,7 +166,7 @@ func TestCheckSays(t *testing.T) {
 		{"bar-hole", Dims{"W": 50, "d": 60}, "d=60: hole is not smaller than the width W = 50"},
 		{"bar-hole", Dims{"W": 50, "d": 20, "e": -20}, "e=-20: hole breaks through the edge, the offset must stay below (W−d)/2 = 15"},
 		{"bar-ellipse", Dims{"W": 50, "a": 25, "b": 1}, "a=25: hole is not smaller than the bar, a must stay below W/2 = 25"},
-		{"bar-ellipse", Dims{"W": 50, "a": 10, "b": 0.01}, "b=0.01: radius at the tip, b²/a, as part of W, = 2e-07 is below 1e-06"},
+		{"bar-ellipse", Dims{"W": 50, "a": 10, "b": 0.01}, "b=0.01: tip radius b²/(a W) = 2e-07 is below 1e-06"},
 		{"shaft-ring-groove", Dims{"D": 60, "d": 50, "r": 2, "w": 3}, "w=3: narrower than its two corners, which take 4"},
 		{"shaft-collar", Dims{"D": 60, "d": 50, "r": 2, "L": 1e-9}, "L=1e-09: L/D = 1.66667e-11 is below 1e-06"},
 	}

@@ -70,6 +70,9 @@ func (f *Family) Carries(load Load) bool {
 	return false
 }
 
+// Usage lists the dimensions as a user types them: "D, d, r, [ra], [c]".
+func (f *Family) Usage() string { return usage(f.Dimensions) }
+
 // Check tells whether the dimensions make a shape that can be drawn and
 // meshed with doubles. Its error is a *DimensionError.
 func (f *Family) Check(dims Dims) error {

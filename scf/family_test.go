@@ -44,7 +44,7 @@ func TestValuesKeepTheirPromises(t *testing.T) {
 						t.Errorf("%s: id twice", where)
 					}
 					seen[v.ID] = true
-					if v.Source == "" || v.Range == "" || v.Accuracy <= 0 || v.Hint {
+					if v.Source == "" || v.Sureness == Unchecked || v.Range == "" || v.Accuracy <= 0 || v.Hint {
 						t.Errorf("%s: incomplete: %+v", where, v)
 					}
 					if v.InRange != (len(v.Outside) == 0) {

@@ -33,7 +33,8 @@ func holeBendingNominal(W, d, offset, small float64) Nominal {
 		Gross:   barBending(W),
 		Notes:   []string{"the nominal stress is that at the hole's edge, not the larger one at the strip's edge"},
 	}
-	hole, edge := 6*d/(W*W*W-d*d*d), 6*W/(W*W*W-d*d*d)
+	left := float64(W*W*W) - float64(d*d*d)
+	hole, edge := 6*d/left, 6*W/left
 	if offset != 0 {
 		n.Formula = "M y / I at the hole's edge, I and y of the net section"
 		hole, edge = eccentricSection(W, d, math.Abs(offset))
@@ -53,8 +54,8 @@ func holeBendingNominal(W, d, offset, small float64) Nominal {
 // Elementary: second moments about the middle of what is left.
 func eccentricSection(W, d, offset float64) (hole, edge float64) {
 	middle := -d * offset / (W - d)
-	strip := W*W*W/12 + W*middle*middle
-	gap := d*d*d/12 + d*(offset-middle)*(offset-middle)
+	strip := W*W*W/12 + float64(W*middle*middle)
+	gap := d*d*d/12 + float64(d*(offset-middle)*(offset-middle))
 	moment := strip - gap
 	return (offset + d/2 - middle) / moment, (W/2 - middle) / moment
 }

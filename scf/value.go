@@ -32,7 +32,7 @@ const fitAccuracy = 0.05
 type Sureness int
 
 const (
-	Unchecked Sureness = iota // from memory, no independent check: never the sole evidence
+	Unchecked Sureness = iota // from memory, no independent check: not used for a Value
 	Memory                    // from memory, passes the numeric self-tests of this package
 	Sure                      // confirmed in a transcription, passes the self-tests
 )
