@@ -59,10 +59,10 @@ func sampled(c *Curved, n int) (low, high float64) {
 func TestBoundsEncloseAndAreSharp(t *testing.T) {
 	rng := rand.New(rand.NewPCG(3, 4))
 	for order := 2; order <= 10; order++ {
-		for range 40 {
+		for range 20 {
 			c := shaken(rng, order, 0.3*rng.Float64()/float64(order*order))
 			low, high := c.JacobianBounds(0)
-			least, largest := sampled(c, 60)
+			least, largest := sampled(c, 40)
 			if least < low || largest > high {
 				t.Errorf("order %d: sampled %g to %g, bounds %g to %g", order, least, largest, low, high)
 			}
