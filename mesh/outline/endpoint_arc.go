@@ -35,18 +35,14 @@ func EndpointArc(from, to r2.Vec, rx, ry, tilt float64, large, ccw bool) (Curve,
 	// On the unit circle, half the chord and the centre's place on its
 	// perpendicular bisector. (The signs differ from the standard's, where the
 	// large arc decides together with the direction.)
-	half := e.unturn(r2.Vec{X: (to.X - from.X) / 2, Y: (to.Y - from.Y) / 2})
-	h := r2.Vec{X: half.X / rx, Y: half.Y / ry}
+	h := e.halfChord(from, to)
 	reach := r2.Norm(h)
-	// Radii that reach only just, or miss by rounding, mean a half ellipse: a
-	// square root would turn an error of 1e-16 there into one of 1e-8.
-	const rounding = 4e-16
 	up := 0.0
-	if reach < 1-rounding {
+	switch {
+	case reach < 1-reachRounding:
 		up = math.Sqrt((1-reach)*(1+reach)) / reach
-	} else {
+	case reach > 1+reachRounding:
 		e.A, e.B = rx*reach, ry*reach
-		h = r2.Scale(1/reach, h)
 	}
 	if large == ccw {
 		up = -up
@@ -55,6 +51,7 @@ func EndpointArc(from, to r2.Vec, rx, ry, tilt float64, large, ccw bool) (Curve,
 	shift := e.turn(r2.Vec{X: float64(c.X * e.A), Y: float64(c.Y * e.B)})
 	e.Center = r2.Vec{X: from.X + (to.X-from.X)/2 + shift.X, Y: from.Y + (to.Y-from.Y)/2 + shift.Y}
 
+	// Only the angles of a and b count, not their lengths.
 	a := r2.Sub(r2.Scale(-1, h), c)
 	b := r2.Sub(h, c)
 	e.Start = math.Atan2(a.Y, a.X)
@@ -75,4 +72,16 @@ func EndpointArc(from, to r2.Vec, rx, ry, tilt float64, large, ccw bool) (Curve,
 		return Arc{e.Center, e.A, e.Start, e.Sweep, e.pins}, nil
 	}
 	return e, nil
+}
+
+// reachRounding: radii that reach only just, or miss by rounding, mean a half
+// ellipse. The square root of 1 − reach² would turn an error of 1e-16 there
+// into one of 1e-8.
+const reachRounding = 2e-15
+
+// halfChord takes half the way between two points to where the ellipse is the
+// unit circle.
+func (e EllipticArc) halfChord(from, to r2.Vec) r2.Vec {
+	half := e.unturn(r2.Vec{X: (to.X - from.X) / 2, Y: (to.Y - from.Y) / 2})
+	return r2.Vec{X: half.X / e.A, Y: half.Y / e.B}
 }
