@@ -80,16 +80,17 @@ func oneNotchValues(load Load, n edgeNotch) []Value {
 
 func edgeNotchHints(load Load, dims Dims, opt Options) []Value {
 	n, angle := edgeNotchOf(dims), dims["angle"]
-	open := opened(n.h(), n.r, angle)
-	gross := load == Tension && opt.grossLine()
+	if load == Bending {
+		return nil // published for every angle
+	}
 	values := oneNotchValues(load, n)
-	if gross {
+	if opt.grossLine() {
 		values = grossLineValues(n)
 	}
-	if open {
+	switch {
+	case opened(n.h(), n.r, angle):
 		return asHints(values, uNotchInstead, uNotchUpper)
-	}
-	if gross {
+	case opt.grossLine():
 		return values
 	}
 	return nil

@@ -31,7 +31,7 @@ func barNotch() *Family {
 		},
 		hints: func(load Load, dims Dims, _ Options) []Value {
 			s, angle := stepOf(dims), dims["angle"]
-			if !opened(s.h(), s.r, angle) {
+			if !opened(s.h(), s.r, angle) || load == Tension && roarkTwoV(s, angle).InRange {
 				return nil
 			}
 			return asHints(twoNotchValues(load, s), uNotchInstead, uNotchUpper)

@@ -1,8 +1,8 @@
 package scf
 
 // Roark, 7th ed., Table 17.1 case 1: flat bar, two opposite U notches. 1a is
-// tension, 1b bending in the plane, 1c bending out of it. Case 2 (two V
-// notches) starts from these, see leven_frocht.go.
+// tension, 1b bending in the plane; 1c, bending out of the plane, has no family
+// here. Case 2 (two V notches) starts from these, see leven_frocht.go.
 
 var roarkTwoNotchesTension = cubicCase{
 	id: "roark-7-1", source: roark7 + "case 1a (tension)", sureness: Sure,
