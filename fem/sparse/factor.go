@@ -88,7 +88,8 @@ func (n *numeric) front(worker int, i int32, share sharing) {
 		a.addChild(n.handed(worker, c), len(child.border), child.toward)
 	}
 	w.judges[i] = newJudge(pivotLimit(p.unknowns))
-	m := panel{values: a.panel, pivots: k, first: f.first, diagonal: a.diagonal}
+	m := &h.panel
+	*m = panel{values: a.panel, pivots: k, first: f.first, diagonal: a.diagonal}
 	m.eliminate(tiles(k)+tiles(r), &w.judges[i], share)
 	m.complete(a.schur, tiles(r), share)
 	copy(handed[schurLen(r):], a.diagonal[k:])

@@ -18,6 +18,8 @@ type front struct {
 	factor int // where its columns begin in the factor
 	handed int // where its Schur complement begins in a worker's stack
 	flops  float64
+	start  int32   // first front of the subtree
+	work   float64 // of the subtree, for scheduling
 }
 
 // A run is a stretch of consecutive rows that stay consecutive on the way from
@@ -83,6 +85,7 @@ func (p *Plan) layOut() {
 		p.entries += int64(k)*int64(k+1)/2 + int64(k)*int64(r)
 		f.flops = eliminationFlops(k, r)
 		p.flops += f.flops
+		p.addWork(int32(i))
 		for b, c := range f.children {
 			at := place{p.fronts[c].depth, int32(b)}
 			size[at] = max(size[at], handedLen(len(p.fronts[c].border)))
@@ -104,5 +107,22 @@ func (p *Plan) layOut() {
 	}
 	for e := range int32(p.pattern.Elements()) {
 		p.listed = max(p.listed, len(p.pattern.list(e)))
+	}
+}
+
+// fillFlops is a guess at what filling one number of an element matrix costs.
+const fillFlops = 50
+
+// addWork sets where the subtree of front i begins and estimates its work.
+func (p *Plan) addWork(i int32) {
+	f := &p.fronts[i]
+	f.start, f.work = i, f.flops
+	for _, e := range f.elements {
+		n := float64(len(p.pattern.list(e)))
+		f.work += fillFlops * n * n
+	}
+	for _, c := range f.children {
+		f.start = min(f.start, p.fronts[c].start)
+		f.work += p.fronts[c].work
 	}
 }

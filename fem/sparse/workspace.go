@@ -18,6 +18,7 @@ type hand struct {
 	stack    []float64 // Schur complements within a subtree
 	matrix   []float64 // an element matrix
 	diagonal []float64
+	panel    panel
 }
 
 // prepare makes room for a factorisation of p.
