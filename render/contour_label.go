@@ -1,0 +1,127 @@
+package render
+
+import (
+	"math"
+	"strconv"
+)
+
+// A contour is the line, or the lines, of one level in a view.
+type contour struct {
+	level float64
+	lines [][]point
+	gaps  []box // where labels stand
+}
+
+// trace finds the contours of a raster.
+func trace(r *raster, list []float64) []contour {
+	cs := make([]contour, len(list))
+	concurrently(len(list), func() func(i int) {
+		return func(i int) { cs[i] = contour{level: list[i], lines: contours(r, list[i])} }
+	})
+	return cs
+}
+
+// label finds places for the levels of contours, highest first, which are the
+// ones in the narrowest places. A label stands on its line, upright, where all of it
+// is on the material and clear of other lettering; a line without such a place
+// has none. most is the number of labels a level.
+func (s *sheet) label(r *raster, cs []contour, top float64, most int) {
+	for i := len(cs) - 1; i >= 0; i-- {
+		c := &cs[i]
+		text := levelText(c.level)
+		for _, line := range longestFirst(c.lines) {
+			if len(c.gaps) == most {
+				break
+			}
+			if b, ok := s.spot(r, line, text); ok {
+				s.take(b)
+				c.gaps = append(c.gaps, b)
+			}
+		}
+	}
+}
+
+// spot finds a place for a label on a line, the middle of the line preferred.
+func (s *sheet) spot(r *raster, line []point, text string) (box, bool) {
+	length := lengthOf(line)
+	if length < s.u(90) {
+		return box{}, false
+	}
+	const places = 24
+	for k := range places {
+		// 1/2, then ever further to both sides of it.
+		t := 0.5 + float64((k+1)/2)*math.Pow(-1, float64(k))*0.92/places
+		b := s.place(pointAlong(line, t*length), 0.5, 0.5, text, small)
+		if s.free(b.grown(s.u(5))) && r.covers(b.grown(s.u(3))) {
+			return b, true
+		}
+	}
+	return box{}, false
+}
+
+// contours strokes the lines, and letters the labels in the gaps left for them.
+func (s *sheet) contours(cs []contour, top float64) {
+	for _, c := range cs {
+		s.pen(over(c.level/top), 1)
+		for _, line := range c.lines {
+			s.gapped(line, c.gaps)
+		}
+		s.dc.Stroke()
+		for _, b := range c.gaps {
+			s.text(point{b.X0, b.Y0}, 0, 0, levelText(c.level), small, over(c.level/top))
+		}
+	}
+}
+
+func (s *sheet) gapped(line []point, gaps []box) {
+	down := false
+	for _, p := range line {
+		hidden := false
+		for _, g := range gaps {
+			hidden = hidden || g.grown(s.u(1)).has(p)
+		}
+		switch {
+		case hidden:
+			down = false
+		case down:
+			s.dc.LineTo(p.X, p.Y)
+		default:
+			s.dc.MoveTo(p.X, p.Y)
+			down = true
+		}
+	}
+}
+
+func levelText(level float64) string {
+	return strconv.FormatFloat(math.Round(level*1e6)/1e6, 'g', -1, 64)
+}
+
+func longestFirst(lines [][]point) [][]point {
+	sorted := append([][]point(nil), lines...)
+	for i := 1; i < len(sorted); i++ { // few and nearly in order: insertion is enough
+		for j := i; j > 0 && lengthOf(sorted[j]) > lengthOf(sorted[j-1]); j-- {
+			sorted[j], sorted[j-1] = sorted[j-1], sorted[j]
+		}
+	}
+	return sorted
+}
+
+func lengthOf(line []point) float64 {
+	sum := 0.0
+	for i := 1; i < len(line); i++ {
+		sum += math.Hypot(line[i].X-line[i-1].X, line[i].Y-line[i-1].Y)
+	}
+	return sum
+}
+
+// pointAlong gives the point at a distance along a line.
+func pointAlong(line []point, distance float64) point {
+	for i := 1; i < len(line); i++ {
+		step := math.Hypot(line[i].X-line[i-1].X, line[i].Y-line[i-1].Y)
+		if distance <= step && step > 0 {
+			return between(line[i-1], line[i], distance/step)
+		}
+		distance -= step
+	}
+	return line[len(line)-1]
+}

@@ -1,0 +1,117 @@
+package render
+
+import (
+	"math"
+
+	"gonum.org/v1/gonum/spatial/r2"
+
+	"notchproof/verify/specimen"
+)
+
+// extent is the part of the x axis that a notch takes up, and the half height
+// (or the range of y) of the whole part.
+type extent struct {
+	notch0, notch1 float64
+	low, high      float64
+}
+
+func extentOf(part *specimen.Part) extent {
+	e := extent{math.Inf(1), math.Inf(-1), math.Inf(1), math.Inf(-1)}
+	sides := part.Region.Sides()
+	for _, side := range sides {
+		b := side.Curve.Bounds()
+		e.low, e.high = math.Min(e.low, b.Min.Y), math.Max(e.high, b.Max.Y)
+	}
+	for _, i := range part.Notch {
+		b := sides[i].Curve.Bounds()
+		e.notch0, e.notch1 = math.Min(e.notch0, b.Min.X), math.Max(e.notch1, b.Max.X)
+	}
+	if part.Half {
+		e.low = -e.high
+	}
+	return e
+}
+
+// mainView fits the whole part into an area of the sheet. Its plain ends are
+// broken off so that what is shown on either side of the notch is between
+// least and most heights long; left and right are where.
+func mainView(part *specimen.Part, area box, scale float64) (v *view, left, right float64) {
+	const least, most = 0.75, 1.7
+	e := extentOf(part)
+	height := e.high - e.low
+	notch := e.notch1 - e.notch0
+	pixels := math.Min(area.height()/height, area.width()/(notch+2*least*height))
+	reach := math.Min(most*height, (area.width()/pixels-notch)/2)
+	left, right = e.notch0-reach, e.notch1+reach
+	inside := 2 * breakSwing * scale / pixels // a break lies inside the plain stretch
+	for _, p := range part.Plain {
+		if p.To < p.From {
+			left = math.Max(left, p.To+inside)
+		} else {
+			right = math.Min(right, p.To-inside)
+		}
+	}
+	middle := r2.Vec{X: (left + right) / 2, Y: (e.low + e.high) / 2}
+	x, y := area.middle()
+	v = &view{scale: pixels, mirror: part.Half}
+	// The axis lies between two rows of pixels, so that the mirror image of a
+	// row is a row.
+	v.origin = point{x - pixels*middle.X, math.Round(y + pixels*middle.Y)}
+	v.window = broken(v.at(r2.Vec{X: left, Y: e.high}), v.at(r2.Vec{X: right, Y: e.low}), scale)
+	return v, left, right
+}
+
+// broken is the window of a view whose left and right ends are break lines. It
+// is higher than the part by the room that quills need.
+func broken(topLeft, bottomRight point, scale float64) []point {
+	spare := 3 * scale
+	top, bottom := topLeft.Y-spare, bottomRight.Y+spare
+	left, right := waves(topLeft.X, top, bottom, scale), waves(bottomRight.X, bottom, top, scale)
+	return append(left, right...)
+}
+
+// breakSwing is how far a break line swings out to either side, in units.
+const breakSwing = 5
+
+// waves is a break line: a free-hand line with a wave about every 90 units.
+func waves(x, from, to, scale float64) []point {
+	length := math.Abs(to - from)
+	n := max(16, int(length/(3*scale)))
+	count := math.Max(1, math.Round(length/(90*scale)))
+	ps := make([]point, n+1)
+	for i := range ps {
+		t := float64(i) / float64(n)
+		y := from + t*(to-from)
+		// Counted from the top, so that both ends break in the same rhythm.
+		phase := 2 * math.Pi * count * (y - math.Min(from, to)) / length
+		ps[i] = point{x + breakSwing*scale*math.Sin(phase), y}
+	}
+	return ps
+}
+
+// breaks strokes the break lines where there is material: the material's
+// silhouette inside a window a little wider than the view's own, outside of it
+// nothing.
+func (s *sheet) breaks(v *view, part *specimen.Part, left, right float64) {
+	high := func(x float64) (low, top float64) {
+		for _, p := range part.Plain {
+			if (p.To < p.From) == (x == left) {
+				low, top = p.Low, p.High
+			}
+		}
+		if part.Half {
+			low = -top
+		}
+		return low, top
+	}
+	b := v.bounds()
+	s.pen(ink, narrow)
+	for _, x := range [2]float64{left, right} {
+		low, top := high(x)
+		y0, y1 := v.at(r2.Vec{X: x, Y: top}).Y, v.at(r2.Vec{X: x, Y: low}).Y
+		for _, piece := range clipLine(waves(v.at(r2.Vec{X: x}).X, b.Y0, b.Y1, s.scale), box{b.X0 - 1, y0, b.X1 + 1, y1}) {
+			s.polyline(piece)
+		}
+	}
+	s.dc.Stroke()
+}

@@ -1,0 +1,127 @@
+package render
+
+import (
+	"math"
+
+	"gonum.org/v1/gonum/spatial/r2"
+
+	"notchproof/mesh/outline"
+	"notchproof/scf"
+	"notchproof/verify/specimen"
+)
+
+// How a dimension is drawn.
+type placementKind int
+
+const (
+	acrossLeft   placementKind = iota + 1 // extension lines to the left, dimension line beside the part
+	acrossRight                           // to the right
+	acrossInside                          // the dimension line stands between the two points
+	alongBelow                            // extension lines downwards, below the part
+	leaderTo                              // an arrow at the first point, coming from the second
+)
+
+// A placement says where and how one dimension of a family is drawn. At gives
+// two points of the whole part; for a leader the point pointed at and one that
+// it is seen from. Skip tells that the dimension is not drawn for these sizes;
+// Text is the lettering, nil: the value, with Ø for the diameters of shafts.
+type placement struct {
+	Dim  string
+	Kind placementKind
+	At   func(g geometry) (a, b r2.Vec)
+	Text func(d scf.Dims) string
+	Skip func(d scf.Dims) bool
+}
+
+// geometry is what a placement is found from.
+type geometry struct {
+	d           scf.Dims
+	part        *specimen.Part
+	left, right float64 // where the drawn part is broken off
+}
+
+// side gives the curve of the first side with a name.
+func (g geometry) side(name string) outline.Curve {
+	for _, s := range g.part.Region.Sides() {
+		if s.Name == name {
+			return s.Curve
+		}
+	}
+	panic("render: placement names a side that the family does not have")
+}
+
+// placements lists the dimensions of each family in the order of drawing.
+func placements() map[string][]placement {
+	shoulder := shoulderPlacements()
+	return map[string][]placement{
+		"bar-shoulder":   shoulder,
+		"shaft-shoulder": shoulder,
+	}
+}
+
+// centerOf gives the centre of a circular or elliptic arc.
+func centerOf(c outline.Curve) (r2.Vec, bool) {
+	switch a := c.(type) {
+	case outline.Arc:
+		return a.Center, true
+	case outline.EllipticArc:
+		return a.Center, true
+	}
+	return r2.Vec{}, false
+}
+
+// radiusBelow points at the middle of an arc from the side of its centre, in
+// the lower half, which the quills leave free.
+func radiusBelow(name string) func(g geometry) (a, b r2.Vec) {
+	return func(g geometry) (a, b r2.Vec) {
+		arc := g.side(name)
+		tip := arc.At(0.5)
+		center, ok := centerOf(arc)
+		if !ok {
+			center = r2.Add(tip, r2.Vec{X: 1, Y: 1})
+		}
+		return mirrored(tip), mirrored(center)
+	}
+}
+
+// annotate draws all dimensions of a part in a view.
+func (s *sheet) annotate(v *view, part *specimen.Part, left, right float64) {
+	g := geometry{part.Dims, part, left, right}
+	rows := 0
+	for _, p := range placements()[part.Family.Name] {
+		if p.Skip != nil && p.Skip(part.Dims) {
+			continue
+		}
+		a, b := p.At(g)
+		text := lettered(p, part)
+		switch p.Kind {
+		case acrossLeft:
+			s.across(v, a, b, v.bounds().X0-s.u(dimensionOff), text)
+		case acrossRight:
+			s.across(v, a, b, v.bounds().X1+s.u(dimensionOff), text)
+		case acrossInside:
+			s.across(v, a, b, v.at(a).X, text)
+		case alongBelow:
+			s.along(v, a, b, v.bounds().Y1+s.u(30+34*float64(rows)), text)
+			rows++
+		case leaderTo:
+			p, q := v.at(a), v.at(b)
+			l := math.Hypot(q.X-p.X, q.Y-p.Y)
+			s.leader(p, point{(q.X - p.X) / l, (q.Y - p.Y) / l}, text)
+		}
+	}
+}
+
+func lettered(p placement, part *specimen.Part) string {
+	if p.Text != nil {
+		return p.Text(part.Dims)
+	}
+	text := plain(part.Dims[p.Dim])
+	switch {
+	case p.Kind == leaderTo:
+		return "R" + text
+	case p.Kind == alongBelow || part.Family.Kind == scf.Bar:
+		return text
+	}
+	return "Ø" + text
+}

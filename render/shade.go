@@ -1,0 +1,113 @@
+package render
+
+import (
+	"image"
+	"math"
+	"sort"
+
+	"gonum.org/v1/gonum/spatial/r2"
+)
+
+// shade reads a field at the centre of every pixel of a view's window. A
+// triangle that is bent is cut into flat facets first, a few pixels wide each,
+// in which the reference coordinates are taken as linear: with the bend of a
+// whole triangle below its own size, facets of 4 pixels misplace a value by
+// less than a tenth of a pixel. The stress itself is evaluated from the
+// triangle's polynomial at every pixel.
+func (f *field) shade(v *view) *raster {
+	r := newRaster(v.pixels())
+	facets := f.facets(v, r.area)
+	axis := r.area.Max.Y // rows from here on show the mirror image
+	if v.mirror {
+		axis = int(math.Round(v.origin.Y))
+	}
+	const band = 16
+	bands := (r.area.Dy() + band - 1) / band
+	concurrently(bands, func() func(i int) {
+		p := painter{field: f, raster: r, axis: axis, phi: make([]float64, f.element.Count)}
+		return func(i int) {
+			y := r.area.Min.Y + i*band
+			p.rows(facets, v, y, min(y+band, r.area.Max.Y))
+		}
+	})
+	return r
+}
+
+// A facet is a flat triangle on the sheet with the reference coordinates of
+// its corners.
+type facet struct {
+	cell     int
+	corner   [3]point
+	xi, eta  [3]float64
+	low, top float64 // range of y
+}
+
+// facets lists, from top to bottom, what may show in an area: of the part
+// itself, not of its mirror image.
+func (f *field) facets(v *view, area image.Rectangle) []facet {
+	reach := box{float64(area.Min.X), float64(area.Min.Y), float64(area.Max.X), float64(area.Max.Y)}
+	if v.mirror { // what shows below the axis is the mirror image of what is above
+		reach.Y0 = math.Min(reach.Y0, 2*v.origin.Y-reach.Y1)
+	}
+	lists := make([][]facet, len(f.cells))
+	concurrently(len(f.cells), func() func(i int) {
+		phi := make([]float64, f.element.Count)
+		return func(i int) { lists[i] = f.cut(v, i, reach, phi) }
+	})
+	var all []facet
+	for _, l := range lists {
+		all = append(all, l...)
+	}
+	sort.SliceStable(all, func(i, j int) bool { return all[i].top < all[j].top })
+	return all
+}
+
+// cut gives the facets of one triangle that meet an area.
+func (f *field) cut(v *view, i int, reach box, phi []float64) []facet {
+	c := &f.cells[i]
+	hull := box{math.Inf(1), math.Inf(1), math.Inf(-1), math.Inf(-1)}
+	for _, n := range c.nodes {
+		p := v.at(n)
+		hull = box{math.Min(hull.X0, p.X), math.Min(hull.Y0, p.Y), math.Max(hull.X1, p.X), math.Max(hull.Y1, p.Y)}
+	}
+	size := math.Max(hull.width(), hull.height())
+	// Nodes of a bent triangle hold its edges to within a part of its size.
+	if !hull.grown(size / 4).meets(reach) {
+		return nil
+	}
+	n := 1
+	if !c.straight {
+		const wide, most = 4, 256
+		n = max(1, min(most, int(math.Ceil(size/wide))))
+	}
+	grid := func(a, b int) (p point, xi, eta float64) {
+		xi, eta = float64(a)/float64(n), float64(b)/float64(n)
+		f.element.Basis(xi, eta, phi)
+		var at r2.Vec
+		for k, w := range phi {
+			at = r2.Add(at, r2.Scale(w, c.nodes[k]))
+		}
+		return v.at(at), xi, eta
+	}
+	var list []facet
+	add := func(corners ...[2]int) {
+		t := facet{cell: i}
+		for k, g := range corners {
+			t.corner[k], t.xi[k], t.eta[k] = grid(g[0], g[1])
+		}
+		ys := [3]float64{t.corner[0].Y, t.corner[1].Y, t.corner[2].Y}
+		t.top, t.low = math.Min(ys[0], math.Min(ys[1], ys[2])), math.Max(ys[0], math.Max(ys[1], ys[2]))
+		if t.top <= reach.Y1 && t.low >= reach.Y0 {
+			list = append(list, t)
+		}
+	}
+	for b := range n {
+		for a := range n - b {
+			add([2]int{a, b}, [2]int{a + 1, b}, [2]int{a, b + 1})
+			if a+b+1 < n {
+				add([2]int{a + 1, b}, [2]int{a + 1, b + 1}, [2]int{a, b + 1})
+			}
+		}
+	}
+	return list
+}

@@ -1,0 +1,130 @@
+package render
+
+import (
+	"image"
+	"image/color"
+	"image/draw"
+	"math"
+
+	"github.com/fogleman/gg"
+	"golang.org/x/image/font"
+)
+
+// Inks. The one accent stands for what was measured at the surface; nothing
+// hangs on its hue, it is as dark as ink when printed grey.
+var (
+	paper      = color.NRGBA{255, 255, 255, 255}
+	ink        = color.NRGBA{22, 26, 34, 255}
+	grey       = color.NRGBA{104, 110, 120, 255}
+	pale       = color.NRGBA{198, 203, 210, 255}
+	hatch      = color.NRGBA{232, 234, 238, 255} // material without stresses
+	elementInk = color.NRGBA{20, 24, 32, 110}
+	accent     = color.NRGBA{168, 32, 38, 255}
+)
+
+// Line widths in units: the wide one for edges of the part, the others for
+// everything that explains it (the ratio 1 : 2 of wide and narrow lines is
+// common practice on drawings).
+const (
+	wide     = 2.4
+	narrow   = 1.2
+	hairline = 0.7
+)
+
+// A sheet is the paper being drawn on, with a record of the places taken.
+type sheet struct {
+	dc    *gg.Context
+	im    *image.RGBA
+	scale float64 // pixels per unit
+	frame box
+	faces map[lettering]font.Face
+	taken []box   // places that lettering keeps clear of
+	texts []label // all lettering, in order
+}
+
+// A label is a piece of lettering that stands on a sheet.
+type label struct {
+	Text string
+	Type lettering
+	Box  box
+}
+
+const (
+	defaultWidth = 1600
+	leastWidth   = 200
+	frameMargin  = 26
+)
+
+// newSheet gives an empty sheet with its frame. Width is in pixels, 0 for the
+// default; height is in units of the sheet.
+func newSheet(width int, height float64) *sheet {
+	if width == 0 {
+		width = defaultWidth
+	}
+	width = max(width, leastWidth)
+	scale := float64(width) / defaultWidth
+	im := image.NewRGBA(image.Rect(0, 0, width, int(math.Round(height*scale))))
+	draw.Draw(im, im.Bounds(), image.NewUniform(paper), image.Point{}, draw.Src)
+	s := &sheet{
+		dc: gg.NewContextForRGBA(im), im: im, scale: scale,
+		faces: make(map[lettering]font.Face),
+	}
+	size := im.Bounds().Size()
+	s.frame = box{0, 0, float64(size.X), float64(size.Y)}.grown(-s.u(frameMargin))
+	s.rectangle(s.frame, wide, ink)
+	return s
+}
+
+// landscape is the height in units of a sheet 1 : √2.
+var landscape = math.Round(defaultWidth / math.Sqrt2)
+
+// u gives units in pixels.
+func (s *sheet) u(units float64) float64 { return units * s.scale }
+
+// pen sets the colour and the width of strokes, in units.
+func (s *sheet) pen(c color.Color, width float64) {
+	s.dc.SetColor(c)
+	s.dc.SetLineWidth(s.u(width))
+	s.dc.SetDash()
+}
+
+// chain sets the long-dash short-dash pattern of centre lines.
+func (s *sheet) chain() { s.dc.SetDash(s.u(26), s.u(5), s.u(4), s.u(5)) }
+
+// dashed sets a plain dash pattern.
+func (s *sheet) dashed() { s.dc.SetDash(s.u(7), s.u(5)) }
+
+func (s *sheet) line(a, b point) {
+	s.dc.DrawLine(a.X, a.Y, b.X, b.Y)
+	s.dc.Stroke()
+}
+
+func (s *sheet) rectangle(b box, width float64, c color.Color) {
+	s.pen(c, width)
+	s.dc.DrawRectangle(b.X0, b.Y0, b.width(), b.height())
+	s.dc.Stroke()
+}
+
+// polyline appends points to the current path.
+func (s *sheet) polyline(ps []point) {
+	for i, p := range ps {
+		if i == 0 {
+			s.dc.MoveTo(p.X, p.Y)
+		} else {
+			s.dc.LineTo(p.X, p.Y)
+		}
+	}
+}
+
+// arrow fills a slender arrowhead with its tip at p, pointing along dir (a unit
+// vector).
+func (s *sheet) arrow(p point, dir point, c color.Color) {
+	length, half := s.u(15), s.u(3.1)
+	base := p.toward(dir, -length)
+	s.dc.SetColor(c)
+	s.dc.MoveTo(p.X, p.Y)
+	s.dc.LineTo(base.X-dir.Y*half, base.Y+dir.X*half)
+	s.dc.LineTo(base.X+dir.Y*half, base.Y-dir.X*half)
+	s.dc.ClosePath()
+	s.dc.Fill()
+}

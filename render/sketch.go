@@ -1,0 +1,53 @@
+package render
+
+import (
+	"image"
+
+	"notchproof/verify/specimen"
+)
+
+// SketchOptions say how a sketch is drawn. The zero value is the default.
+type SketchOptions struct {
+	Width int // pixels; 0: 1600
+}
+
+// Sketch draws a part with its dimensions and without stresses, so that a
+// reader sees what the dimensions of a family mean. Lengths stand as they are
+// in the part's unit.
+func Sketch(part *specimen.Part, o SketchOptions) image.Image {
+	const height = 760
+	s := newSheet(o.Width, height)
+	v, left, right := mainView(part, s.area(150, 90, 1450, 610), s.scale)
+	s.within(v)
+	s.dc.SetColor(hatch)
+	for _, loop := range v.loops(part) {
+		s.polyline(loop)
+		s.dc.ClosePath()
+	}
+	s.dc.Fill()
+	s.edges(v, part, wide, ink)
+	s.dc.ResetClip()
+	s.breaks(v, part, left, right)
+	if part.Half {
+		s.symmetry(v, 18)
+	}
+	s.annotate(v, part, left, right)
+	s.text(point{s.u(50), s.u(height - 62)}, 0, 0.5, part.Family.Name, head, ink)
+	s.text(point{s.u(50), s.u(height - 62 + 3)}.plus(s.measure(part.Family.Name, head)+s.u(18), 0), 0, 0.5, part.Family.Title, normal, grey)
+	if unit := unitText(part.Unit); unit != "" {
+		s.text(point{s.u(1550), s.u(height - 62)}, 1, 0.5, unit, normal, grey)
+	}
+	return s.im
+}
+
+func unitText(unit string) string {
+	if unit == "" {
+		return "all lengths in one unnamed unit"
+	}
+	return "all lengths in " + unit
+}
+
+// area gives a rectangle of the sheet from units.
+func (s *sheet) area(x0, y0, x1, y1 float64) box {
+	return box{s.u(x0), s.u(y0), s.u(x1), s.u(y1)}
+}

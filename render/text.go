@@ -1,0 +1,97 @@
+package render
+
+import (
+	"image/color"
+	"strings"
+
+	"golang.org/x/image/font"
+)
+
+// baseline is where letters stand in a line of text, as a fraction of its
+// height from the top; what is below holds the descenders.
+const baseline = 0.77
+
+// face gives the glyphs of a lettering at the sheet's scale.
+func (s *sheet) face(l lettering) font.Face {
+	f, ok := s.faces[l]
+	if !ok {
+		f = l.face(s.scale)
+		s.faces[l] = f
+	}
+	return f
+}
+
+// measure gives the width of a line of text in pixels.
+func (s *sheet) measure(text string, l lettering) float64 {
+	return float64(font.MeasureString(s.face(l), text)) / 64
+}
+
+// place gives the box of a line of text: (ax, ay) is the point of the box,
+// from 0, 0 (top left) to 1, 1 (bottom right), that comes to lie at p.
+func (s *sheet) place(p point, ax, ay float64, text string, l lettering) box {
+	w, h := s.measure(text, l), s.u(l.Size)
+	x, y := p.X-ax*w, p.Y-ay*h
+	return box{x, y, x + w, y + h}
+}
+
+// text letters a line and takes its place.
+func (s *sheet) text(p point, ax, ay float64, text string, l lettering, c color.Color) box {
+	b := s.place(p, ax, ay, text, l)
+	s.dc.SetFontFace(s.face(l))
+	s.dc.SetColor(c)
+	s.dc.DrawString(text, b.X0, b.Y0+baseline*b.height())
+	s.texts = append(s.texts, label{text, l, b})
+	s.take(b)
+	return b
+}
+
+// take keeps later lettering away from a place.
+func (s *sheet) take(b box) { s.taken = append(s.taken, b) }
+
+// free tells whether a place is inside the frame and touches nothing taken.
+func (s *sheet) free(b box) bool {
+	if !s.frame.holds(b) {
+		return false
+	}
+	for _, t := range s.taken {
+		if t.meets(b) {
+			return false
+		}
+	}
+	return true
+}
+
+// fit cuts a text to a width in pixels, with an ellipsis where something is
+// left out.
+func (s *sheet) fit(text string, l lettering, width float64) string {
+	if s.measure(text, l) <= width {
+		return text
+	}
+	runes := []rune(text)
+	for n := len(runes) - 1; n > 0; n-- {
+		cut := strings.TrimRight(string(runes[:n]), " ,;:") + "…"
+		if s.measure(cut, l) <= width {
+			return cut
+		}
+	}
+	return ""
+}
+
+// wrap breaks a text at spaces into at most n lines of a width in pixels; what
+// does not fit is left out, which an ellipsis shows.
+func (s *sheet) wrap(text string, l lettering, width float64, n int) []string {
+	words := strings.Fields(text)
+	var lines []string
+	for len(words) > 0 && len(lines) < n {
+		take := 1
+		for take < len(words) && s.measure(strings.Join(words[:take+1], " "), l) <= width {
+			take++
+		}
+		if len(lines) == n-1 {
+			take = len(words)
+		}
+		lines = append(lines, s.fit(strings.Join(words[:take], " "), l, width))
+		words = words[take:]
+	}
+	return lines
+}
