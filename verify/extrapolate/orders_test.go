@@ -263,3 +263,10 @@ func TestOrdersPanics(t *testing.T) {
 		}()
 	}
 }
+
+func BenchmarkOrders(b *testing.B) {
+	orders, values := run(2, 7, func(p float64) float64 { return 2 + math.Pow(-0.3, p) + 0.1*math.Pow(0.5, p) })
+	for b.Loop() {
+		Orders(orders, values)
+	}
+}

@@ -36,7 +36,7 @@ const (
 func powerBetween(p []float64, d1, d2 float64) float64 {
 	want := math.Log(d2 / d1)
 	low, high := shallowest, steepest
-	for range 60 {
+	for range 45 { // to 6e-12
 		if middle := low + (high-low)/2; logRatio(p, middle) > want {
 			low = middle
 		} else {
