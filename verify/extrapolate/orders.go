@@ -46,7 +46,9 @@ import "fmt"
 // is shown with its bar but may not be judged. Stagnating: the envelope no
 // longer shrinks but has come down at least tenfold before, the scatter is
 // the bar. Three rungs show one contraction and confirm none: their tail is not
-// taken below the last difference, nor below a tenth of the first. Factor 3.
+// taken below the last difference, nor below a tenth of the first. Factor 3. From four rungs on the bar
+// holds at least 99 % of true errors on the families of TestOrdersCalibrated but
+// the last; with three it holds about 95 % on mixtures: give four.
 //
 // It panics when the lengths differ or the orders do not grow from at least 1.
 func Orders(orders []int, values []float64) Estimate {
