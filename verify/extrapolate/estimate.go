@@ -46,8 +46,8 @@ func nothing(s Status, note string) Estimate {
 // rounding is the relative accuracy that is not looked beneath: 2⁻³⁹ ≈ 1.8e-12.
 // A linear system solved in double precision keeps about condition × 2⁻⁵³ of
 // relative error (Higham, Accuracy and Stability of Numerical Algorithms, 2nd
-// ed. 2002, section 7.1); the mildest elastic stiffness matrices of interest
-// have a condition of 10⁴, so no difference below that is information. Worse
+// ed. 2002, ch. 7, cited from memory); the mildest elastic stiffness matrices of interest
+// have a condition of 10⁴ (common practice), so no difference below that is information. Worse
 // conditioned ladders show their scatter in the differences themselves.
 const rounding = 1.0 / (1 << 39)
 

@@ -27,7 +27,7 @@ type Study struct {
 	Warnings   []string
 }
 
-// Safety factors of the grid convergence index (Roache 1998, section 5.9):
+// Safety factors of the grid convergence index (Roache 1994, 1998):
 // with an order observed on three or more rungs, and with an order taken on
 // trust from two.
 const (
