@@ -17,11 +17,17 @@ type Rule struct {
 	Weights []float64
 }
 
-// Triangle returns a rule that is exact to a degree between 0 and MaxDegree.
-// The caller owns it.
+// Triangle returns a rule that is exact to a degree between 0 and MaxDegree:
+// the fully symmetric rule of the fewest points known to this package, or above
+// their degrees a product rule. The caller owns it.
 func Triangle(degree int) Rule {
 	if degree < 0 || degree > MaxDegree {
 		panic("cubature: degree out of range")
+	}
+	for i := range symmetric {
+		if symmetric[i].degree >= degree {
+			return symmetric[i].rule()
+		}
 	}
 	return conical(degree/2 + 1)
 }

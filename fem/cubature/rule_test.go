@@ -48,6 +48,40 @@ func TestTriangleRules(t *testing.T) {
 	}
 }
 
+// Symmetric rules are carried onto themselves, weights included, by every
+// exchange of corners.
+func TestSymmetry(t *testing.T) {
+	for i := range symmetric {
+		r := symmetric[i].rule()
+		for j, x := range r.Points {
+			l := [3]float64{1 - x[0] - x[1], x[0], x[1]}
+			for _, y := range [][2]float64{{l[2], l[1]}, {l[0], l[1]}, {l[2], l[0]}} {
+				found := false
+				for k, z := range r.Points {
+					if math.Hypot(y[0]-z[0], y[1]-z[1]) < 4e-16 && r.Weights[k] == r.Weights[j] {
+						found = true
+					}
+				}
+				if !found {
+					t.Errorf("degree %d: point %v has no image at %v", r.Degree, x, y)
+				}
+			}
+		}
+	}
+}
+
+// The table's sizes are the point of it. (Degree 3 has no symmetric rule with
+// positive weights of fewer than six points; a product rule has four.)
+func TestSymmetricRulesAreSmall(t *testing.T) {
+	for degree := 1; degree <= symmetric[len(symmetric)-1].degree; degree++ {
+		n := len(Triangle(degree).Points)
+		product := (degree/2 + 1) * (degree/2 + 1)
+		if n > product && degree != 3 || degree >= 8 && 5*n > 4*product {
+			t.Errorf("degree %d: %d points, product rule %d", degree, n, product)
+		}
+	}
+}
+
 // The degree stated is the true one: one degree further some polynomial is
 // missed. Legendre products show it more clearly than monomials, whose
 // integrals shrink with the degree.
