@@ -88,8 +88,8 @@ func breaks(c Curve) []float64 {
 	case EllipticArc:
 		ts = append(ts, anglesInside(c.Start, c.Sweep, 0, math.Pi/2, math.Pi, -math.Pi/2)...)
 	case Bezier:
-		ts = append(ts, c.stationary(r2.Vec{X: 1})...)
-		ts = append(ts, c.stationary(r2.Vec{Y: 1})...)
+		ts = append(ts, c.stationary(axisX)...)
+		ts = append(ts, c.stationary(axisY)...)
 		ts = append(ts, c.inflections()...)
 		slices.Sort(ts)
 	default:

@@ -13,6 +13,8 @@ func dot(p, q r2.Vec) float64 { return float64(p.X*q.X) + float64(p.Y*q.Y) }
 
 func cross(p, q r2.Vec) float64 { return float64(p.X*q.Y) - float64(p.Y*q.X) }
 
+var axisX, axisY = r2.Vec{X: 1}, r2.Vec{Y: 1}
+
 // sincos gives sine and cosine of an angle in radians. Where one of them is no
 // larger than the rounding error of the angle itself, the angle is taken to
 // mean the multiple of 90° next to it: an arc that ends at math.Pi ends on the
@@ -64,7 +66,7 @@ func grow(b r2.Box, p r2.Vec) r2.Box {
 // runs along an axis.
 func boundsBy(c stationer) r2.Box {
 	b := boxOf(c.At(0), c.At(1))
-	for _, n := range [2]r2.Vec{{X: 1}, {Y: 1}} {
+	for _, n := range [2]r2.Vec{axisX, axisY} {
 		for _, t := range c.stationary(n) {
 			b = grow(b, c.At(t))
 		}
