@@ -2,7 +2,8 @@ package render
 
 import (
 	"math"
-	"strconv"
+
+	"notchproof/render/number"
 )
 
 // A contour is the line, or the lines, of one level in a view.
@@ -12,11 +13,17 @@ type contour struct {
 	gaps  []box // where labels stand
 }
 
-// trace finds the contours of a raster.
-func trace(r *raster, list []float64) []contour {
+// trace finds the contours of a raster. Where the field is so flat that the
+// next level would be farther away than faraway pixels, the place of a line
+// means nothing (it is the solution's last digits) and none is drawn.
+func trace(r *raster, list []float64, faraway float64) []contour {
 	cs := make([]contour, len(list))
+	if len(list) == 0 {
+		return cs
+	}
+	step := list[0] // the first level is one step above zero
 	concurrently(len(list), func() func(i int) {
-		return func(i int) { cs[i] = contour{level: list[i], lines: contours(r, list[i])} }
+		return func(i int) { cs[i] = contour{level: list[i], lines: contours(r, list[i], step/faraway)} }
 	})
 	return cs
 }
@@ -25,7 +32,7 @@ func trace(r *raster, list []float64) []contour {
 // ones in the narrowest places. A label stands on its line, upright, where all of it
 // is on the material and clear of other lettering; a line without such a place
 // has none. most is the number of labels a level.
-func (s *sheet) label(r *raster, cs []contour, top float64, most int) {
+func (s *sheet) label(v *view, r *raster, cs []contour, top float64, most int) {
 	for i := len(cs) - 1; i >= 0; i-- {
 		c := &cs[i]
 		text := levelText(c.level)
@@ -33,7 +40,7 @@ func (s *sheet) label(r *raster, cs []contour, top float64, most int) {
 			if len(c.gaps) == most {
 				break
 			}
-			if b, ok := s.spot(r, line, text); ok {
+			if b, ok := s.spot(v, r, line, text); ok {
 				s.take(b)
 				c.gaps = append(c.gaps, b)
 			}
@@ -42,7 +49,7 @@ func (s *sheet) label(r *raster, cs []contour, top float64, most int) {
 }
 
 // spot finds a place for a label on a line, the middle of the line preferred.
-func (s *sheet) spot(r *raster, line []point, text string) (box, bool) {
+func (s *sheet) spot(v *view, r *raster, line []point, text string) (box, bool) {
 	length := lengthOf(line)
 	if length < s.u(90) {
 		return box{}, false
@@ -52,7 +59,7 @@ func (s *sheet) spot(r *raster, line []point, text string) (box, bool) {
 		// 1/2, then ever further to both sides of it.
 		t := 0.5 + float64((k+1)/2)*math.Pow(-1, float64(k))*0.92/places
 		b := s.place(pointAlong(line, t*length), 0.5, 0.5, text, small)
-		if s.free(b.grown(s.u(5))) && r.covers(b.grown(s.u(3))) {
+		if s.free(b.grown(s.u(5))) && v.shows(b.grown(s.u(3))) && r.covers(b.grown(s.u(3))) {
 			return b, true
 		}
 	}
@@ -92,9 +99,7 @@ func (s *sheet) gapped(line []point, gaps []box) {
 	}
 }
 
-func levelText(level float64) string {
-	return strconv.FormatFloat(math.Round(level*1e6)/1e6, 'g', -1, 64)
-}
+func levelText(level float64) string { return number.Compact(level, 4) }
 
 func longestFirst(lines [][]point) [][]point {
 	sorted := append([][]point(nil), lines...)

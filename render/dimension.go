@@ -2,7 +2,6 @@ package render
 
 import (
 	"math"
-	"strconv"
 
 	"gonum.org/v1/gonum/spatial/r2"
 )
@@ -118,9 +117,4 @@ func (s *sheet) value(center point, text string) {
 	s.dc.DrawRectangle(b.X0, b.Y0, b.width(), b.height())
 	s.dc.Fill()
 	s.text(center, 0.5, 0.5, text, normal, ink)
-}
-
-// plain writes a length the shortest way, with six digits at most.
-func plain(v float64) string {
-	return strconv.FormatFloat(v, 'g', 6, 64)
 }

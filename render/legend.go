@@ -2,7 +2,8 @@ package render
 
 import (
 	"math"
-	"strconv"
+
+	"notchproof/render/number"
 )
 
 // legend draws the ramp with the levels of the contours as its ticks.
@@ -19,7 +20,7 @@ func (s *sheet) legend(area box, title, note string, top float64, list []float64
 		s.dc.Fill()
 	}
 	s.rectangle(bar, narrow, ink)
-	peak := s.tick(bar, 1, strconv.FormatFloat(top, 'f', 2, 64), strong)
+	peak := s.tick(bar, 1, number.Decimal(top, 2), strong)
 	s.tick(bar, 0, "0", small)
 	for _, level := range list {
 		at := bar.X0 + bar.width()*level/top

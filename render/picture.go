@@ -100,20 +100,23 @@ func (p *plate) note(antisymmetric bool) string {
 	return ""
 }
 
-// Quills: the distance between them and the length of the largest, in units.
+// Quills: the distance between them and the length of the largest, in units;
+// the curve through their ends has perNeedle points for each of them.
 const (
+	perNeedle = 6
+
 	mainStep, mainQuill   = 7, 70
 	closeStep, closeQuill = 9, 100
 )
 
 func (p *plate) draw() {
-	main, left, right := mainView(p.part, p.area(165, 120, 1435, 500), p.scale)
+	main, left, right := mainView(p.part, p.area(165, 112, 1435, 512), p.scale)
 	close, times := detail(p.part, p.finding.Computed.Peak, main, point{p.u(detailX), p.u(detailY)}, p.u(detailRadius))
 	p.text(point{p.u(50), p.u(blockTop - 96)}, 0, 0, "A", head, ink)
 	p.text(point{p.u(50) + p.u(24), p.u(blockTop - 94)}, 0, 0, levelText(times)+" : 1 of the view above", normal, grey)
 
 	e := extentOf(p.part)
-	p.quills(main, p.needles(main, mainStep, 0.5*(e.high-e.low)), p.u(mainQuill)/p.top)
+	p.quills(main, p.needles(main, mainStep, 0.5*(e.high-e.low)), p.u(mainQuill)/p.top, perNeedle)
 	p.annotate(main, p.part, left, right)
 	p.magnified(main, close, "A")
 	p.view(main, 2)
@@ -121,6 +124,7 @@ func (p *plate) draw() {
 	if p.part.Half {
 		p.symmetry(main, 18)
 	}
+	p.load(main, p.finding.Load.Name, left, right)
 	p.closeUp(close)
 }
 
@@ -130,7 +134,7 @@ func (p *plate) closeUp(v *view) {
 	x, y := b.middle()
 	needles := p.needles(v, closeStep, 1.5*b.width()/v.scale)
 	p.within(v)
-	p.quills(v, needles, p.u(closeQuill)/p.top)
+	p.quills(v, needles, p.u(closeQuill)/p.top, perNeedle)
 	p.dc.ResetClip()
 	p.view(v, 1)
 	p.pen(ink, wide)
@@ -143,8 +147,8 @@ func (p *plate) closeUp(v *view) {
 // labels a level.
 func (p *plate) view(v *view, most int) {
 	r := p.field.shade(v)
-	cs := trace(r, p.levels)
-	p.label(r, cs, p.top, most)
+	cs := trace(r, p.levels, p.u(2*defaultWidth))
+	p.label(v, r, cs, p.top, most)
 	r.bleed(2)
 	mask := coverage(r.area, v.loops(p.part)...)
 	multiply(mask, coverage(r.area, v.window))
@@ -158,8 +162,8 @@ func (p *plate) view(v *view, most int) {
 	p.dc.ResetClip()
 }
 
-// needles gives the quills of the surface that the peak lies on, every step
-// units as far as reach (a length of the part) to both sides of the peak.
+// needles gives the surface stress where the peak lies, perNeedle times in every
+// step units as far as reach (a length of the part) to both sides of the peak.
 func (p *plate) needles(v *view, step, reach float64) []needle {
 	peak := r2.Vec{X: p.finding.Computed.Peak.X, Y: p.finding.Computed.Peak.Y}
 	var on *surface
@@ -172,7 +176,7 @@ func (p *plate) needles(v *view, step, reach float64) []needle {
 	if on == nil {
 		return nil
 	}
-	return on.needles(at, p.u(step)/v.scale, reach)
+	return on.needles(at, p.u(step)/v.scale/perNeedle, reach)
 }
 
 func multiply(a, b *image.Alpha) {

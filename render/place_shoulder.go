@@ -3,6 +3,7 @@ package render
 import (
 	"gonum.org/v1/gonum/spatial/r2"
 
+	"notchproof/render/number"
 	"notchproof/scf"
 )
 
@@ -20,7 +21,7 @@ func shoulderPlacements() []placement {
 		{Dim: "c", Kind: leaderTo, At: func(g geometry) (a, b r2.Vec) {
 			mid := mirrored(g.side("chamfer").At(0.5))
 			return mid, r2.Add(mid, r2.Vec{X: -0.5, Y: -1})
-		}, Text: func(d scf.Dims) string { return plain(d["c"]) + " × 45°" },
+		}, Text: func(d scf.Dims) string { return number.Length(d["c"], "") + " × 45°" },
 			Skip: func(d scf.Dims) bool { return d["c"] == 0 }},
 	}
 }
@@ -29,7 +30,7 @@ func shoulderPlacements() []placement {
 // one, the radial one first.
 func filletText(d scf.Dims) string {
 	if ra, r := d["ra"], d["r"]; ra != 0 && ra != r {
-		return "ellipse r " + plain(r) + ", ra " + plain(ra)
+		return "ellipse r " + number.Length(r, "") + ", ra " + number.Length(ra, "")
 	}
-	return "R" + plain(d["r"])
+	return "R" + number.Length(d["r"], "")
 }

@@ -6,6 +6,7 @@ import (
 	"gonum.org/v1/gonum/spatial/r2"
 
 	"notchproof/mesh/outline"
+	"notchproof/render/number"
 	"notchproof/scf"
 	"notchproof/verify/specimen"
 )
@@ -116,7 +117,7 @@ func lettered(p placement, part *specimen.Part) string {
 	if p.Text != nil {
 		return p.Text(part.Dims)
 	}
-	text := plain(part.Dims[p.Dim])
+	text := number.Length(part.Dims[p.Dim], "")
 	switch {
 	case p.Kind == leaderTo:
 		return "R" + text

@@ -175,8 +175,9 @@ func (c *surface) needles(at, step, reach float64) []needle {
 
 // quills draws needles as lines along the surface normal, long in proportion
 // to the stress, with the curve through their ends. Unit is the length of the
-// nominal stress in pixels.
-func (s *sheet) quills(v *view, list []needle, unit float64) {
+// nominal stress in pixels; every so manyth needle is drawn, the one in the
+// middle, at the peak, among them. Lettering is kept off what they cover.
+func (s *sheet) quills(v *view, list []needle, unit float64, every int) {
 	if len(list) < 2 {
 		return
 	}
@@ -185,7 +186,13 @@ func (s *sheet) quills(v *view, list []needle, unit float64) {
 	for i, n := range list {
 		foot := v.at(n.At)
 		ends[i] = foot.plus(n.Normal.X*n.Value*unit, -n.Normal.Y*n.Value*unit)
-		s.dc.DrawLine(foot.X, foot.Y, ends[i].X, ends[i].Y)
+		if (i-len(list)/2)%every == 0 {
+			s.dc.DrawLine(foot.X, foot.Y, ends[i].X, ends[i].Y)
+			for _, t := range [3]float64{0.3, 0.7, 1} {
+				p := between(foot, ends[i], t)
+				s.take(box{p.X, p.Y, p.X, p.Y}.grown(s.u(4)))
+			}
+		}
 	}
 	s.dc.Stroke()
 	s.pen(accent, 1.6)

@@ -21,9 +21,13 @@ func (s *sheet) face(l lettering) font.Face {
 	return f
 }
 
+// legible replaces what the fonts have no shape for: a narrow space stands as
+// an ordinary one.
+func legible(text string) string { return strings.ReplaceAll(text, "\u202f", "\u00a0") }
+
 // measure gives the width of a line of text in pixels.
 func (s *sheet) measure(text string, l lettering) float64 {
-	return float64(font.MeasureString(s.face(l), text)) / 64
+	return float64(font.MeasureString(s.face(l), legible(text))) / 64
 }
 
 // place gives the box of a line of text: (ax, ay) is the point of the box,
@@ -36,6 +40,7 @@ func (s *sheet) place(p point, ax, ay float64, text string, l lettering) box {
 
 // text letters a line and takes its place.
 func (s *sheet) text(p point, ax, ay float64, text string, l lettering, c color.Color) box {
+	text = legible(text)
 	b := s.place(p, ax, ay, text, l)
 	s.dc.SetFontFace(s.face(l))
 	s.dc.SetColor(c)

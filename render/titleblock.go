@@ -2,9 +2,9 @@ package render
 
 import (
 	"fmt"
-	"strconv"
 	"strings"
 
+	"notchproof/render/number"
 	"notchproof/scf"
 	"notchproof/verify"
 	"notchproof/verify/specimen"
@@ -56,11 +56,13 @@ func (t *table) factor(height float64, f *verify.Finding) {
 	e := f.Computed.Factor
 	answer := "no factor: " + e.Status.String()
 	if e.Status.Settled() {
-		answer = symbol(f.Load) + " = " + factorText(e)
+		answer = "= " + number.Uncertain(e.Value, e.Uncertainty)
+		x = s.symbol(point{x, t.y + s.u(14)}, f.Load) + s.u(12)
 	}
 	stamp := strings.ToUpper(verdictText(f.Verdict))
 	w := s.measure(stamp, head)
 	s.text(point{x, t.y + s.u(14)}, 0, 0, s.fit(answer, figure, right-w-s.u(60)-x), figure, ink)
+	x = t.box.X0 + s.u(cellMargin)
 	s.text(point{x, t.y + s.u(height-12)}, 0, 1, s.fit(sideText(f), normal, right-w-s.u(60)-x), normal, grey)
 	frame := s.place(point{right - s.u(12), middle}, 1, 0.5, stamp, head).grown(s.u(9))
 	if f.Verdict == verify.Disagrees {
@@ -79,18 +81,31 @@ func (t *table) comparisons(f *verify.Finding) {
 	const line, below = 25, 62 + 36
 	room := t.box.Y1 - t.s.u(below+10) - t.y
 	lines := comparisonTexts(f)
-	most := int(room / t.s.u(line))
-	if len(lines) > most {
+	if most := int(room / t.s.u(line)); len(lines) > most {
 		left := len(lines) - most + 1
-		lines = append(lines[:most-1:most-1], fmt.Sprintf("and %d more", left))
+		lines = append(lines[:most-1:most-1], [4]string{fmt.Sprintf("and %d more", left)})
 	}
-	x := t.box.X0 + t.s.u(cellMargin)
 	for i, l := range lines {
-		y := t.y + t.s.u(5+line*float64(i))
-		t.s.text(point{x, y}, 0, 0, t.s.fit(l, normal, t.box.width()-2*t.s.u(cellMargin)), normal, ink)
+		t.columns(t.y+t.s.u(6+line*float64(i)), l)
 	}
 	t.y = t.box.Y1 - t.s.u(below)
 	t.rule(0)
+}
+
+// columns letters one comparison: who, factor, difference, verdict. A line with
+// nothing but its first text has the whole width.
+func (t *table) columns(y float64, c [4]string) {
+	s := t.s
+	x := t.box.X0 + s.u(cellMargin)
+	width := t.box.width() - 2*s.u(cellMargin)
+	if c[1] == "" {
+		s.text(point{x, y}, 0, 0, s.fit(c[0], normal, width), normal, ink)
+		return
+	}
+	s.text(point{x, y}, 0, 0, s.fit(c[0], normal, 0.44*width), normal, ink)
+	s.text(point{x + 0.55*width, y}, 1, 0, c[1], normal, ink)
+	s.text(point{x + 0.67*width, y}, 1, 0, c[2], normal, ink)
+	s.text(point{x + 0.70*width, y}, 0, 0, s.fit(c[3], normal, 0.3*width), normal, ink)
 }
 
 func (t *table) foot() {
@@ -100,18 +115,22 @@ func (t *table) foot() {
 	s.text(point{t.box.X1 - s.u(cellMargin), middle}, 1, 0.5, "notchproof", strong, ink)
 }
 
-func symbol(l *specimen.Load) string {
+// symbol letters the factor's symbol, K with its subscript, and gives where it
+// ends.
+func (s *sheet) symbol(p point, l *specimen.Load) float64 {
+	subscript := "t"
 	if l.Shear {
-		return "Kts"
+		subscript = "ts"
 	}
-	return "Kt"
+	k := s.text(p, 0, 0, "K", figure, ink)
+	return s.text(point{k.X1 + s.u(1), k.Y1 + s.u(2)}, 0, 1, subscript, head, ink).X1
 }
 
 func dimensionText(part *specimen.Part) string {
 	var list []string
 	for _, d := range part.Family.Dimensions {
 		if v, given := part.Given[d.Name]; given {
-			list = append(list, d.Name+" = "+plain(v))
+			list = append(list, d.Name+" = "+number.Length(v, ""))
 		}
 	}
 	text := strings.Join(list, ", ")
@@ -139,7 +158,8 @@ func sideText(f *verify.Finding) string {
 	if !c.Factor.Status.Settled() {
 		return ""
 	}
-	return fmt.Sprintf("von Mises %.3f   gross section %.3f   %s", c.VonMises.Value, c.Gross, c.Factor.Status)
+	return fmt.Sprintf("von Mises %s   gross section %s   %s",
+		number.Decimal(c.VonMises.Value, 3), number.Decimal(c.Gross, 3), c.Factor.Status)
 }
 
 func verdictText(v verify.Verdict) string {
@@ -156,17 +176,21 @@ func verdictText(v verify.Verdict) string {
 	return "undecided"
 }
 
-// comparisonTexts has one line for the claim, one for each handbook value and
-// the reasons of the verdict.
-func comparisonTexts(f *verify.Finding) []string {
-	var lines []string
+// comparisonTexts has one line for the claim and one for each handbook value;
+// without either, what the verdict says about itself.
+func comparisonTexts(f *verify.Finding) [][4]string {
+	var lines [][4]string
 	say := func(who string, factor float64, c verify.Comparison) {
-		lines = append(lines, fmt.Sprintf("%s %s, %+.1f %%: %s", who, strconv.FormatFloat(factor, 'f', 3, 64), 100*c.Difference, verdictText(c.Verdict)))
+		verdict := verdictText(c.Verdict)
+		if c.Unsafe() {
+			verdict += ", unsafe side"
+		}
+		lines = append(lines, [4]string{who, number.Decimal(factor, 3), number.SignedPercent(c.Difference, 1), verdict})
 	}
 	if c := f.Claim; c != nil {
 		who := "claim"
 		if c.Claim.From != "" {
-			who += " (" + c.Claim.From + ")"
+			who += ": " + c.Claim.From
 		}
 		say(who, c.Claim.Factor, c.Comparison)
 	}
@@ -174,7 +198,9 @@ func comparisonTexts(f *verify.Finding) []string {
 		say("handbook "+h.Value.ID, h.Value.Factor, h.Comparison)
 	}
 	if len(lines) == 0 {
-		lines = f.Because
+		for _, b := range f.Because {
+			lines = append(lines, [4]string{b})
+		}
 	}
 	return lines
 }
@@ -185,22 +211,16 @@ func meshText(f *verify.Finding) string {
 		return "no mesh"
 	}
 	r := ladder[len(ladder)-1]
-	return fmt.Sprintf("mesh %d triangles of order %d, %d unknowns, %d rungs", r.Triangles, r.Order, r.Unknowns, len(ladder))
+	return fmt.Sprintf("mesh of %s of order %d, %s unknowns, ladder of %s",
+		number.CountOf(r.Triangles, "triangle", "triangles"), r.Order, number.Count(r.Unknowns), number.CountOf(len(ladder), "rung", "rungs"))
 }
 
 func peakText(f *verify.Finding, part *specimen.Part) string {
 	p := f.Computed.Peak
-	text := fmt.Sprintf("peak on the %s at x = %s, y = %s", p.Side, plain4(p.X), plain4(p.Y))
+	const digits = 5
+	at := "x = " + number.Compact(p.X, digits) + ", y = " + number.Compact(p.Y, digits)
 	if part.Unit != "" {
-		text += " " + part.Unit
+		at += "\u00a0" + part.Unit
 	}
-	return text + fmt.Sprintf(", %.1f° up the arc", p.ArcDegrees)
-}
-
-func plain4(v float64) string { return strconv.FormatFloat(v, 'g', 4, 64) }
-
-// factorText writes a factor with its uncertainty, as many digits as that
-// allows.
-func factorText(e verify.Estimate) string {
-	return fmt.Sprintf("%.4f ± %.1g", e.Value, e.Uncertainty)
+	return "peak on the " + p.Side + " at " + at + ", " + number.Decimal(p.ArcDegrees, 1) + "° up the arc"
 }

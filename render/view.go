@@ -40,6 +40,28 @@ func (v *view) pixels() image.Rectangle {
 	return image.Rect(int(math.Floor(b.X0)), int(math.Floor(b.Y0)), int(math.Ceil(b.X1)), int(math.Ceil(b.Y1)))
 }
 
+// shows tells whether all of a box lies inside the window.
+func (v *view) shows(b box) bool {
+	for _, p := range [4]point{{b.X0, b.Y0}, {b.X1, b.Y0}, {b.X1, b.Y1}, {b.X0, b.Y1}} {
+		if !inside(p, v.window) {
+			return false
+		}
+	}
+	return true
+}
+
+// inside counts how often a ray from p to the right crosses a closed polygon.
+func inside(p point, polygon []point) bool {
+	odd := false
+	for i, a := range polygon {
+		b := polygon[(i+1)%len(polygon)]
+		if (a.Y > p.Y) != (b.Y > p.Y) && p.X < a.X+(p.Y-a.Y)*(b.X-a.X)/(b.Y-a.Y) {
+			odd = !odd
+		}
+	}
+	return odd
+}
+
 // circle is a window around a point.
 func circle(center point, radius float64) []point {
 	n := max(64, int(radius))

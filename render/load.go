@@ -1,0 +1,60 @@
+package render
+
+import (
+	"math"
+
+	"gonum.org/v1/gonum/spatial/r2"
+
+	"notchproof/scf"
+)
+
+// load draws the load's symbol beside both broken ends on the axis of the
+// part: an arrow for a force, a bent one for a moment, a double-headed one for
+// a torque (the vector of the right-hand rule).
+func (s *sheet) load(v *view, load scf.Load, left, right float64) {
+	for _, end := range [2]struct{ x, sign float64 }{{left, -1}, {right, 1}} {
+		at := v.at(r2.Vec{X: end.x})
+		root := at.plus(end.sign*s.u(2+breakSwing), 0)
+		out := point{end.sign, 0}
+		s.pen(accent, wide)
+		switch load {
+		case scf.Tension:
+			s.force(root, out, 1)
+		case scf.Torsion:
+			s.force(root, out, 2)
+		case scf.Bending:
+			s.moment(root.toward(out, s.u(4)), end.sign)
+		}
+	}
+}
+
+const loadLength = 44
+
+// force draws an arrow from root along out with a number of heads.
+func (s *sheet) force(root, out point, heads int) {
+	tip := root.toward(out, s.u(loadLength))
+	s.line(root, tip.toward(out, -s.u(8)))
+	for i := range heads {
+		s.arrow(tip.toward(out, -s.u(11*float64(i))), out, accent)
+	}
+}
+
+// moment draws the arrow of a moment that stretches the upper side: clockwise
+// at the right end, the other way round at the left one. Both turn from the top
+// outwards and down.
+func (s *sheet) moment(center point, sign float64) {
+	radius := s.u(26)
+	const from, to, pieces = -70.0, 70.0, 24 // degrees below the axis
+	at := func(degrees float64) point {
+		sin, cos := math.Sincos(degrees * math.Pi / 180)
+		return center.plus(sign*radius*cos, radius*sin)
+	}
+	ps := make([]point, pieces+1)
+	for i := range ps {
+		ps[i] = at(from + (to-12-from)*float64(i)/pieces)
+	}
+	s.polyline(ps)
+	s.dc.Stroke()
+	sin, cos := math.Sincos((to - 8) * math.Pi / 180)
+	s.arrow(at(to), point{-sign * sin, cos}, accent)
+}
