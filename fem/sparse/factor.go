@@ -5,7 +5,8 @@ import "context"
 // A Fill writes the matrix of one element: row by row, in the order of the
 // element's list, n² numbers for a list of n. Only the lower triangle is read
 // (columns up to the row's own), without the rows and columns of prescribed
-// unknowns. The memory comes with old contents. Fill is called from several
+// unknowns. The memory comes with old contents. Elements that have prescribed
+// unknowns only are left out. Fill is called from several
 // goroutines at once; those with the same worker number, which is below the
 // number of workers, follow one another.
 type Fill func(worker, element int, matrix []float64)
@@ -16,6 +17,7 @@ type Factor struct {
 	plan      *Plan
 	workspace *Workspace
 	version   int
+	workers   int
 	values    []float64
 	pivots    Pivots
 }
@@ -28,11 +30,12 @@ func (f *Factor) Pivots() Pivots { return f.pivots }
 // it. The error is a *PivotError when the matrix is not positive definite to
 // working precision, or the context's when that ends first.
 func (p *Plan) Factor(ctx context.Context, fill Fill, w *Workspace, workers int) (*Factor, error) {
+	workers = crewSize(workers)
 	n := &numeric{plan: p, ctx: ctx, fill: fill, workspace: w}
 	if err := n.run(workers); err != nil {
 		return nil, err
 	}
-	f := &Factor{plan: p, workspace: w, version: w.version, values: w.factor}
+	f := &Factor{plan: p, workspace: w, version: w.version, workers: workers, values: w.factor}
 	j := newJudge(0)
 	for i := range p.fronts {
 		j.merge(&w.judges[i])
@@ -44,13 +47,6 @@ func (p *Plan) Factor(ctx context.Context, fill Fill, w *Workspace, workers int)
 		f.pivots = Pivots{Smallest: j.smallest, Largest: j.largest, Unknown: int(p.order[j.at])}
 	}
 	return f, nil
-}
-
-// pivotLimit returns the smallest pivot, relative to its diagonal entry, that
-// is told from zero.
-func pivotLimit(n int) float64 {
-	const epsilon = 0x1p-52
-	return 8 * epsilon
 }
 
 // numeric is one factorisation under way.

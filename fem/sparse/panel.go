@@ -73,15 +73,10 @@ func (p *panel) row(i int) []float64 {
 
 // eliminateRow finishes the tiles [from, to) of tile row i, left of the
 // diagonal; all columns before are finished already.
-func (p *panel) eliminateRow(i, from, to int) { p.solveRow(p.row(i), from, to) }
-
-// solveRow turns the tiles [from, to) of a row of right-hand sides into the
-// solution x of x·lᵀ = row, where l is the pivots' part of the factor. The
-// tiles before from must be solved already.
-func (p *panel) solveRow(row []float64, from, to int) {
+func (p *panel) eliminateRow(i, from, to int) {
+	row := p.row(i)
 	for j := from; j < to; j++ {
-		l := p.row(j)
-		c := (*tile)(row[area*j:])
+		l, c := p.row(j), (*tile)(row[area*j:])
 		subtractProduct(c, row[:area*j], l[:area*j])
 		solveTile(c, (*tile)(l[area*j:]))
 	}

@@ -23,9 +23,6 @@ const sharedFlops = 2e6
 
 // run works through all fronts.
 func (n *numeric) run(workers int) error {
-	if workers <= 0 {
-		workers = runtime.GOMAXPROCS(0)
-	}
 	if workers == 1 || len(n.plan.fronts) == 0 {
 		n.workspace.prepare(n.plan, 1, 0)
 		return n.subtree(0, 0, len(n.plan.fronts))
@@ -44,6 +41,14 @@ func (n *numeric) subtree(worker, from, to int) error {
 		n.front(worker, int32(i), nil)
 	}
 	return nil
+}
+
+// crewSize returns the number of goroutines that a request for workers means.
+func crewSize(workers int) int {
+	if workers <= 0 {
+		return runtime.GOMAXPROCS(0)
+	}
+	return workers
 }
 
 // A crew is the goroutines of one factorisation.

@@ -2,33 +2,19 @@ package sparse
 
 // Solve replaces each right-hand side by the solution. Every side has one
 // number per unknown. They are treated four at a time; each gives the bits
-// that it gives alone.
+// that it gives alone. Several goroutines may call Solve at once.
 func (f *Factor) Solve(b ...[]float64) {
 	f.check()
-	p := f.plan
-	s := &substitution{factor: f, x: make([]float64, edge*p.unknowns), row: make([]float64, area*tiles(p.largest))}
-	for ; len(b) > 0; b = b[min(edge, len(b)):] {
-		sides := b[:min(edge, len(b))]
-		clear(s.x)
-		for j, side := range sides {
-			if len(side) != p.unknowns {
-				panic("sparse: length of a right-hand side")
-			}
-			for n, u := range p.order {
-				s.x[edge*n+j] = side[u]
-			}
+	for _, side := range b {
+		if len(side) != f.plan.unknowns {
+			panic("sparse: length of a right-hand side")
 		}
-		for i := range p.fronts {
-			s.forward(&p.fronts[i])
-		}
-		for i := len(p.fronts) - 1; i >= 0; i-- {
-			s.backward(&p.fronts[i])
-		}
-		for j, side := range sides {
-			for n, u := range p.order {
-				side[u] = s.x[edge*n+j]
-			}
-		}
+	}
+	for ; len(b) > 2; b = b[min(edge, len(b)):] {
+		f.substitute(&fourSides, b[:min(edge, len(b))])
+	}
+	for i := range b {
+		f.substitute(&oneSide, b[i:i+1])
 	}
 }
 
@@ -38,20 +24,65 @@ func (f *Factor) check() {
 	}
 }
 
-// substitution solves for up to four sides at once. They lie in x as rows of
-// tiles: side j of the unknown with elimination number n is x[4n+j].
+func (f *Factor) substitute(k *kernels, sides [][]float64) {
+	p := f.plan
+	s := &substitution{
+		kernels: k, factor: f,
+		x:   make([]float64, k.width*p.unknowns),
+		row: make([]float64, k.width*edge*tiles(p.largest)),
+	}
+	for j, side := range sides {
+		for n, u := range p.order {
+			s.x[k.width*n+j] = side[u]
+		}
+	}
+	for i := range p.fronts {
+		s.forward(&p.fronts[i])
+	}
+	for i := len(p.fronts) - 1; i >= 0; i-- {
+		s.backward(&p.fronts[i])
+	}
+	for j, side := range sides {
+		for n, u := range p.order {
+			side[u] = s.x[k.width*n+j]
+		}
+	}
+}
+
+// kernels are the operations on right-hand sides, for one number of sides at
+// a time: the width. Sides lie in memory as rows: side j of place i is number
+// width·i + j. A block is four places, as long as a tile is wide.
+type kernels struct {
+	width int
+
+	// subtractProduct sets the block c to c − a·bᵀ, for blocks a and tiles b.
+	subtractProduct func(c, a, b []float64)
+	// solve sets the block c to c·l⁻ᵀ, for a tile l on the diagonal.
+	solve func(c, l []float64)
+	// subtractTransposed sets the blocks c to c − x·l, for a block x and tiles l.
+	subtractTransposed func(c, x, l []float64)
+	// solveTransposed sets the block c to c·l⁻¹.
+	solveTransposed func(c, l []float64)
+}
+
+// substitution solves for up to width sides at once.
 type substitution struct {
+	*kernels
 	factor *Factor
-	x      []float64
+	x      []float64 // in the order of elimination
 	row    []float64 // the part of x that belongs to the pivots of a front
 }
 
-// load copies the pivots' part of x, with zeros up to whole tiles.
+// load copies the pivots' part of x, with zeros up to whole blocks.
 func (s *substitution) load(f *front) []float64 {
-	row := s.row[:area*tiles(f.pivots)]
-	n := copy(row, s.x[edge*f.first:][:edge*f.pivots])
+	row := s.row[:s.width*edge*tiles(f.pivots)]
+	n := copy(row, s.pivots(f))
 	clear(row[n:])
 	return row
+}
+
+func (s *substitution) pivots(f *front) []float64 {
+	return s.x[s.width*int(f.first):][:s.width*f.pivots]
 }
 
 func (s *substitution) panel(f *front) panel {
@@ -62,16 +93,21 @@ func (s *substitution) panel(f *front) panel {
 // border.
 func (s *substitution) forward(f *front) {
 	p, row := s.panel(f), s.load(f)
-	k := p.columns()
-	p.solveRow(row, 0, k)
-	copy(s.x[edge*f.first:][:edge*f.pivots], row)
+	k, block := p.columns(), s.width*edge
+	for j := range k {
+		l, c := p.row(j), row[block*j:][:block]
+		s.subtractProduct(c, row[:block*j], l[:area*j])
+		s.solve(c, l[area*j:])
+	}
+	copy(s.pivots(f), row)
 	for i := range tiles(len(f.border)) {
-		var c tile
-		subtractProduct(&c, row, p.row(k+i))
+		var memory tile
+		c := memory[:block]
+		s.subtractProduct(c, row, p.row(k+i))
 		for j, n := range f.border[edge*i : min(edge*i+edge, len(f.border))] {
-			x := (*[edge]float64)(s.x[edge*n:])
+			x := s.x[s.width*int(n):][:s.width]
 			for side := range x {
-				x[side] += c[edge*j+side]
+				x[side] += c[s.width*j+side]
 			}
 		}
 	}
@@ -80,18 +116,18 @@ func (s *substitution) forward(f *front) {
 // backward solves for the pivots of a front when its border is known.
 func (s *substitution) backward(f *front) {
 	p, row := s.panel(f), s.load(f)
-	k := p.columns()
+	k, block := p.columns(), s.width*edge
 	for i := range tiles(len(f.border)) {
 		var c tile
 		for j, n := range f.border[edge*i : min(edge*i+edge, len(f.border))] {
-			copy(c[edge*j:], s.x[edge*n:][:edge])
+			copy(c[s.width*j:], s.x[s.width*int(n):][:s.width])
 		}
-		subtractTransposed(row, &c, p.row(k+i))
+		s.subtractTransposed(row, c[:block], p.row(k+i))
 	}
 	for j := k - 1; j >= 0; j-- {
-		l, c := p.row(j), (*tile)(row[area*j:])
-		solveTileTransposed(c, (*tile)(l[area*j:]))
-		subtractTransposed(row[:area*j], c, l[:area*j])
+		l, c := p.row(j), row[block*j:][:block]
+		s.solveTransposed(c, l[area*j:])
+		s.subtractTransposed(row[:block*j], c, l[:area*j])
 	}
-	copy(s.x[edge*f.first:][:edge*f.pivots], row)
+	copy(s.pivots(f), row)
 }
