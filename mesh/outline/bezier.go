@@ -1,11 +1,6 @@
 package outline
 
-import (
-	"math"
-	"slices"
-
-	"gonum.org/v1/gonum/spatial/r2"
-)
+import "gonum.org/v1/gonum/spatial/r2"
 
 // A Bezier is the cubic with four control points, P[0] and P[3] its ends.
 type Bezier struct{ P [4]r2.Vec }
@@ -113,84 +108,4 @@ func (b Bezier) Nearest(p r2.Vec) float64 {
 		}
 	}
 	return best
-}
-
-// bernsteinRoots lists in rising order the roots strictly inside (0, 1) of the
-// polynomial with the given Bernstein coefficients. By the variation
-// diminishing property an interval without a change of sign in its
-// coefficients holds no root, and one with a single change holds exactly one,
-// which bisection finds; others are halved. Roots closer than 2⁻⁵⁰ count as
-// one; a root that only touches zero may be listed twice or, within rounding,
-// be missed.
-func bernsteinRoots(c []float64) []float64 {
-	var roots []float64
-	add := func(t float64) {
-		if t > 0 && t < 1 {
-			roots = append(roots, t)
-		}
-	}
-	var search func(c []float64, lo, hi float64)
-	search = func(c []float64, lo, hi float64) {
-		switch n := signChanges(c); {
-		case n == 0:
-			return
-		case n == 1 && c[0] != 0 && c[len(c)-1] != 0:
-			rising := c[0] < 0
-			s := bisect(func(s float64) bool { return bernstein(c, s) < 0 == rising }, 0, 1)
-			add(lo + s*(hi-lo))
-			return
-		case hi-lo < 0x1p-50:
-			add(lo)
-			return
-		}
-		left, right := halves(c)
-		mid := lo + (hi-lo)/2
-		search(left, lo, mid)
-		if right[0] == 0 {
-			add(mid)
-		}
-		search(right, mid, hi)
-	}
-	search(c, 0, 1)
-	return slices.Compact(roots)
-}
-
-// signChanges counts changes of sign, skipping zeros.
-func signChanges(c []float64) int {
-	n, last := 0, 0.0
-	for _, x := range c {
-		if x == 0 {
-			continue
-		}
-		if last != 0 && math.Signbit(x) != math.Signbit(last) {
-			n++
-		}
-		last = x
-	}
-	return n
-}
-
-// bernstein evaluates by de Casteljau.
-func bernstein(c []float64, t float64) float64 {
-	var buf [6]float64
-	w := buf[:copy(buf[:], c)]
-	for k := len(w) - 1; k > 0; k-- {
-		for i := range k {
-			w[i] = float64((1-t)*w[i]) + float64(t*w[i+1])
-		}
-	}
-	return w[0]
-}
-
-// halves gives the coefficients on [0, ½] and [½, 1].
-func halves(c []float64) (left, right []float64) {
-	n := len(c)
-	left, right = make([]float64, n), slices.Clone(c)
-	for k := range n {
-		left[k] = right[0]
-		for i := 0; i < n-1-k; i++ {
-			right[i] = (right[i] + right[i+1]) / 2
-		}
-	}
-	return left, right
 }

@@ -198,6 +198,30 @@ func TestNearest(t *testing.T) {
 	})
 }
 
+// Points on the axes of an ellipse have feet at vertices or in pairs; arcs may
+// hold the one of a pair and not the other.
+func TestNearestOnAxes(t *testing.T) {
+	for _, axes := range [][2]float64{{3, 1}, {1, 3}, {2, 2}, {1, 0.999999}, {1000, 1}} {
+		for start := -3.0; start < 3; start += 0.7 {
+			for _, sweep := range []float64{1, -2, 4, 2 * math.Pi} {
+				e := EllipticArc{A: axes[0], B: axes[1], Start: start, Sweep: sweep}
+				for x := -4.0; x <= 4; x += 0.25 {
+					for _, p := range []r2.Vec{{X: x * axes[0] / 3}, {Y: x * axes[1] / 3}, {X: x, Y: 1e-18}} {
+						u := e.Nearest(p)
+						got := r2.Norm(r2.Sub(e.At(u), p))
+						for k := range 201 {
+							v := float64(k) / 200
+							if d := r2.Norm(r2.Sub(e.At(v), p)); d < got-1e-12*(axes[0]+axes[1]) {
+								t.Fatalf("%+v: Nearest(%v) = %g at %.15g, but t = %g is at %.15g", e, p, u, got, v, d)
+							}
+						}
+					}
+				}
+			}
+		}
+	}
+}
+
 func TestBounds(t *testing.T) {
 	conform(t, func(t *testing.T, c Curve) {
 		b, s := c.Bounds(), size(c)

@@ -96,9 +96,10 @@ func turningPoints(c Curve, n r2.Vec) []float64 {
 	var ts []float64
 	bs := breaks(c)
 	for i, t := range bs[1:] {
-		slope := func(t float64) float64 { return dot(c.Deriv(t), n) }
-		if a, b := slope(bs[i]), slope(t); a < 0 != (b < 0) {
-			ts = append(ts, bisect(func(t float64) bool { return slope(t) < 0 }, bs[i], t))
+		f := func(t float64) (y, slope float64) { return dot(c.Deriv(t), n), dot(c.Second(t), n) }
+		a, _ := f(bs[i])
+		if b, _ := f(t); a < 0 != (b < 0) {
+			ts = append(ts, bracketedRoot(f, bs[i], t, a < 0))
 		}
 	}
 	return ts
@@ -154,34 +155,8 @@ func (s *stretch) param(depth float64, n r2.Vec) float64 {
 	if _, ok := s.c.(Line); ok {
 		return (depth - s.d0) / (s.d1 - s.d0)
 	}
-	f := func(t float64) float64 { return dot(s.c.At(t), n) - depth }
-	slope := func(t float64) float64 { return dot(s.c.Deriv(t), n) }
-	return monotoneRoot(f, slope, s.t0, s.t1, s.d1 > s.d0)
-}
-
-// monotoneRoot finds the zero of a function that rises or falls throughout an
-// interval: Newton steps while they stay inside the bracket, else and every
-// third time bisection (Press et al., Numerical Recipes, 3rd
-// ed. 2007, section 9.4, from memory).
-func monotoneRoot(f, slope func(float64) float64, lo, hi float64, rising bool) float64 {
-	t := lo + (hi-lo)/2
-	for k := 0; ; k++ {
-		y := f(t)
-		if y == 0 {
-			return t
-		}
-		if y < 0 == rising {
-			lo = t
-		} else {
-			hi = t
-		}
-		next := t - y/slope(t)
-		if k%3 == 2 || !(next > lo && next < hi) {
-			next = lo + (hi-lo)/2
-		}
-		if math.Abs(next-t) <= 0x1p-54 || hi-lo <= 0x1p-53 {
-			return next
-		}
-		t = next
+	f := func(t float64) (y, slope float64) {
+		return dot(s.c.At(t), n) - depth, dot(s.c.Deriv(t), n)
 	}
+	return bracketedRoot(f, s.t0, s.t1, s.d1 > s.d0)
 }

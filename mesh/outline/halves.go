@@ -71,7 +71,7 @@ func (r *Region) chains(near float64) []Loop {
 
 // Half gives the part of a whole outline above y = 0, closed along that line
 // by straight sides of the given name. The outline must be its own mirror
-// image (to 1e-9 of its size) and its upper half in one piece.
+// image to 1e-9 of its size.
 func (r *Region) Half(axis string) (*Region, error) {
 	if err := r.checkSymmetry(); err != nil {
 		return nil, err
@@ -163,39 +163,35 @@ func joinUp(parts Loop) (chains []Loop, closed bool) {
 }
 
 // alongAxis joins chains into one loop: from the end of each the material lies
-// to the right along the axis, up to the nearest start of a chain.
+// to the right along the axis, up to the nearest start of a chain. A connected
+// outline that is its own image has a connected half, so that one loop takes
+// up all chains unless the outline is not valid.
 func alongAxis(chains []Loop, name string) (Loop, error) {
 	var loop Loop
 	at := 0
-	for range chains {
+	for joined := 1; ; joined++ {
 		c := chains[at]
-		loop = append(loop, c...)
 		end := c[len(c)-1].Curve.At(1)
-		next := -1
-		for k, d := range chains {
-			if x := d[0].Curve.At(0).X; x > end.X && (next < 0 || x < chains[next][0].Curve.At(0).X) {
-				next = k
-			}
+		at = nextStart(chains, end.X)
+		if at < 0 || at == 0 && joined < len(chains) || joined > len(chains) {
+			return nil, fmt.Errorf("upper half does not close at %s: outline is not valid", place(end))
 		}
-		if next < 0 {
-			return nil, fmt.Errorf("upper half is open at %s", place(end))
-		}
-		loop = append(loop, Side{name, Line{end, chains[next][0].Curve.At(0)}})
-		if at = next; at == 0 {
-			break
+		loop = append(append(loop, c...), Side{name, Line{end, chains[at][0].Curve.At(0)}})
+		if at == 0 {
+			return loop, nil
 		}
 	}
-	for _, c := range chains {
-		p := c[0].Curve.At(0)
-		visited := false
-		for _, s := range loop {
-			visited = visited || s.Curve.At(0) == p
-		}
-		if !visited {
-			return nil, fmt.Errorf("upper half is in several parts, one from %s", place(p))
+}
+
+// nextStart finds the chain that starts next to the right of x, or gives −1.
+func nextStart(chains []Loop, x float64) int {
+	next, least := -1, math.Inf(1)
+	for k, c := range chains {
+		if s := c[0].Curve.At(0).X; s > x && s < least {
+			next, least = k, s
 		}
 	}
-	return loop, nil
+	return next
 }
 
 // checkSymmetry looks whether the images of points on every side lie on the

@@ -250,6 +250,36 @@ func checkMeeting(t *testing.T, l Loop) {
 	}
 }
 
+// The most sides that path data can bring, once harmless and once as a star
+// whose thousand long sides all cross near the middle.
+func TestValidateMany(t *testing.T) {
+	const n = mostPathSides - 1 // odd
+	ps := make([]r2.Vec, n)
+	for k := range ps {
+		ps[k] = r2.Rotate(vec(1, 0), 2*math.Pi*float64(k)/n, r2.Vec{})
+	}
+	if err := (&Region{Outer: polygon(ps...)}).Validate(); err != nil {
+		t.Error(err)
+	}
+	star := make([]r2.Vec, n)
+	for k := range star {
+		star[k] = ps[k*(n/2)%n]
+	}
+	if err := (&Region{Outer: polygon(star...)}).Validate(); err == nil {
+		t.Error("star accepted")
+	}
+	// A comb of long thin teeth: all boxes overlap in x, none meet.
+	var comb []r2.Vec
+	for k := range n / 4 {
+		y := float64(k)
+		comb = append(comb, vec(0.001*y, y), vec(1000+0.001*y, y), vec(1000+0.001*y, y+0.5), vec(1+0.001*y, y+0.5))
+	}
+	comb = append(comb, vec(1+0.001*n/4, n/4+1), vec(-1, n/4+1), vec(-1, 0))
+	if err := (&Region{Outer: polygon(comb...)}).Validate(); err != nil {
+		t.Error(err)
+	}
+}
+
 func BenchmarkValidate(b *testing.B) {
 	r := stepped()
 	for b.Loop() {
