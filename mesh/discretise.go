@@ -17,6 +17,8 @@ type boundary struct {
 	points []r2.Vec
 	segs   []segment
 	first  []int32 // first segment of each side
+	last   []int32 // last segment of each side, before any is cut
+	next   []int32 // the side that begins where each side ends
 	extent float64 // longer side of the box around the outline
 	box    r2.Box
 }
@@ -33,7 +35,7 @@ type segment struct {
 
 const (
 	maxPieceTurn = 45      // a piece of a curve turns by at most this many degrees
-	maxPieces    = 1 << 21 // more boundary pieces than this are taken for a mistake
+	maxPieces    = 1 << 20 // more boundary pieces than this are taken for a mistake
 	gapAllowed   = 1e-9    // between the end of a side and the begin of the next, in extents
 )
 
@@ -93,7 +95,7 @@ func cutSides(region *outline.Region, cuts [][]float64, box r2.Box) *boundary {
 	b := &boundary{sides: region.Sides(), box: box, extent: extentOf(box)}
 	side := int32(0)
 	for _, loop := range loops(region) {
-		begin := int32(len(b.points))
+		begin, side0 := int32(len(b.points)), side
 		for _, s := range loop {
 			ts := cuts[side]
 			curved := !straight(s.Curve)
@@ -104,9 +106,12 @@ func cutSides(region *outline.Region, cuts [][]float64, box r2.Box) *boundary {
 				b.segs = append(b.segs, segment{a: v, b: v + 1, side: side, next: n + 1, curved: curved, t0: ts[i], t1: ts[i+1]})
 			}
 			b.segs[len(b.segs)-1].next = -1
+			b.last = append(b.last, int32(len(b.segs)-1))
 			side++
+			b.next = append(b.next, side)
 		}
 		b.segs[len(b.segs)-1].b = begin
+		b.next[side-1] = side0
 	}
 	return b
 }
@@ -207,5 +212,5 @@ func (d *pieceDensity) integrate(t0, t1 float64, depth, most int) bool {
 	}
 	d.ts = append(d.ts, t1)
 	d.sum = append(d.sum, d.sum[len(d.sum)-1]+n)
-	return len(d.ts) < 8*most
+	return d.sum[len(d.sum)-1] < float64(most) && len(d.ts) < 8*maxPieces
 }

@@ -1,6 +1,9 @@
 package mesh
 
 import (
+	"fmt"
+	"math"
+
 	"gonum.org/v1/gonum/spatial/r2"
 
 	"notchproof/mesh/outline"
@@ -16,6 +19,9 @@ func Generate(region *outline.Region, size Sizing) (*Mesh, error) {
 	if err != nil {
 		return nil, err
 	}
+	if err := checkCount(region, size.Largest); err != nil {
+		return nil, err
+	}
 	t, b, err := start(region, field, size, box)
 	if err != nil {
 		return nil, err
@@ -25,6 +31,25 @@ func Generate(region *outline.Region, size Sizing) (*Mesh, error) {
 		return nil, err
 	}
 	return r.mesh(region), nil
+}
+
+// checkCount refuses at once what would come to far too many triangles: the area
+// over that of an equilateral triangle of the largest size.
+func checkCount(region *outline.Region, largest float64) error {
+	if largest == 0 {
+		return nil
+	}
+	area := 0.0
+	for _, s := range region.Sides() {
+		ts := turningCuts(s.Curve, sizePieceTurn*math.Pi/180)
+		for i := range len(ts) - 1 {
+			area += r2.Cross(s.Curve.At(ts[i]), s.Curve.At(ts[i+1])) / 2
+		}
+	}
+	if n := area / (math.Sqrt(3) / 4 * largest * largest); n > maxTriangles {
+		return fmt.Errorf("largest size %g: would take %.2g triangles, more than %d", largest, n, maxTriangles)
+	}
+	return nil
 }
 
 // mesh keeps what is inside, with the boundary side by side.
@@ -40,11 +65,11 @@ func (r *refiner) mesh(region *outline.Region) *Mesh {
 	}
 	m := &Mesh{
 		Region:    region,
-		Points:    append([]r2.Vec(nil), r.triangulation.points[boxCorners:]...),
+		Points:    append([]r2.Vec(nil), r.points[boxCorners:]...),
 		Triangles: make([][3]int32, 0, count),
 		Neighbors: make([][3]int32, 0, count),
 	}
-	edges := make([]Edge, len(r.triangulation.segs))
+	edges := make([]Edge, len(r.segs))
 	for i := range r.tris {
 		tr := &r.tris[i]
 		if !tr.inside {
@@ -53,7 +78,7 @@ func (r *refiner) mesh(region *outline.Region) *Mesh {
 		n := [3]int32{-1, -1, -1}
 		for k := range 3 {
 			if s := tr.s[k]; s >= 0 {
-				seg := &r.triangulation.segs[s]
+				seg := &r.segs[s]
 				edges[s] = Edge{number[i], int8(k), seg.side, seg.t0, seg.t1}
 			} else {
 				n[k] = number[tr.n[k]]
@@ -63,8 +88,8 @@ func (r *refiner) mesh(region *outline.Region) *Mesh {
 		m.Neighbors = append(m.Neighbors, n)
 	}
 	m.Boundary = make([]Edge, 0, len(edges))
-	for _, s := range r.first {
-		for ; s >= 0; s = r.triangulation.segs[s].next {
+	for _, s := range r.outline.first {
+		for ; s >= 0; s = r.segs[s].next {
 			m.Boundary = append(m.Boundary, edges[s])
 		}
 	}

@@ -1,58 +1,62 @@
 package mesh
 
-// A queue of triangles, the smallest key first; equal keys in no order but
-// always the same one. It is a binary heap without the indirections of
-// container/heap.
-type queue []entry
+import "math"
+
+// A queue of triangles by size: those with the shortest edges first, equally
+// short ones in the order in which they came. Lengths count as equal if they
+// share a bucket; the buckets grow by a factor of about 1.2. That is fine enough
+// to let good triangles grow from the small to the large, and coarse enough for
+// neighbours to follow each other, which keeps them in the processor's cache.
+type queue struct {
+	buckets []bucket
+	base    int // place of the first bucket among those of all numbers
+	least   int // no bucket before this holds anything
+	count   int
+}
+
+type bucket struct {
+	entries []entry
+	head    int
+}
 
 // An entry names a triangle as it was at a stamp.
 type entry struct {
-	key   float32
 	tri   int32
 	stamp uint32
 }
 
-func (q *queue) push(e entry) {
-	h := append(*q, e)
-	i := len(h) - 1
-	for i > 0 {
-		up := (i - 1) / 2
-		if h[up].key <= e.key {
-			break
-		}
-		h[i] = h[up]
-		i = up
-	}
-	h[i] = e
-	*q = h
+// newQueue makes a queue for squares of lengths between two bounds; those
+// beyond share the outermost buckets.
+func newQueue(least2, most2 float64) queue {
+	base := place(least2)
+	return queue{buckets: make([]bucket, place(most2)-base+1), base: base}
+}
+
+// place numbers the buckets of positive numbers by exponent and the first two
+// bits after the leading one.
+func place(x float64) int { return int(math.Float64bits(x) >> 50) }
+
+// push adds a triangle with the square of its shortest edge.
+func (q *queue) push(short2 float64, e entry) {
+	i := min(max(place(short2)-q.base, 0), len(q.buckets)-1)
+	b := &q.buckets[i]
+	b.entries = append(b.entries, e)
+	q.least = min(q.least, i)
+	q.count++
 }
 
 func (q *queue) pop() (entry, bool) {
-	h := *q
-	if len(h) == 0 {
+	if q.count == 0 {
 		return entry{}, false
 	}
-	top, e := h[0], h[len(h)-1]
-	h = h[:len(h)-1]
-	*q = h
-	if len(h) == 0 {
-		return top, true
+	q.count--
+	for len(q.buckets[q.least].entries) == 0 {
+		q.least++
 	}
-	i := 0
-	for {
-		c := 2*i + 1
-		if c >= len(h) {
-			break
-		}
-		if c+1 < len(h) && h[c+1].key < h[c].key {
-			c++
-		}
-		if h[c].key >= e.key {
-			break
-		}
-		h[i] = h[c]
-		i = c
+	b := &q.buckets[q.least]
+	e := b.entries[b.head]
+	if b.head++; b.head == len(b.entries) {
+		b.entries, b.head = b.entries[:0], 0
 	}
-	h[i] = e
-	return top, true
+	return e, true
 }

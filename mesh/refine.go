@@ -5,8 +5,6 @@ import (
 	"math"
 
 	"gonum.org/v1/gonum/spatial/r2"
-
-	"notchproof/mesh/outline"
 )
 
 // The refiner inserts vertices until every triangle inside is small enough and
@@ -24,9 +22,9 @@ import (
 // the boundary into the inside, and their number stays low.
 type refiner struct {
 	*triangulation
-	*boundary
-	field *sizeField
-	queue queue
+	outline *boundary
+	field   *sizeField
+	queue   queue
 
 	sharp []bool  // by vertex: a corner sharper than 60°
 	shell []int32 // by vertex: the sharp corner whose shell it lies on, or -1
@@ -35,15 +33,16 @@ type refiner struct {
 }
 
 const (
-	goodAngle    = 28      // smallest angle aimed for, degrees
-	oversize     = 1.2     // an edge this many times longer than wished for is cut
-	maxTriangles = 1 << 23 // a mesh of more is given up
-	lensCosine   = -0.5    // of the angle, 120°, at which a point sees a segment that it is too near to
+	goodAngle    = 28         // smallest angle aimed for, degrees
+	oversize     = math.Sqrt2 // an edge this many times longer than wished for is cut: its halves are no better
+	maxTriangles = 1 << 22    // a mesh of more is given up
+	lensCosine   = -0.5       // of the angle, 120°, at which a point sees a segment that it is too near to
 )
 
 // refine does all that.
 func refine(t *triangulation, b *boundary, field *sizeField) (*refiner, error) {
-	r := &refiner{triangulation: t, boundary: b, field: field, shortest2: math.Pow(shortestPiece*b.extent, 2)}
+	r := &refiner{triangulation: t, outline: b, field: field, shortest2: math.Pow(shortestPiece*b.extent, 2)}
+	r.queue = newQueue(r.shortest2, b.extent*b.extent)
 	r.markShells()
 	for i := range t.tris {
 		r.judge(int32(i))
@@ -68,41 +67,29 @@ func refine(t *triangulation, b *boundary, field *sizeField) (*refiner, error) {
 // markShells finds the sharp corners and the vertices at the ends of the pieces
 // that begin or end there.
 func (r *refiner) markShells() {
-	r.sharp = make([]bool, len(r.triangulation.points))
-	r.shell = make([]int32, len(r.triangulation.points))
+	r.sharp = make([]bool, len(r.points))
+	r.shell = make([]int32, len(r.points))
 	for i := range r.shell {
 		r.shell[i] = -1
 	}
-	segs := r.triangulation.segs
-	begin := make(map[int32]int32) // only looked up, never ranged over
-	for s := range segs {
-		if s == int(r.first[segs[s].side]) {
-			begin[segs[s].a] = int32(s)
-		}
-	}
-	for s := range segs {
-		if segs[s].next >= 0 {
+	for side, next := range r.outline.next {
+		if !sharpCorner(r.outline.sides[side].Curve, r.outline.sides[next].Curve) {
 			continue
 		}
-		n, ok := begin[segs[s].b]
-		if !ok || !sharpCorner(r.sides[segs[s].side].Curve, r.sides[segs[n].side].Curve) {
-			continue
-		}
-		corner := segs[s].b
-		r.sharp[corner] = true
-		r.shell[segs[s].a] = corner
-		r.shell[segs[n].b] = corner
+		before, behind := &r.segs[r.outline.last[side]], &r.segs[r.outline.first[next]]
+		r.sharp[before.b] = true
+		r.shell[before.a] = before.b
+		r.shell[behind.b] = before.b
 	}
 }
 
 // A shape is what decides about a triangle.
 type shape struct {
-	k       int     // corner opposite the shortest edge
-	short2  float64 // square of the shortest edge
-	area2   float64 // twice the area
-	small   bool    // it has a small angle
-	large   bool    // it has an edge longer than wished for
-	badness float64
+	k      int     // corner opposite the shortest edge
+	short2 float64 // square of the shortest edge
+	area2  float64 // twice the area
+	small  bool    // it has a small angle
+	large  bool    // it has an edge longer than wished for
 }
 
 // sin2Good is sin² of the smallest angle aimed for.
@@ -130,11 +117,10 @@ func (r *refiner) measure(i int32) shape {
 	h := r.field.at(mid)
 	limit := min(oversize*h, r.field.largest)
 	s.large = d[l] > limit*limit
-	s.badness = d[k]
 	return s
 }
 
-func (r *refiner) point(v int32) r2.Vec { return r.triangulation.points[v] }
+func (r *refiner) point(v int32) r2.Vec { return r.points[v] }
 
 // judge puts triangle i into the queue if it is bad.
 func (r *refiner) judge(i int32) {
@@ -142,7 +128,7 @@ func (r *refiner) judge(i int32) {
 		return
 	}
 	if s := r.measure(i); s.small || s.large {
-		r.queue.push(entry{float32(s.badness), i, r.tris[i].stamp})
+		r.queue.push(s.short2, entry{i, r.tris[i].stamp})
 	}
 }
 
@@ -179,8 +165,8 @@ func (r *refiner) improve(i int32) error {
 }
 
 func (r *refiner) addVertex(p r2.Vec) int32 {
-	v := int32(len(r.triangulation.points))
-	r.triangulation.points = append(r.triangulation.points, p)
+	v := int32(len(r.points))
+	r.points = append(r.points, p)
 	r.at = append(r.at, 0)
 	r.sharp = append(r.sharp, false)
 	r.shell = append(r.shell, -1)
@@ -200,7 +186,7 @@ func (r *refiner) excused(u, v int32) bool {
 
 // encroaches tells whether p sees a segment at more than 120°.
 func (r *refiner) encroaches(p r2.Vec, seg int32) bool {
-	s := &r.triangulation.segs[seg]
+	s := &r.segs[seg]
 	u, w := r2.Sub(r.point(s.a), p), r2.Sub(r.point(s.b), p)
 	dot := r2.Dot(u, w)
 	return dot < 0 && dot*dot > lensCosine*lensCosine*r2.Norm2(u)*r2.Norm2(w)
@@ -220,7 +206,7 @@ func (r *refiner) steiner(i int32, s shape) r2.Vec {
 	d = min(d, l*offCentre)
 	if s.large {
 		h := r.field.at(m)
-		h = r.field.at(r2.Add(m, r2.Scale(0.4*min(h, 2*l), n)))
+		h = r.field.at(r2.Add(m, r2.Scale(0.5*min(h, 2*l), n)))
 		if l < 1.5*h {
 			d = min(d, math.Sqrt(h*h-s.short2/4))
 		}
@@ -247,10 +233,3 @@ func (r *refiner) cutFor(i, seg int32) error {
 	}
 	return nil
 }
-
-// curvePoint gives a point of a segment's curve.
-func (r *refiner) curvePoint(s *segment, t float64) r2.Vec {
-	return r.sides[s.side].Curve.At(t)
-}
-
-var _ outline.Curve = outline.Line{}

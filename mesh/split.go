@@ -12,26 +12,26 @@ import (
 // to a sharp corner at its end. The new vertex lies on the true curve, on either
 // side of the chord. It reports false if the segment is too short to be cut.
 func (r *refiner) cutSegment(seg int32, depth int) (bool, error) {
-	s := r.triangulation.segs[seg]
+	s := r.segs[seg]
 	if dist2(r.point(s.a), r.point(s.b)) < r.shortest2 {
 		return false, nil
 	}
 	t, corner := r.middle(&s)
-	p := r.curvePoint(&s, t)
+	p := r.outline.sides[s.side].Curve.At(t)
 	i, k := r.edge(s.a, s.b)
 	ring, ok := r.open(i, k, seg, p)
 	if !ok {
 		r.constrain(i, k, seg)
 		if ring >= 0 && depth < 40 {
 			// Another curve's chord is in the way.
-			if other := r.cavity.ring[ring].seg; other >= 0 && r.triangulation.segs[other].curved {
+			if other := r.cavity.ring[ring].seg; other >= 0 && r.segs[other].curved {
 				if done, err := r.cutSegment(other, depth+1); err != nil || !done {
 					return false, err
 				}
 				return r.cutSegment(seg, depth+1)
 			}
 		}
-		return false, fmt.Errorf("side %d (%q) touches or crosses another near (%g, %g)", s.side, r.sides[s.side].Name, p.X, p.Y)
+		return false, fmt.Errorf("side %d (%q) touches or crosses another near (%g, %g)", s.side, r.outline.sides[s.side].Name, p.X, p.Y)
 	}
 	v := r.addVertex(p)
 	r.shell[v] = corner
@@ -46,7 +46,7 @@ func (r *refiner) cutSegment(seg int32, depth int) (bool, error) {
 // middle gives the parameter to cut a segment at, and the sharp corner on whose
 // shell that is, or -1.
 func (r *refiner) middle(s *segment) (t float64, corner int32) {
-	c := r.sides[s.side].Curve
+	c := r.outline.sides[s.side].Curve
 	half := dist(r.point(s.a), r.point(s.b)) / 2
 	switch a, b := r.sharp[s.a], r.sharp[s.b]; {
 	case a && !b:
@@ -72,7 +72,7 @@ func (r *refiner) open(i int32, k int, seg int32, p r2.Vec) (ring int, ok bool) 
 		return ring, false
 	}
 	// Nothing may lie between the chord and the point.
-	s := &r.triangulation.segs[seg]
+	s := &r.segs[seg]
 	a, b := r.point(s.a), r.point(s.b)
 	if side := predicate.Orient(a, b, p); side != 0 {
 		for _, e := range r.cavity.ring {
@@ -92,14 +92,14 @@ func (r *refiner) open(i int32, k int, seg int32, p r2.Vec) (ring int, ok bool) 
 // just been made, and says which of the fan's triangles are inside: those passed
 // when going around counter-clockwise from the segment's end to its begin.
 func (r *refiner) halve(seg, v int32, t float64) {
-	s := &r.triangulation.segs[seg]
+	s := &r.segs[seg]
 	second := *s
 	second.a, second.t0 = v, t
-	id := int32(len(r.triangulation.segs))
+	id := int32(len(r.segs))
 	end := s.b
 	s.b, s.t1, s.next = v, t, id
 	begin := s.a
-	r.triangulation.segs = append(r.triangulation.segs, second)
+	r.segs = append(r.segs, second)
 
 	ring, fan := r.cavity.ring, r.cavity.tris
 	at := 0

@@ -79,7 +79,7 @@ func triangulate(b *boundary) (*triangulation, []int32, error) {
 			continue
 		}
 		curved := bad.of(t)
-		if len(curved) == 0 {
+		if len(curved) == 0 || bad.certain(t, b) {
 			return nil, nil, bad.err(t, b)
 		}
 		coarse = append(coarse, curved...)
@@ -102,6 +102,35 @@ func (c crossing) of(t *triangulation) []int32 {
 		}
 	}
 	return curved
+}
+
+// certain tells whether two segments cross so clearly that their curves must
+// cross as well. Each curve keeps within a band about its chord; if the ends of
+// each segment lie on either side of the other's chord and farther away than
+// both bands are wide, the curves have to pass through each other.
+func (c crossing) certain(t *triangulation, b *boundary) bool {
+	if c.other < 0 {
+		return false
+	}
+	s, o := &t.segs[c.seg], &t.segs[c.other]
+	band := b.band(s) + b.band(o)
+	beyond := func(s, o *segment) bool {
+		p, q := t.points[s.a], t.points[s.b]
+		l := dist(p, q)
+		d, e := area2(p, q, t.points[o.a])/l, area2(p, q, t.points[o.b])/l
+		return min(d, e) < -band && max(d, e) > band
+	}
+	return beyond(s, o) && beyond(o, s)
+}
+
+// band bounds the distance of a segment's curve from its chord: a curve that
+// turns by φ keeps within the triangle with the angle φ at one end of the chord.
+func (b *boundary) band(s *segment) float64 {
+	if !s.curved {
+		return 0
+	}
+	c := b.sides[s.side].Curve
+	return c.Length(s.t0, s.t1) * turning(c, s.t0, s.t1)
 }
 
 func (c crossing) err(t *triangulation, b *boundary) error {
