@@ -207,7 +207,7 @@ func TestAreaAndPerimeterConverge(t *testing.T) {
 func conforms(t *testing.T, c *Curved) {
 	t.Helper()
 	// The basis is 1 and 0 at its nodes to some hundred units of rounding.
-	const rounding = 5e-14
+	rounding := 5e-14 * extent(c.Nodes)
 	el := c.Element
 	used := make([]int, len(c.Nodes))
 	for tri := range c.Mesh.Triangles {
@@ -244,11 +244,19 @@ func conforms(t *testing.T, c *Curved) {
 		for i, local := range el.Edge(int(e.Opposite)) {
 			want := sides[e.Side].Curve.At(e.T0 + line.Nodes[i]*(e.T1-e.T0))
 			got := c.Nodes[c.Triangle(int(e.Triangle))[local]]
-			if r2.Norm(r2.Sub(got, want)) > 1e-14 {
+			if r2.Norm(r2.Sub(got, want)) > rounding {
 				t.Errorf("order %d: node %d of an edge on side %d at %v, curve at %v", el.Order, i, e.Side, got, want)
 			}
 		}
 	}
+}
+
+func extent(points []r2.Vec) float64 {
+	size := 0.0
+	for _, p := range points {
+		size = max(size, math.Abs(p.X), math.Abs(p.Y))
+	}
+	return size
 }
 
 func TestCurvedMeshesConform(t *testing.T) {
@@ -309,6 +317,38 @@ func TestBlendingIsExact(t *testing.T) {
 func ends(c *Curved, tri, k int) (a, b r2.Vec) {
 	corners := c.Mesh.Triangles[tri]
 	return c.Mesh.Points[corners[(k+1)%3]], c.Mesh.Points[corners[(k+2)%3]]
+}
+
+// Meshes of real parts conform and hold: an arc may be as coarse as one edge a
+// quarter turn.
+func TestGeneratedMeshesCurve(t *testing.T) {
+	for name, part := range map[string]struct {
+		region *outline.Region
+		side   int
+	}{
+		"fillet": {stepped(1.5, 1, 0.1), filletSide},
+		"sharp":  {stepped(2, 1, 1e-4), filletSide},
+		"hole":   {holed(4, 3, [3]float64{2, 1.5, 0.8}), 4},
+		"notch":  {notched(4, 1, 0.9), 3},
+	} {
+		for _, perQuarter := range []float64{0, 1, 3} {
+			size := Sizing{}
+			if perQuarter > 0 {
+				size.Sides = []SideWish{{Side: part.side, PerQuarter: perQuarter}}
+			}
+			m, err := Generate(part.region, size)
+			if err != nil {
+				t.Fatal(err)
+			}
+			for _, order := range []int{1, 2, 5, 8} {
+				c := m.Curve(order)
+				conforms(t, c)
+				if err := c.Validate(); err != nil {
+					t.Errorf("%s, %g a quarter, order %d: %v", name, perQuarter, order, err)
+				}
+			}
+		}
+	}
 }
 
 func TestStraightTriangles(t *testing.T) {

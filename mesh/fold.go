@@ -25,19 +25,19 @@ func (f *Fold) Error() string {
 // Validate returns a *Fold as error for the first triangle whose Jacobian is
 // not positive throughout.
 func (c *Curved) Validate() error {
-	if _, folds := c.Quality(); len(folds) > 0 {
+	if _, folds := c.LeastJacobian(); len(folds) > 0 {
 		return &folds[0]
 	}
 	return nil
 }
 
-// Quality gives the least ratio of a Jacobian to the straight triangle's over
+// LeastJacobian gives the least ratio of a Jacobian to the straight triangle's over
 // the whole mesh, by its lower bound: 1 if no triangle is bent, near 1 for
 // gentle bends, at most 0 if triangles fold over. Those are listed.
 //
 // The remedy for a fold is in the mesh, not in the nodes: halve Fold.Edge,
 // which makes the bulge a quarter, or give the triangle more height.
-func (c *Curved) Quality() (least float64, folds []Fold) {
+func (c *Curved) LeastJacobian() (least float64, folds []Fold) {
 	least = 1
 	b := newBounder(c.Element.Order)
 	for t := range c.Straight {

@@ -160,14 +160,14 @@ func TestBoundsOfKnownDeterminant(t *testing.T) {
 	}
 }
 
-func TestQualityOfGoodMeshes(t *testing.T) {
+func TestLeastJacobianOfGoodMeshes(t *testing.T) {
 	for order := 1; order <= 8; order++ {
 		for _, m := range []*Mesh{disc(1, 1, 2), disc(2, 1, 3), sector(1, 2, 2)} {
 			c := m.Curve(order)
 			if err := c.Validate(); err != nil {
 				t.Errorf("order %d: %v", order, err)
 			}
-			least, _ := c.Quality()
+			least, _ := c.LeastJacobian()
 			worst := 1.0
 			for tri := range m.Triangles {
 				low, high := c.JacobianBounds(tri)
@@ -177,7 +177,7 @@ func TestQualityOfGoodMeshes(t *testing.T) {
 				}
 			}
 			if least != worst {
-				t.Errorf("order %d: quality %g, worst bound %g", order, least, worst)
+				t.Errorf("order %d: least jacobian %g, worst bound %g", order, least, worst)
 			}
 		}
 	}
@@ -223,12 +223,12 @@ func TestThinTriangleBesideNotchFolds(t *testing.T) {
 // Two edges of one triangle on the same smooth curve meet at a corner of 180°,
 // where the Jacobian of the true curve vanishes: with each order less than a
 // fifth is left of it.
-func TestFlatCornerHasNoQuality(t *testing.T) {
+func TestFlatCornerVanishes(t *testing.T) {
 	for order := 2; order <= 8; order++ {
-		flat, _ := arch(0).Curve(order).Quality()
-		pointed, _ := arch(1).Curve(order).Quality()
+		flat, _ := arch(0).Curve(order).LeastJacobian()
+		pointed, _ := arch(1).Curve(order).LeastJacobian()
 		if limit := 0.4 * math.Pow(5, float64(2-order)); flat > limit || pointed < 0.25 {
-			t.Errorf("order %d: quality %g of a flat corner, %g of a pointed one", order, flat, pointed)
+			t.Errorf("order %d: jacobian %g at a flat corner, %g at a pointed one", order, flat, pointed)
 		}
 	}
 }
@@ -241,15 +241,15 @@ func TestTurnedTriangleIsAFold(t *testing.T) {
 		c.Nodes[i].X = -c.Nodes[i].X
 	}
 	copy(m.Points, c.Nodes)
-	least, folds := c.Quality()
+	least, folds := c.LeastJacobian()
 	if least > 0 || len(folds) != len(m.Triangles) {
 		t.Errorf("%d folds of %d triangles, least %g", len(folds), len(m.Triangles), least)
 	}
 }
 
-func BenchmarkQuality(b *testing.B) {
+func BenchmarkLeastJacobian(b *testing.B) {
 	c := disc(1, 1, 6).Curve(6)
 	for b.Loop() {
-		c.Quality()
+		c.LeastJacobian()
 	}
 }
