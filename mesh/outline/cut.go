@@ -44,7 +44,6 @@ type cutter struct {
 	n, along  r2.Vec
 	near      float64 // depths closer than this are the same
 	stretches []stretch
-	landmarks []float64 // depths at which the cut may change its character
 }
 
 // sameDepth is a fraction of the region's size: a face whose corners' depths
@@ -72,16 +71,10 @@ func (r *Region) cutter(n r2.Vec) *cutter {
 					d = k.depth(s.Curve.At(t))
 				}
 				k.stretches = append(k.stretches, stretch{s.Curve, t0, t, d0, d})
-				k.landmarks = append(k.landmarks, d0)
 				t0, d0 = t, d
-			}
-			for _, t := range turningPoints(s.Curve, k.along) {
-				k.landmarks = append(k.landmarks, k.depth(s.Curve.At(t)))
 			}
 		}
 	}
-	slices.Sort(k.landmarks)
-	k.landmarks = slices.Compact(k.landmarks)
 	return k
 }
 

@@ -3,6 +3,7 @@ package outline
 import (
 	"fmt"
 	"math"
+	"slices"
 )
 
 // A Smallest is the least section of a region in a range of x. On a plain
@@ -31,7 +32,7 @@ func (r *Region) SmallestSection(x0, x1 float64, measure func([]Interval) float6
 	}
 	k := r.cutter(axisX)
 	marks := []float64{x0}
-	for _, d := range k.landmarks {
+	for _, d := range k.landmarks(r) {
 		if d > marks[len(marks)-1]+k.near && d < x1-k.near {
 			marks = append(marks, d)
 		}
@@ -44,6 +45,22 @@ func (r *Region) SmallestSection(x0, x1 float64, measure func([]Interval) float6
 		}
 	}
 	return s.best, nil
+}
+
+// landmarks lists in rising order the depths at which the cut may change its
+// character: of corners, and where a curve runs along or across the depth.
+func (k *cutter) landmarks(r *Region) []float64 {
+	var ds []float64
+	for _, s := range k.stretches {
+		ds = append(ds, s.d0)
+	}
+	for _, s := range r.Sides() {
+		for _, t := range turningPoints(s.Curve, k.along) {
+			ds = append(ds, k.depth(s.Curve.At(t)))
+		}
+	}
+	slices.Sort(ds)
+	return ds
 }
 
 type sweep struct {
