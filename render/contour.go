@@ -4,10 +4,9 @@ import "math"
 
 // contours traces the lines on which a raster takes a level, by marching over
 // squares of four pixel centres. Lines end at the edge of the material; closed
-// ones end where they begin. Positions are linear between centres. Squares in
-// which the value rises by less than flat a pixel are passed over.
-func contours(r *raster, level, flat float64) [][]point {
-	t := tracer{r: r, level: level, flat: flat, w: r.area.Dx(), links: make(map[int][2]int)}
+// ones end where they begin. Positions are linear between centres.
+func contours(r *raster, level float64) [][]point {
+	t := tracer{r: r, level: level, w: r.area.Dx(), links: make(map[int][2]int)}
 	for y := 0; y+1 < r.area.Dy(); y++ {
 		for x := 0; x+1 < t.w; x++ {
 			t.square(x, y)
@@ -21,7 +20,6 @@ func contours(r *raster, level, flat float64) [][]point {
 type tracer struct {
 	r     *raster
 	level float64
-	flat  float64
 	w     int
 	links map[int][2]int // the one or two crossings that a crossing is tied to, −1: none
 	order []int          // crossings as they were found, which fixes the order of the lines
@@ -34,7 +32,7 @@ func (t *tracer) square(x, y int) {
 	a, b, c, d := v[i], v[i+1], v[i+t.w+1], v[i+t.w] // clockwise from the top left
 	// Comparisons with NaN are false, so that squares at the rim drop out here.
 	lo, hi := math.Min(math.Min(a, b), math.Min(c, d)), math.Max(math.Max(a, b), math.Max(c, d))
-	if !(lo < t.level && hi >= t.level) || hi-lo < t.flat {
+	if !(lo < t.level && hi >= t.level) {
 		return
 	}
 	top, right, bottom, left := 2*i, 2*(i+1)+1, 2*(i+t.w), 2*i+1

@@ -13,17 +13,24 @@ type contour struct {
 	gaps  []box // where labels stand
 }
 
-// trace finds the contours of a raster. Where the field is so flat that the
-// next level would be farther away than faraway pixels, the place of a line
-// means nothing (it is the solution's last digits) and none is drawn.
-func trace(r *raster, list []float64, faraway float64) []contour {
+// trace finds the contours of a raster. A level at which a whole stretch of the
+// part lies, as the nominal stress in a plain bar, has no line: its place would
+// be made of the solution's last digits. Such a level is known by more than a
+// twentieth of the material lying within a fiftieth of a step of it, where an
+// even spread would put a twenty-fifth of a step's share.
+func trace(r *raster, list []float64) []contour {
 	cs := make([]contour, len(list))
 	if len(list) == 0 {
 		return cs
 	}
 	step := list[0] // the first level is one step above zero
 	concurrently(len(list), func() func(i int) {
-		return func(i int) { cs[i] = contour{level: list[i], lines: contours(r, list[i], step/faraway)} }
+		return func(i int) {
+			cs[i].level = list[i]
+			if r.share(list[i], step/50) < 0.05 {
+				cs[i].lines = contours(r, list[i])
+			}
+		}
 	})
 	return cs
 }
@@ -32,7 +39,7 @@ func trace(r *raster, list []float64, faraway float64) []contour {
 // ones in the narrowest places. A label stands on its line, upright, where all of it
 // is on the material and clear of other lettering; a line without such a place
 // has none. most is the number of labels a level.
-func (s *sheet) label(v *view, r *raster, cs []contour, top float64, most int) {
+func (s *sheet) label(v *view, r *raster, cs []contour, most int) {
 	for i := len(cs) - 1; i >= 0; i-- {
 		c := &cs[i]
 		text := levelText(c.level)
@@ -67,11 +74,12 @@ func (s *sheet) spot(v *view, r *raster, line []point, text string) (box, bool) 
 }
 
 // contours strokes the lines, and letters the labels in the gaps left for them.
+// Islands are left alone.
 func (s *sheet) contours(cs []contour, top float64) {
 	for _, c := range cs {
 		s.pen(over(c.level/top), 1)
 		for _, line := range c.lines {
-			s.gapped(line, c.gaps)
+			s.gapped(line, append(c.gaps, s.islands...))
 		}
 		s.dc.Stroke()
 		for _, b := range c.gaps {

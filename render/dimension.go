@@ -117,4 +117,5 @@ func (s *sheet) value(center point, text string) {
 	s.dc.DrawRectangle(b.X0, b.Y0, b.width(), b.height())
 	s.dc.Fill()
 	s.text(center, 0.5, 0.5, text, normal, ink)
+	s.islands = append(s.islands, b)
 }

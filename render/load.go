@@ -20,15 +20,25 @@ func (s *sheet) load(v *view, load scf.Load, left, right float64) {
 		switch load {
 		case scf.Tension:
 			s.force(root, out, 1)
+			s.symbolOf("P", root.toward(out, s.u(loadLength/2)).plus(0, -s.u(10)))
 		case scf.Torsion:
 			s.force(root, out, 2)
+			s.symbolOf("T", root.toward(out, s.u(loadLength/2)).plus(0, -s.u(10)))
 		case scf.Bending:
 			s.moment(root.toward(out, s.u(4)), end.sign)
+			s.symbolOf("M", root.toward(out, s.u(loadLength/2)).plus(0, -s.u(28)))
 		}
 	}
 }
 
 const loadLength = 44
+
+// symbolOf letters a load's letter above its arrow, where there is room.
+func (s *sheet) symbolOf(letter string, p point) {
+	if s.free(s.place(p, 0.5, 1, letter, small)) {
+		s.text(p, 0.5, 1, letter, small, accent)
+	}
+}
 
 // force draws an arrow from root along out with a number of heads.
 func (s *sheet) force(root, out point, heads int) {

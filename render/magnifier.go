@@ -6,14 +6,13 @@ import (
 	"gonum.org/v1/gonum/spatial/r2"
 
 	"notchproof/mesh/outline"
-	"notchproof/verify"
 	"notchproof/verify/specimen"
 )
 
 // detail is the magnified view of the place where the factor sits: a circle
 // about the root, so large that the notch's curve there fills about half of it.
 // Its scale is a round multiple of the main view's.
-func detail(part *specimen.Part, peak verify.Peak, main *view, center point, radius float64) (v *view, times float64) {
+func detail(part *specimen.Part, peak r2.Vec, main *view, center point, radius float64) (v *view, times float64) {
 	about, reach := root(part, peak)
 	times = roundScale(radius / reach / main.scale)
 	v = &view{scale: times * main.scale, window: circle(center, radius)}
@@ -28,8 +27,7 @@ func detail(part *specimen.Part, peak verify.Peak, main *view, center point, rad
 // root gives the middle and the radius of the neighbourhood of a peak: what is
 // within one and a half radii of curvature of it, the curve's whole extent at
 // most.
-func root(part *specimen.Part, peak verify.Peak) (about r2.Vec, reach float64) {
-	at := r2.Vec{X: peak.X, Y: peak.Y}
+func root(part *specimen.Part, at r2.Vec) (about r2.Vec, reach float64) {
 	var curve outline.Curve
 	best := math.Inf(1)
 	for _, i := range part.Notch {
@@ -70,9 +68,8 @@ func (s *sheet) magnified(main, v *view, letter string) {
 	}
 }
 
-// peak marks the place of the factor: a ring on the surface, with the factor
-// beyond the end of its needle.
-func (s *sheet) peak(v *view, at point) {
+// peak marks the place of the factor: a ring on the surface.
+func (s *sheet) peak(at point) {
 	s.pen(accent, 2)
 	s.dc.DrawCircle(at.X, at.Y, s.u(6))
 	s.dc.Stroke()

@@ -100,59 +100,66 @@ func (p *plate) note(antisymmetric bool) string {
 	return ""
 }
 
-// Quills: the distance between them and the length of the largest, in units;
-// the curve through their ends has perNeedle points for each of them.
+// Quills: the distance between them and the length of the largest, in units.
 const (
-	perNeedle = 6
-
 	mainStep, mainQuill   = 7, 70
 	closeStep, closeQuill = 9, 100
 )
 
 func (p *plate) draw() {
 	main, left, right := mainView(p.part, p.area(165, 112, 1435, 512), p.scale)
-	close, times := detail(p.part, p.finding.Computed.Peak, main, point{p.u(detailX), p.u(detailY)}, p.u(detailRadius))
+	peak := r2.Vec{X: p.finding.Computed.Peak.X, Y: p.finding.Computed.Peak.Y}
+	close, times := detail(p.part, peak, main, point{p.u(detailX), p.u(detailY)}, p.u(detailRadius))
 	p.text(point{p.u(50), p.u(blockTop - 96)}, 0, 0, "A", head, ink)
 	p.text(point{p.u(50) + p.u(24), p.u(blockTop - 94)}, 0, 0, levelText(times)+" : 1 of the view above", normal, grey)
 
+	field := p.paint(main)
 	e := extentOf(p.part)
-	p.quills(main, p.needles(main, mainStep, 0.5*(e.high-e.low)), p.u(mainQuill)/p.top, perNeedle)
+	p.quills(main, p.needles(main, peak, 0.5*(e.high-e.low)), p.u(mainQuill)/p.top, p.u(mainStep))
 	p.annotate(main, p.part, left, right)
 	p.magnified(main, close, "A")
-	p.view(main, 2)
+	p.lines(main, field, 2)
 	p.breaks(main, p.part, left, right)
 	if p.part.Half {
 		p.symmetry(main, 18)
 	}
 	p.load(main, p.finding.Load.Name, left, right)
-	p.closeUp(close)
+
+	p.closeUp(close, peak)
 }
 
 // closeUp draws the magnified root in its circle.
-func (p *plate) closeUp(v *view) {
+func (p *plate) closeUp(v *view, peak r2.Vec) {
 	b := v.bounds()
 	x, y := b.middle()
-	needles := p.needles(v, closeStep, 1.5*b.width()/v.scale)
+	field := p.paint(v)
+	needles := p.needles(v, peak, 1.5*b.width()/v.scale)
 	p.within(v)
-	p.quills(v, needles, p.u(closeQuill)/p.top, perNeedle)
+	p.quills(v, needles, p.u(closeQuill)/p.top, p.u(closeStep))
 	p.dc.ResetClip()
-	p.view(v, 1)
+	p.lines(v, field, 1)
 	p.pen(ink, wide)
 	p.dc.DrawCircle(x, y, b.width()/2)
 	p.dc.Stroke()
-	p.peak(v, v.at(r2.Vec{X: p.finding.Computed.Peak.X, Y: p.finding.Computed.Peak.Y}))
+	p.peak(v.at(peak))
 }
 
-// view draws field, contours and edges in one view; most is the number of
-// labels a level.
-func (p *plate) view(v *view, most int) {
+// paint lays the field of a view on the sheet, with soft edges, and gives its
+// values.
+func (p *plate) paint(v *view) *raster {
 	r := p.field.shade(v)
-	cs := trace(r, p.levels, p.u(2*defaultWidth))
-	p.label(v, r, cs, p.top, most)
-	r.bleed(2)
+	soft := r.bled(2)
 	mask := coverage(r.area, v.loops(p.part)...)
 	multiply(mask, coverage(r.area, v.window))
-	draw.DrawMask(p.im, r.area, r.picture(p.top), r.area.Min, mask, r.area.Min, draw.Over)
+	draw.DrawMask(p.im, r.area, soft.picture(p.top), r.area.Min, mask, r.area.Min, draw.Over)
+	return r
+}
+
+// lines draws elements, contours and edges over the field of a view; most is
+// the number of labels a level.
+func (p *plate) lines(v *view, r *raster, most int) {
+	cs := trace(r, p.shown(r))
+	p.label(v, r, cs, most)
 	p.within(v)
 	if p.options.Mesh {
 		p.elements(v, p.finding.Computed.Last.Problem.Shape)
@@ -162,10 +169,19 @@ func (p *plate) view(v *view, most int) {
 	p.dc.ResetClip()
 }
 
-// needles gives the surface stress where the peak lies, perNeedle times in every
-// step units as far as reach (a length of the part) to both sides of the peak.
-func (p *plate) needles(v *view, step, reach float64) []needle {
-	peak := r2.Vec{X: p.finding.Computed.Peak.X, Y: p.finding.Computed.Peak.Y}
+// shown gives the levels of the contours of a view: those of the legend, and a
+// finer set where the view shows little but the lower end of the ramp.
+func (p *plate) shown(r *raster) []float64 {
+	const most, few = 0.98, 0.4
+	if high := r.quantile(most, p.top); high < few*p.top {
+		return levels(high, 6)
+	}
+	return p.levels
+}
+
+// needles gives the stress along the surface that the peak lies on, as far as
+// reach (a length of the part) to both sides of the peak.
+func (p *plate) needles(v *view, peak r2.Vec, reach float64) []needle {
 	var on *surface
 	at, gap := 0.0, math.Inf(1)
 	for i := range p.surfaces {
@@ -176,7 +192,8 @@ func (p *plate) needles(v *view, step, reach float64) []needle {
 	if on == nil {
 		return nil
 	}
-	return on.needles(at, p.u(step)/v.scale/perNeedle, reach)
+	const spacing = 1.5 // units
+	return on.needles(at, p.u(spacing)/v.scale, reach)
 }
 
 func multiply(a, b *image.Alpha) {

@@ -39,6 +39,7 @@ type geometry struct {
 	d           scf.Dims
 	part        *specimen.Part
 	left, right float64 // where the drawn part is broken off
+	extent
 }
 
 // side gives the curve of the first side with a name.
@@ -53,10 +54,17 @@ func (g geometry) side(name string) outline.Curve {
 
 // placements lists the dimensions of each family in the order of drawing.
 func placements() map[string][]placement {
-	shoulder := shoulderPlacements()
 	return map[string][]placement{
-		"bar-shoulder":   shoulder,
-		"shaft-shoulder": shoulder,
+		"bar-shoulder":      shoulderPlacements(),
+		"bar-notch":         notchPlacements(),
+		"bar-edge-notch":    edgeNotchPlacements(),
+		"bar-hole":          holePlacements(),
+		"bar-ellipse":       ellipsePlacements(),
+		"bar-collar":        collarPlacements(),
+		"shaft-shoulder":    shoulderPlacements(),
+		"shaft-groove":      notchPlacements(),
+		"shaft-ring-groove": ringGroovePlacements(),
+		"shaft-collar":      collarPlacements(),
 	}
 }
 
@@ -87,7 +95,7 @@ func radiusBelow(name string) func(g geometry) (a, b r2.Vec) {
 
 // annotate draws all dimensions of a part in a view.
 func (s *sheet) annotate(v *view, part *specimen.Part, left, right float64) {
-	g := geometry{part.Dims, part, left, right}
+	g := geometry{part.Dims, part, left, right, extentOf(part)}
 	rows := 0
 	for _, p := range placements()[part.Family.Name] {
 		if p.Skip != nil && p.Skip(part.Dims) {

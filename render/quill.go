@@ -2,6 +2,7 @@ package render
 
 import (
 	"math"
+	"sort"
 
 	"gonum.org/v1/gonum/spatial/r2"
 
@@ -15,6 +16,7 @@ type needle struct {
 	At     r2.Vec
 	Normal r2.Vec // out of the material
 	Value  float64
+	behind float64 // distance along the surface from where the needles were asked for
 }
 
 // A station is a piece of a free surface: a boundary edge and the length of
@@ -137,7 +139,7 @@ func (c *surface) needle(at float64) needle {
 	}
 	st := c.stations[k]
 	p := c.solution.Surface(st.edge, math.Max(0, math.Min(1, (at-st.from)/(st.to-st.from))))
-	return needle{p.At, p.Normal, c.of(p)}
+	return needle{At: p.At, Normal: p.Normal, Value: c.of(p)}
 }
 
 // nearest gives the distance along the surface at which it comes closest to a
@@ -157,17 +159,28 @@ func (c *surface) nearest(to r2.Vec) (at, gap float64) {
 	return at, gap
 }
 
-// needles reads the surface at even steps to both sides of a distance along
-// it, as far as reach.
+// needles reads the surface around a distance along it, as far as reach to both
+// sides: at even steps, and ever closer together towards the middle, where the
+// whole arc of a small root may be less than a step.
 func (c *surface) needles(at, step, reach float64) []needle {
 	if c.closed {
 		reach = math.Min(reach, c.length/2)
 	}
+	offsets := []float64{0}
+	const closer, least = 0.8, 1e-3
+	for d := step; d > least*step; d *= closer {
+		offsets = append(offsets, d, -d)
+	}
+	for d := 2 * step; d <= reach; d += step {
+		offsets = append(offsets, d, -d)
+	}
+	sort.Float64s(offsets)
 	var list []needle
-	for k := -int(reach / step); k <= int(reach/step); k++ {
-		d := at + float64(k)*step
-		if c.closed || d >= 0 && d <= c.length {
-			list = append(list, c.needle(d))
+	for _, d := range offsets {
+		if c.closed || at+d >= 0 && at+d <= c.length {
+			n := c.needle(at + d)
+			n.behind = d
+			list = append(list, n)
 		}
 	}
 	return list
@@ -175,22 +188,29 @@ func (c *surface) needles(at, step, reach float64) []needle {
 
 // quills draws needles as lines along the surface normal, long in proportion
 // to the stress, with the curve through their ends. Unit is the length of the
-// nominal stress in pixels; every so manyth needle is drawn, the one in the
-// middle, at the peak, among them. Lettering is kept off what they cover.
-func (s *sheet) quills(v *view, list []needle, unit float64, every int) {
+// nominal stress in pixels. From the middle outwards a needle is drawn wherever
+// its foot or its end is a space (pixels) from those of the one before.
+// Lettering is kept off what they cover.
+func (s *sheet) quills(v *view, list []needle, unit, space float64) {
 	if len(list) < 2 {
 		return
 	}
-	ends := make([]point, len(list))
-	s.pen(accent, hairline)
+	feet, ends := make([]point, len(list)), make([]point, len(list))
+	middle := 0
 	for i, n := range list {
-		foot := v.at(n.At)
-		ends[i] = foot.plus(n.Normal.X*n.Value*unit, -n.Normal.Y*n.Value*unit)
-		if (i-len(list)/2)%every == 0 {
-			s.dc.DrawLine(foot.X, foot.Y, ends[i].X, ends[i].Y)
-			for _, t := range [3]float64{0.3, 0.7, 1} {
-				p := between(foot, ends[i], t)
-				s.take(box{p.X, p.Y, p.X, p.Y}.grown(s.u(4)))
+		feet[i] = v.at(n.At)
+		ends[i] = feet[i].plus(n.Normal.X*n.Value*unit, -n.Normal.Y*n.Value*unit)
+		if math.Abs(n.behind) < math.Abs(list[middle].behind) {
+			middle = i
+		}
+	}
+	s.pen(accent, hairline)
+	for _, step := range [2]int{1, -1} {
+		last := middle
+		for i := middle; i >= 0 && i < len(list); i += step {
+			if i == middle || distance(feet[i], feet[last]) >= space || distance(ends[i], ends[last]) >= space {
+				s.quill(feet[i], ends[i])
+				last = i
 			}
 		}
 	}
@@ -199,3 +219,13 @@ func (s *sheet) quills(v *view, list []needle, unit float64, every int) {
 	s.polyline(ends)
 	s.dc.Stroke()
 }
+
+func (s *sheet) quill(foot, end point) {
+	s.dc.DrawLine(foot.X, foot.Y, end.X, end.Y)
+	for _, t := range [3]float64{0.3, 0.7, 1} {
+		p := between(foot, end, t)
+		s.take(box{p.X, p.Y, p.X, p.Y}.grown(s.u(4)))
+	}
+}
+
+func distance(p, q point) float64 { return math.Hypot(p.X-q.X, p.Y-q.Y) }

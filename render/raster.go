@@ -51,21 +51,58 @@ func (r *raster) covers(b box) bool {
 	return true
 }
 
-// bleed gives pixels beside the material the value of a neighbour, so that
-// pixels which the boundary cuts have one. It must follow the tracing of
-// contours, which have nothing to do out there.
-func (r *raster) bleed(steps int) {
+// share is the part of the material that is within a distance of a level.
+func (r *raster) share(level, within float64) float64 {
+	near, all := 0, 0
+	for _, v := range r.values {
+		if math.IsNaN(v) {
+			continue
+		}
+		all++
+		if math.Abs(v-level) <= within {
+			near++
+		}
+	}
+	return float64(near) / float64(max(1, all))
+}
+
+// quantile gives the value that a share q of the material does not exceed, to
+// a thousandth of top; what is above top counts as top.
+func (r *raster) quantile(q, top float64) float64 {
+	const bins = 1000
+	var count [bins + 1]int
+	all := 0
+	for _, v := range r.values {
+		if !math.IsNaN(v) {
+			count[int(bins*math.Max(0, math.Min(1, v/top)))]++
+			all++
+		}
+	}
+	seen := 0
+	for i, n := range count {
+		if seen += n; float64(seen) >= q*float64(all) {
+			return top * float64(i+1) / bins
+		}
+	}
+	return top
+}
+
+// bled gives a raster in which pixels beside the material have the value of
+// their neighbours, so that pixels which the boundary cuts have one.
+func (r *raster) bled(steps int) *raster {
 	w, h := r.area.Dx(), r.area.Dy()
+	wider := &raster{r.area, append([]float64(nil), r.values...)}
 	for range steps {
-		old := append([]float64(nil), r.values...)
+		old := append([]float64(nil), wider.values...)
 		for y := range h {
 			for x := range w {
 				if i := y*w + x; math.IsNaN(old[i]) {
-					r.values[i] = beside(old, w, h, x, y)
+					wider.values[i] = beside(old, w, h, x, y)
 				}
 			}
 		}
 	}
+	return wider
 }
 
 // beside is the mean of the values around a pixel, NaN when there are none.

@@ -40,6 +40,8 @@ type sheet struct {
 	faces map[lettering]font.Face
 	taken []box   // places that lettering keeps clear of
 	texts []label // all lettering, in order
+	// islands are pieces of paper on top of the part that carry dimensions.
+	islands []box
 }
 
 // A label is a piece of lettering that stands on a sheet.
