@@ -80,7 +80,7 @@ func balance(from, to, center r2.Vec) (r2.Vec, error) {
 		// Nearly closed: the chord is too short to say where the centre is.
 		return center, nil
 	}
-	return r2.Add(center, r2.Scale(shift/l, chord)), nil
+	return r2.Vec{X: center.X + float64(shift/l*chord.X), Y: center.Y + float64(shift/l*chord.Y)}, nil
 }
 
 func (a Arc) At(t float64) r2.Vec {

@@ -26,7 +26,7 @@ func bernsteinRoots(c []float64) []float64 {
 			return
 		case n == 1 && c[0] != 0 && c[len(c)-1] != 0:
 			s := bracketedRoot(func(s float64) (y, slope float64) { return bernstein(c, s) }, 0, 1, c[0] < 0)
-			add(lo + s*(hi-lo))
+			add(lo + float64(s*(hi-lo)))
 			return
 		case hi-lo < 0x1p-50:
 			add(lo)

@@ -199,6 +199,71 @@ func TestPathRoundTrip(t *testing.T) {
 	}
 }
 
+// Writing is settled after once, also for tilted ellipses, radii that are too
+// small, halves and nearly closed arcs.
+func TestPathSettles(t *testing.T) {
+	rng := rand.New(rand.NewPCG(15, 16))
+	num := func() string {
+		x := 10 * rng.NormFloat64()
+		if rng.IntN(2) == 0 {
+			x = math.Round(x)
+		}
+		return shortest(x) + " "
+	}
+	parsed := 0
+	for range 3000 {
+		data := "M" + num() + num()
+		for range 1 + rng.IntN(4) {
+			switch rng.IntN(4) {
+			case 0:
+				data += "L" + num() + num()
+			case 1:
+				data += "c" + num() + num() + num() + num() + num() + num()
+			default:
+				r := num()
+				data += string("Aa"[rng.IntN(2)]) + r
+				if rng.IntN(2) == 0 {
+					r = num()
+				}
+				flags := string("01"[rng.IntN(2)]) + " " + string("01"[rng.IntN(2)]) + " "
+				data += r + num() + flags + num() + num()
+			}
+		}
+		loops, err := ParsePath(data + "Z")
+		if err != nil {
+			continue
+		}
+		parsed++
+		text := FormatPath(loops)
+		if again := FormatPath(parse(t, text)); again != text {
+			t.Errorf("%q, written as\n%q, became\n%q", data, text, again)
+		}
+	}
+	if parsed < 2000 {
+		t.Errorf("only %d of 3000 could be read", parsed)
+	}
+	for _, sweep := range []float64{math.Pi, math.Pi - 1e-12, math.Pi + 1e-9, 3, 5.5, 6, 2*math.Pi - 1e-10, 2 * math.Pi} {
+		for range 100 {
+			far := r2.Scale(math.Exp(5*rng.Float64()), vec(rng.NormFloat64(), rng.NormFloat64()))
+			a := Arc{Center: far, Radius: math.Exp(rng.NormFloat64()), Start: 6 * rng.Float64(), Sweep: sweep}
+			l := Loop{{"", a}}
+			if sweep < 6.28318 {
+				l = append(l, Side{"", Line{a.At(1), a.At(0)}})
+			}
+			back, err := ParsePath(FormatPath([]Loop{l}))
+			if err != nil {
+				t.Errorf("sweep %g about %v: %v", sweep, far, err)
+				continue
+			}
+			for _, s := range back[0] {
+				if b, ok := s.Curve.(Arc); ok && r2.Norm(r2.Sub(a.Center, b.Center)) > 1e-13*(a.Radius+r2.Norm(far)) {
+					t.Errorf("sweep %g about %v: centre moves to %v", sweep, far, b.Center)
+				}
+			}
+		}
+	}
+}
+
 func FuzzParsePath(f *testing.F) {
 	for _, s := range []string{
 		"M0 0H10V5H0Z", "m.5.5h3.5v2.5h-3.5z", "M0 0A5 5 0 0110 0z", "M0 0a5 3 30 1110 0z",

@@ -98,9 +98,9 @@ func part(c Curve, t0, t1 float64, a, b r2.Vec) Curve {
 		c.P[0], c.P[3] = a, b
 		return c
 	case Arc:
-		return Arc{c.Center, c.Radius, c.Start + t0*c.Sweep, (t1 - t0) * c.Sweep, pinned(a, b)}
+		return Arc{c.Center, c.Radius, c.Start + float64(t0*c.Sweep), (t1 - t0) * c.Sweep, pinned(a, b)}
 	case EllipticArc:
-		return EllipticArc{c.Center, c.A, c.B, c.Tilt, c.Start + t0*c.Sweep, (t1 - t0) * c.Sweep, pinned(a, b)}
+		return EllipticArc{c.Center, c.A, c.B, c.Tilt, c.Start + float64(t0*c.Sweep), (t1 - t0) * c.Sweep, pinned(a, b)}
 	}
 	panic(foreignCurve)
 }
