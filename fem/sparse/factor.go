@@ -66,7 +66,7 @@ func (n *numeric) front(worker int, i int32, share sharing) {
 	k, r := f.pivots, len(f.border)
 	handed := n.handed(worker, i)
 	a := assembly{
-		pivots: k, width: area * tiles(k),
+		pivots:   k,
 		panel:    w.factor[f.factor:][:panelLen(k, r)],
 		schur:    handed[:schurLen(r)],
 		diagonal: h.diagonal[:k+r],

@@ -71,6 +71,7 @@ type substitution struct {
 	factor *Factor
 	x      []float64 // in the order of elimination
 	row    []float64 // the part of x that belongs to the pivots of a front
+	part   tile      // a block of its border
 }
 
 // load copies the pivots' part of x, with zeros up to whole blocks.
@@ -101,8 +102,8 @@ func (s *substitution) forward(f *front) {
 	}
 	copy(s.pivots(f), row)
 	for i := range tiles(len(f.border)) {
-		var memory tile
-		c := memory[:block]
+		s.part = tile{}
+		c := s.part[:block]
 		s.subtractProduct(c, row, p.row(k+i))
 		for j, n := range f.border[edge*i : min(edge*i+edge, len(f.border))] {
 			x := s.x[s.width*int(n):][:s.width]
@@ -118,11 +119,12 @@ func (s *substitution) backward(f *front) {
 	p, row := s.panel(f), s.load(f)
 	k, block := p.columns(), s.width*edge
 	for i := range tiles(len(f.border)) {
-		var c tile
+		s.part = tile{}
+		c := s.part[:block]
 		for j, n := range f.border[edge*i : min(edge*i+edge, len(f.border))] {
 			copy(c[s.width*j:], s.x[s.width*int(n):][:s.width])
 		}
-		s.subtractTransposed(row, c[:block], p.row(k+i))
+		s.subtractTransposed(row, c, p.row(k+i))
 	}
 	for j := k - 1; j >= 0; j-- {
 		l, c := p.row(j), row[block*j:][:block]

@@ -123,12 +123,12 @@ func TestPrescribedUnknownsAreLeftOut(t *testing.T) {
 			b[i] -= part[i*some.Unknowns+j] * x[j]
 		}
 	}
-	if d := distance(x, add(x, b)); d > 1e-12 {
+	if d := distance(x, plus(x, b)); d > 1e-12 {
 		t.Errorf("remainder is %.2g of the solution", d)
 	}
 }
 
-func add(x, y []float64) []float64 {
+func plus(x, y []float64) []float64 {
 	z := slices.Clone(x)
 	for i := range z {
 		z[i] += y[i]
