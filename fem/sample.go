@@ -80,6 +80,13 @@ func (s *Solution) Amplitude(tri int, xi, eta float64) Stress {
 	return stressOf(&stress)
 }
 
+// What is divided by the radius vanishes on the axis; there the quotient is the
+// derivative. Close to it, at a share y of an element's size, the quotient of
+// two small numbers is good to 1e-16/y only, while the
+// derivative is off by y² in a field as smooth as it should be, and by y times
+// the error of the strain in one that is not yet: the change is made at nearAxis.
+const nearAxis = 1e-6
+
 // operators applies ∂x, ∂y and 1/y to the unknowns at a point.
 func (s *Solution) operators(tri int, xi, eta float64) (grad [3][strainOperators]float64) {
 	shape := s.Problem.Shape
@@ -107,10 +114,7 @@ func (s *Solution) operators(tri int, xi, eta float64) (grad [3][strainOperators
 		if !s.revolved {
 			continue
 		}
-		// What is divided by the radius vanishes on the axis; there the
-		// quotient is the derivative. Close to it the quotient of two small
-		// numbers would lose its digits, so the step is not taken at zero alone.
-		if scale = a.Y*a.Y + b.Y*b.Y; at.Y*at.Y > 1e-20*scale {
+		if scale = a.Y*a.Y + b.Y*b.Y; at.Y*at.Y > nearAxis*nearAxis*scale {
 			grad[c][overY] = value / at.Y
 		} else {
 			grad[c][overY] = grad[c][alongY]

@@ -55,8 +55,8 @@ func (s *Solution) Surface(i int, at float64) SurfacePoint {
 		}
 		along /= length
 		grad[c] = [strainOperators]float64{t.X * along, t.Y * along, 0}
-		if s.revolved && p.Y > 0 {
-			grad[c][overY] = value / p.Y
+		if s.revolved {
+			grad[c][overY] = overRadius(value, along, p.Y, t.Y, length)
 		}
 	}
 	e := s.kin.strains(&grad, u)
@@ -68,6 +68,20 @@ func (s *Solution) Surface(i int, at float64) SurfacePoint {
 	sp.Tangential, sp.Hoop = s.freeSurface(tangential, e[zz])
 	sp.Shear = s.elastic[xz][xz] * (t.X*e[xz] + t.Y*e[yz])
 	return sp
+}
+
+// overRadius divides by the radius what vanishes on the axis. Close to it the
+// quotient is the derivative along the radius, which is that along the surface
+// over the surface's slope, as derivatives along the axis vanish there too. The
+// axis itself is no surface; zero keeps its points finite.
+func overRadius(value, along, radius, slope, length float64) float64 {
+	switch {
+	case radius > nearAxis*length:
+		return value / radius
+	case slope == 0:
+		return 0
+	}
+	return along / slope
 }
 
 // freeSurface gives the stresses of a free surface from the two direct strains
