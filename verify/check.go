@@ -62,7 +62,7 @@ func choose(p *specimen.Part, loads []scf.Load) ([]*specimen.Load, error) {
 	for _, name := range loads {
 		l, ok := p.Load(name)
 		if !ok {
-			return nil, fmt.Errorf("%s does not carry %s", p.Family.Name, name)
+			return nil, fmt.Errorf("%s does not carry %s", p.Name, name)
 		}
 		chosen = append(chosen, l)
 	}

@@ -25,10 +25,10 @@ const (
 func (c *climb) checks(s *shape, out *Computed) []Check {
 	sol := out.Last
 	last := out.Ladder[len(out.Ladder)-1]
-	jacobian, _ := s.order(last.Order).Quality()
+	jacobian, _ := s.order(last.Order).LeastJacobian()
 	list := []Check{
 		below("balance of forces and moments across the net section", imbalance(c.part, c.load, sol), forceLimit),
-		below("free-surface traction at the root", last.Leftover, leftoverLimit),
+		below("free-surface traction at the root", last.Leftover/last.Factor, leftoverLimit),
 	}
 	for i, plain := range c.part.Plain {
 		list = append(list, below("far-field stress in the "+plain.Name, farError(c.part, c.load, sol, i), farLimit))

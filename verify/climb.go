@@ -20,9 +20,8 @@ type stage struct {
 // as a rule; the later stages are for shapes or targets that ask for more.
 func stages() []stage {
 	return []stage{
-		{grading{perQuarter: 3, growth: 0.8, joint: 0.4}, 3, 8},
-		{grading{perQuarter: 6, growth: 0.5, joint: 0.2}, 4, 8},
-		{grading{perQuarter: 12, growth: 0.35, joint: 0.1}, 4, 8},
+		{grading{perQuarter: 6, growth: 0.5, joint: 0.2}, 2, 8},
+		{grading{perQuarter: 12, growth: 0.35, joint: 0.05}, 4, 8},
 	}
 }
 
@@ -80,12 +79,20 @@ func (c *climb) step(ctx context.Context, s *shape, order int, out *Computed) er
 	rung.PerQuarter = s.grading.perQuarter
 	out.Ladder = append(out.Ladder, rung)
 	out.Last, out.peaks = sol, peaks
-	orders := make([]int, len(out.Ladder))
-	factors, mises := make([]float64, len(out.Ladder)), make([]float64, len(out.Ladder))
-	for i, r := range out.Ladder {
-		orders[i], factors[i], mises[i] = r.Order, r.Factor, r.VonMises
-	}
-	out.Factor = extrapolate.Orders(orders, factors)
-	out.VonMises = extrapolate.Orders(orders, mises)
+	out.estimate()
 	return nil
+}
+
+// estimate reads the ladder as it stands.
+func (c *Computed) estimate() {
+	n := len(c.Ladder)
+	orders := make([]int, n)
+	rows := make([]float64, 4*n)
+	factors, mises, around, near := rows[:n], rows[n:2*n], rows[2*n:3*n], rows[3*n:]
+	for i, r := range c.Ladder {
+		orders[i], factors[i], mises[i] = r.Order, r.Factor, r.VonMises
+		around[i], near[i] = r.Around, r.Leftover
+	}
+	c.Factor = extrapolate.Witnessed(orders, factors, around, near)
+	c.VonMises = extrapolate.Witnessed(orders, mises, around, near)
 }

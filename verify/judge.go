@@ -11,13 +11,7 @@ import (
 func (f *Finding) judge(p *specimen.Part, o Options) {
 	e := f.Computed.Factor
 	settled := f.settle(o)
-	for _, v := range p.Family.Handbook(f.Load.Name, p.Dims, p.Options) {
-		c := HandbookComparison{v, compare(v.Factor, v.Accuracy*math.Abs(v.Factor), e, settled)}
-		if settled && !v.InRange {
-			c.Verdict = OutOfRange
-		}
-		f.Handbook = append(f.Handbook, c)
-	}
+	f.consult(p, settled)
 	if o.Claim != nil {
 		reading := o.Claim.Reading
 		if reading == 0 {
@@ -30,6 +24,23 @@ func (f *Finding) judge(p *specimen.Part, o Options) {
 		return
 	}
 	f.Verdict = f.overall()
+}
+
+// consult holds the published factors against the computed one. Hints, which
+// belong to neighbouring shapes, are out of range by nature.
+func (f *Finding) consult(p *specimen.Part, settled bool) {
+	if p.Family == nil {
+		return
+	}
+	values := p.Family.Handbook(f.Load.Name, p.Dims, p.Options)
+	values = append(values, p.Family.Hints(f.Load.Name, p.Dims, p.Options)...)
+	for _, v := range values {
+		c := HandbookComparison{v, compare(v.Factor, v.Accuracy*math.Abs(v.Factor), f.Computed.Factor, settled)}
+		if settled && !v.InRange {
+			c.Verdict = OutOfRange
+		}
+		f.Handbook = append(f.Handbook, c)
+	}
 }
 
 // settle tells whether the computed factor may judge, and says why not.

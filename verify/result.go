@@ -55,7 +55,8 @@ type Rung struct {
 	Unknowns   int
 	Factor     float64
 	VonMises   float64
-	Leftover   float64 // traction left on the free surface at the peak ÷ its stress
+	Leftover   float64 // traction left on the free surface at the peak, at unit nominal stress
+	Around     float64 // the largest such traction on the edge of the peak and its neighbours
 }
 
 // A Check is one of the conditions without which no factor is judged.

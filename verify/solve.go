@@ -3,6 +3,7 @@ package verify
 import (
 	"context"
 	"math"
+	"slices"
 
 	"gonum.org/v1/gonum/spatial/r2"
 
@@ -61,9 +62,32 @@ func read(p *specimen.Part, l *specimen.Load, s *fem.Solution) (Rung, []fem.Surf
 	if l.Name == scf.Torsion {
 		rung.VonMises /= math.Sqrt(3)
 	}
-	normal, shear := s.Leftover(peaks[0])
-	rung.Leftover = math.Hypot(normal, shear) / rung.Factor
+	rung.Leftover = leftover(s, peaks[0])
+	rung.Around = math.Max(rung.Leftover, around(p, s, peaks[0]))
 	return rung, peaks
+}
+
+// leftover is the size of the traction that a solution leaves on the free
+// surface at a point.
+func leftover(s *fem.Solution, at fem.SurfacePoint) float64 {
+	return math.Hypot(s.Leftover(at))
+}
+
+// around is the largest leftover on the boundary edge of a point and the edges
+// before and after it on the notch.
+func around(p *specimen.Part, s *fem.Solution, at fem.SurfacePoint) float64 {
+	const places = 8
+	worst := 0.0
+	boundary := s.Problem.Shape.Mesh.Boundary
+	for e := max(0, at.Edge-1); e <= min(len(boundary)-1, at.Edge+1); e++ {
+		if !slices.Contains(p.Notch, int(boundary[e].Side)) {
+			continue
+		}
+		for k := range places + 1 {
+			worst = math.Max(worst, leftover(s, s.Surface(e, float64(k)/places)))
+		}
+	}
+	return worst
 }
 
 // quantity is the stress whose largest value on the notch is the factor.

@@ -9,6 +9,7 @@ import (
 	"unicode/utf8"
 
 	"notchproof/scf"
+	"notchproof/verify/specimen"
 )
 
 // An inputError is a fault of the input: one line, and what to do about it.
@@ -36,6 +37,10 @@ func hintOf(err error) string {
 	var dimension *scf.DimensionError
 	if errors.As(err, &dimension) {
 		return dimension.Hint
+	}
+	var input *specimen.InputError
+	if errors.As(err, &input) {
+		return input.Hint
 	}
 	return ""
 }

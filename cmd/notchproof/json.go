@@ -106,7 +106,7 @@ type jsonMisreading struct {
 func writeJSON(w io.Writer, r *verify.Result) error {
 	out := jsonResult{
 		Schema: 1,
-		Part:   jsonPart{Family: r.Part.Family.Name, Dims: r.Part.Given, Unit: r.Part.Unit, Nu: r.Part.Options.Nu},
+		Part:   jsonPart{Family: r.Part.Name, Dims: r.Part.Given, Unit: r.Part.Unit, Nu: r.Part.Options.Nu},
 	}
 	for i := range r.Findings {
 		out.Results = append(out.Results, jsonOf(&r.Findings[i]))

@@ -6,6 +6,8 @@ import (
 	"strings"
 
 	"github.com/spf13/pflag"
+
+	"notchproof/verify/specimen"
 )
 
 const promise = `notchproof verifies stress concentration factors of notched parts: it solves
@@ -65,7 +67,7 @@ func commandNames() string {
 }
 
 func nearestCommand(word string) string {
-	if n := nearest(word, strings.Split(commandNames(), ", ")); n != "" {
+	if n := specimen.Nearest(word, strings.Split(commandNames(), ", "), 3); n != "" {
 		return n
 	}
 	return "check"

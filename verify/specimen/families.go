@@ -29,7 +29,8 @@ func New(family *scf.Family, dims scf.Dims, unit string, o scf.Options) (*Part, 
 		return nil, err
 	}
 	p := draw(family, family.Complete(dims), o)
-	p.Family, p.Given, p.Unit, p.Options = family, dims, unit, o
+	p.Name, p.Family = family.Name, family
+	p.Given, p.Unit, p.Options = dims, unit, o
 	for i := range p.Loads {
 		p.Loads[i].Nominal = family.Nominal(p.Loads[i].Name, p.Dims, o)
 	}

@@ -4,7 +4,6 @@ import (
 	"errors"
 	"math"
 	"math/big"
-	"slices"
 	"strconv"
 	"strings"
 	"unicode"
@@ -144,82 +143,21 @@ func commaProblem(s string) *InputError {
 	return &InputError{Reason: "comma in a number", Hint: "write digits without separators and a decimal point, such as 1234.5"}
 }
 
-// parseFraction reads "3/8", "1-3/8" and "1 3/8", with an optional sign.
-func parseFraction(s string) (float64, *InputError) {
-	body, negative := strings.CutPrefix(s, "-")
-	if !negative {
-		body = strings.TrimPrefix(body, "+")
-	}
-	top, bottom, _ := strings.Cut(body, "/")
-	top, bottom = strings.TrimSpace(top), strings.TrimSpace(bottom)
-	whole := "0"
-	if i := strings.IndexAny(top, "- "); i >= 0 {
-		whole, top = top[:i], strings.TrimSpace(top[i+1:])
-	}
-	w, ok1 := parseWhole(whole)
-	a, ok2 := parseWhole(top)
-	b, ok3 := parseWhole(bottom)
-	switch {
-	case !ok1 || !ok2 || !ok3:
-		return 0, &InputError{Reason: "not a fraction", Hint: "write whole inches and a fraction, such as 1-3/8in"}
-	case b == 0:
-		return 0, &InputError{Reason: "fraction with denominator 0"}
-	case whole != "0" && a >= b:
-		return 0, &InputError{Reason: "fraction of an inch or more after whole inches", Hint: "write it as one fraction, or as a decimal number"}
-	}
-	x := float64(w*b+a) / float64(b) // exact but for the division: see parseWhole
-	if negative && x != 0 {
-		x = -x
-	}
-	return x, nil
-}
-
-// parseWhole reads up to six digits, so that sums and products of three stay exact.
-func parseWhole(s string) (int64, bool) {
-	if s == "" || len(s) > 6 || strings.Trim(s, "0123456789") != "" {
-		return 0, false
-	}
-	n, err := strconv.ParseInt(s, 10, 64)
-	return n, err == nil
-}
-
 // unitHint names the unit that was probably meant.
 func unitHint(number, unit string) string {
 	lower := strings.ToLower(unit)
 	if u, ok := alsoWritten[lower]; ok {
 		return "write " + number + u
 	}
-	best, least := "", 2 // more than one slip away is no longer a slip
-	for _, u := range units {
-		if d := editDistance(lower, u.name); d < least {
-			best, least = u.name, d
-		}
+	names := make([]string, len(units))
+	for i, u := range units {
+		names[i] = u.name
 	}
+	best := Nearest(lower, names, 1) // more than one slip away is no longer a slip
 	if best == "" {
 		return "lengths are in " + unitNames + ", or plain numbers"
 	}
 	return "did you mean " + number + best + "? lengths are in " + unitNames
-}
-
-// editDistance is Levenshtein's (1966): insertions, deletions, substitutions.
-func editDistance(a, b string) int {
-	x, y := []rune(a), []rune(b)
-	row := make([]int, len(y)+1)
-	for j := range row {
-		row[j] = j
-	}
-	for i := range x {
-		diagonal := row[0]
-		row[0] = i + 1
-		for j := range y {
-			cost := 1
-			if x[i] == y[j] {
-				cost = 0
-			}
-			diagonal, row[j+1] = row[j+1], min(diagonal+cost, row[j]+1, row[j+1]+1)
-		}
-	}
-	return row[len(y)]
 }
 
 // In converts to another unit. The decimal number is multiplied as it reads and
@@ -241,49 +179,6 @@ func (l Length) In(unit string) float64 {
 	return converted
 }
 
-// A Dimension is a named length, as in D=60mm.
-type Dimension struct {
-	Name   string
-	Length Length
-}
-
-// Common brings dimensions to one unit and returns their values in it, in
-// order. One unit throughout is kept; a mixture takes the first's. Plain
-// numbers share one unnamed unit, so a mixture of plain and united lengths
-// says nothing and is an *InputError. No dimensions give "mm".
-func Common(dims []Dimension) (values []float64, unit string, err error) {
-	if len(dims) == 0 {
-		return nil, "mm", nil
-	}
-	first := dims[0]
-	unit = first.Length.Unit
-	odd := slices.IndexFunc(dims, func(d Dimension) bool { return (d.Length.Unit == "") != (unit == "") })
-	if odd >= 0 {
-		return nil, "", mixture(first, dims[odd])
-	}
-	for _, d := range dims {
-		v := d.Length.In(unit)
-		if math.IsInf(v, 0) || v == 0 && d.Length.Value != 0 {
-			return nil, "", &InputError{What: d.Name, Value: d.Length.text(), Reason: "beyond what can be expressed in " + unit}
-		}
-		values = append(values, v)
-	}
-	return values, unit, nil
-}
-
-func mixture(a, b Dimension) *InputError {
-	united, plain := a, b
-	if a.Length.Unit == "" {
-		united, plain = b, a
-	}
-	return &InputError{
-		What:   "dimensions",
-		Value:  a.Name + "=" + a.Length.text() + " " + b.Name + "=" + b.Length.text(),
-		Reason: united.Name + " has a unit and " + plain.Name + " has none",
-		Hint:   "write " + plain.Name + "=" + plain.Length.number() + united.Length.Unit + ", or leave the units off all lengths",
-	}
-}
-
 func (l Length) number() string { return strconv.FormatFloat(l.Value, 'g', -1, 64) }
 
 func (l Length) text() string {
@@ -291,28 +186,4 @@ func (l Length) text() string {
 		return l.Text
 	}
 	return l.number() + l.Unit
-}
-
-// ParseAngle reads an angle in degrees, with or without "deg" or "°". The
-// error is an *InputError.
-func ParseAngle(s string) (float64, error) {
-	refuse := func(reason, hint string) (float64, error) {
-		return 0, &InputError{What: "angle", Value: s, Reason: reason, Hint: hint}
-	}
-	number, unit := splitUnit(s)
-	if number == "" {
-		return refuse("no number", "write degrees, such as 60 or 60deg")
-	}
-	x, problem := parseNumber(number)
-	switch {
-	case problem != nil && problem.Reason == reasonFraction:
-		return refuse("not a number", decimalHint)
-	case problem != nil:
-		return refuse(problem.Reason, strings.ReplaceAll(problem.Hint, "{unit}", unit))
-	case strings.HasPrefix(strings.ToLower(unit), "rad"):
-		return refuse("angles are in degrees", "write "+strconv.FormatFloat(x*180/math.Pi, 'g', 6, 64)+"deg")
-	case unit != "" && unit != "deg" && unit != "°":
-		return refuse("unknown unit "+quote(unit), "write "+number+" or "+number+"deg")
-	}
-	return x, nil
 }

@@ -18,6 +18,7 @@ import (
 
 // A Part is what is checked.
 type Part struct {
+	Title   string // what it is, for people; may be empty
 	Family  *scf.Family
 	Dims    scf.Dims    // complete, with defaults
 	Given   scf.Dims    // as they were given

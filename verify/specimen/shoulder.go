@@ -74,11 +74,10 @@ func shoulder(dims scf.Dims) *Part {
 		line("large section", corner(-c, D/2), corner(left, D/2)),
 		line("large end", corner(left, D/2), corner(left, 0)))
 
-	// The radii of curvature of an ellipse at the ends of its axes.
-	joints := []Joint{{toe, ra * ra / r}}
-	if edge.Y > top.Y {
-		joints = append(joints, Joint{top, r * r / ra})
-	}
+	// Where the fillet runs out the curvature jumps or, at a fillet that is cut
+	// off, the boundary has a corner. The radii are those of an ellipse at the
+	// ends of its axes.
+	joints := []Joint{{toe, ra * ra / r}, {top, r * r / ra}}
 	return &Part{
 		Dims:   dims,
 		Region: &outline.Region{Outer: loop},

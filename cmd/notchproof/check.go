@@ -1,0 +1,107 @@
+package main
+
+import (
+	"notchproof/scf"
+	"notchproof/verify"
+	"notchproof/verify/specimen"
+)
+
+func checkCommand() *command {
+	return &command{
+		name:  "check",
+		args:  "[PART [dimension=value ...]] [flags]",
+		short: "compute the factor with its uncertainty and judge handbook and claim",
+		long: `Solves the part on a ladder of finite element meshes and orders, states the
+factor with its uncertainty, holds the handbook factors and your own claim
+against it, and says which of them can be trusted and why. Without a part it
+checks the demonstration part.
+
+  notchproof check shaft-shoulder D=72mm d=48mm r=3mm --load bending \
+      --claim 1.85 --claim-from "chart, by eye"
+
+Exit status: 0 agrees or nothing to compare with, 1 disagrees, 2 bad input,
+3 undecided, 130 interrupted.
+`,
+		run: runCheck,
+	}
+}
+
+func runCheck(c *call) (int, error) {
+	var q questions
+	q.loadFlag(c.flags)
+	q.claimFlags(c.flags)
+	q.targetFlag(c.flags)
+	q.partFlags(c.flags)
+	asJSON := c.flags.Bool("json", false, "print one JSON object instead of text")
+	args, err := c.parse()
+	if err != nil {
+		return 0, err
+	}
+	job, err := q.job(args)
+	if err != nil {
+		return 0, err
+	}
+	bar := c.progress()
+	job.options.Progress = bar.tell
+	result, err := verify.Run(c.ctx, job.part, job.loads, job.options)
+	bar.clear()
+	if err != nil {
+		return 0, err
+	}
+	if *asJSON {
+		err = writeJSON(c.stdout, result)
+	} else {
+		err = writeText(c.stdout, result, c.style())
+	}
+	return statusOf(result), err
+}
+
+// A job is a part with what is asked about it.
+type job struct {
+	part    *specimen.Part
+	loads   []scf.Load
+	options verify.Options
+}
+
+// job reads the arguments and flags; without arguments it is the demonstration.
+func (q *questions) job(args []string) (*job, error) {
+	if len(args) == 0 {
+		if q.claim != "" || len(q.load) > 0 {
+			return nil, &inputError{text: "no part given", hint: "name a family and its dimensions, as in: shaft-shoulder D=72mm d=48mm r=3mm"}
+		}
+		return demonstration(q)
+	}
+	o, err := q.options()
+	if err != nil {
+		return nil, err
+	}
+	part, err := partOf(args, o)
+	if err != nil {
+		return nil, err
+	}
+	loads, err := q.loads(part.Family)
+	if err != nil {
+		return nil, err
+	}
+	count := len(loads)
+	if count == 0 {
+		count = len(part.Loads)
+	}
+	options, err := q.verify(count)
+	return &job{part, loads, options}, err
+}
+
+// statusOf is the exit status that a result comes to: a disagreement is the
+// alarm that must not be drowned, then what could not be decided.
+func statusOf(r *verify.Result) int {
+	status := exitAgrees
+	for _, f := range r.Findings {
+		switch f.Verdict {
+		case verify.Disagrees:
+			return exitDisagrees
+		case verify.Undecided:
+			status = exitUndecided
+		}
+	}
+	return status
+}
