@@ -28,8 +28,8 @@ type mark struct {
 	text  string
 }
 
-// marks gives round values: on a logarithmic axis the powers of ten, with 2 and
-// 5 of each where there are few of them; on a straight one about six.
+// marks gives round values: on a logarithmic axis the powers of ten, with
+// multiples of each where there are few of them; on a straight one about six.
 func (a axis) marks() []mark {
 	if a.log {
 		return a.powers()
@@ -49,7 +49,10 @@ func (a axis) marks() []mark {
 func (a axis) powers() []mark {
 	decades := math.Log10(a.high / a.low)
 	digits := []float64{1}
-	if decades < 2.5 {
+	switch {
+	case decades < 1:
+		digits = []float64{1, 2, 3, 4, 6, 8}
+	case decades < 2.5:
 		digits = []float64{1, 2, 5}
 	}
 	every := max(1, int(math.Ceil(decades/7)))

@@ -1,64 +1,129 @@
 package render
 
-import "math"
+import (
+	"math"
+
+	"notchproof/mesh/lagrange"
+)
 
 // A painter fills rows of a raster from facets.
 type painter struct {
 	field  *field
 	raster *raster
-	axis   int // rows from here on show the mirror image of those above
+	axis   int // the rows from here on are the mirror images of those above; beyond the raster: none are
 	phi    []float64
+	line   *lagrange.Line
+	nodes  [][4]float64 // stresses at the nodes of the line
+	along  []float64
 }
 
-// rows fills the rows from y0 up to y1. Facets are in order of their tops.
-func (p *painter) rows(facets []facet, v *view, y0, y1 int) {
+func newPainter(f *field, r *raster, axis int) *painter {
+	n := f.element.Order + 1
+	return &painter{
+		field: f, raster: r, axis: axis, phi: make([]float64, f.element.Count),
+		line: lagrange.NewLine(f.element.Order), nodes: make([][4]float64, n), along: make([]float64, n),
+	}
+}
+
+// rows fills the rows from y0 up to y1 and their mirror images. Facets are in
+// order of their tops.
+func (p *painter) rows(facets []facet, y0, y1 int) {
 	for i := range facets {
 		t := &facets[i]
-		for y := y0; y < y1; y++ {
-			// The mirror image of a row of pixels is a row of pixels because
-			// the axis lies between two rows.
-			from, lower := float64(y)+0.5, y >= p.axis
-			if lower {
-				from = float64(2*p.axis-1-y) + 0.5
-			}
-			if from < t.top || from > t.low {
-				continue
-			}
-			p.span(t, from, y, lower)
+		first := max(y0, int(math.Ceil(t.top-0.5)))
+		last := min(y1-1, int(math.Floor(t.low-0.5)))
+		for y := first; y <= last; y++ {
+			p.span(t, y)
+		}
+		if t.top > float64(y1) {
+			return
 		}
 	}
 }
 
-// span fills what a facet covers of row y; from is where that row lies on the
-// facet's own side of the axis.
-func (p *painter) span(t *facet, from float64, y int, lower bool) {
-	x0, x1 := t.cross(from)
+// span fills what a facet covers of row y and of the mirror image of that row,
+// which is a row of pixels because the axis lies between two rows.
+func (p *painter) span(t *facet, y int) {
+	if t.twice() == 0 {
+		return
+	}
+	x0, x1 := t.cross(float64(y) + 0.5)
 	// Half a thousandth of a pixel more at both ends leaves no gap between
 	// neighbours whose common side passes through a centre.
 	const rim = 5e-4
-	first := max(p.raster.area.Min.X, int(math.Ceil(x0-0.5-rim)))
-	last := min(p.raster.area.Max.X-1, int(math.Floor(x1-0.5+rim)))
+	area := p.raster.area
+	first := max(area.Min.X, int(math.Ceil(x0-0.5-rim)))
+	last := min(area.Max.X-1, int(math.Floor(x1-0.5+rim)))
 	if first > last {
 		return
 	}
-	a, b, c := t.corner[0], t.corner[1], t.corner[2]
-	twice := (b.X-a.X)*(c.Y-a.Y) - (c.X-a.X)*(b.Y-a.Y)
-	if twice == 0 {
-		return
+	var upper, lower []float64
+	if y >= area.Min.Y && y < area.Max.Y {
+		upper = p.raster.values[p.raster.index(first, y):]
 	}
-	out := p.raster.values[p.raster.index(first, y):]
+	if image := 2*p.axis - 1 - y; p.axis < area.Max.Y && image < area.Max.Y && image >= area.Min.Y {
+		lower = p.raster.values[p.raster.index(first, image):]
+	}
+	at := p.stresses(t, float64(y)+0.5, first, last)
 	for k := range last - first + 1 {
-		x := float64(first+k) + 0.5
-		lb := ((x-a.X)*(c.Y-a.Y) - (c.X-a.X)*(from-a.Y)) / twice
-		lc := ((b.X-a.X)*(from-a.Y) - (x-a.X)*(b.Y-a.Y)) / twice
-		la := 1 - lb - lc
-		here, mirrored := p.value(t.cell,
-			la*t.xi[0]+lb*t.xi[1]+lc*t.xi[2], la*t.eta[0]+lb*t.eta[1]+lc*t.eta[2])
-		if lower {
-			here = mirrored
+		here, mirrored := p.field.read.value(at(k))
+		if upper != nil {
+			upper[k] = here
 		}
-		out[k] = here
+		if lower != nil {
+			lower[k] = mirrored
+		}
 	}
+}
+
+// stresses gives the stresses at the pixels of a span, counted from its first.
+// Along a straight line through a facet the stress is a polynomial of the
+// element's order, so that on a long span order+1 evaluations give it exactly
+// everywhere.
+func (p *painter) stresses(t *facet, y float64, first, last int) func(k int) [4]float64 {
+	from := float64(first) + 0.5
+	if last-first < 2*len(p.nodes) {
+		return func(k int) [4]float64 { return p.stress(t, from+float64(k), y) }
+	}
+	length := float64(last - first)
+	for i, s := range p.line.Nodes {
+		p.nodes[i] = p.stress(t, from+s*length, y)
+	}
+	return func(k int) (s [4]float64) {
+		p.line.Basis(float64(k)/length, p.along)
+		for i, w := range p.along {
+			n := &p.nodes[i]
+			s[0] += w * n[0]
+			s[1] += w * n[1]
+			s[2] += w * n[2]
+			s[3] += w * n[3]
+		}
+		return s
+	}
+}
+
+// stress evaluates the stresses at a place in a facet.
+func (p *painter) stress(t *facet, x, y float64) (s [4]float64) {
+	a, b, c := t.corner[0], t.corner[1], t.corner[2]
+	twice := t.twice()
+	lb := ((x-a.X)*(c.Y-a.Y) - (c.X-a.X)*(y-a.Y)) / twice
+	lc := ((b.X-a.X)*(y-a.Y) - (x-a.X)*(b.Y-a.Y)) / twice
+	la := 1 - lb - lc
+	p.field.element.Basis(la*t.xi[0]+lb*t.xi[1]+lc*t.xi[2], la*t.eta[0]+lb*t.eta[1]+lc*t.eta[2], p.phi)
+	for k, v := range p.field.cells[t.cell].stress {
+		w := p.phi[k]
+		s[0] += w * v[0]
+		s[1] += w * v[1]
+		s[2] += w * v[2]
+		s[3] += w * v[3]
+	}
+	return s
+}
+
+// twice is double the area of a facet, with a sign.
+func (t *facet) twice() float64 {
+	a, b, c := t.corner[0], t.corner[1], t.corner[2]
+	return (b.X-a.X)*(c.Y-a.Y) - (c.X-a.X)*(b.Y-a.Y)
 }
 
 // cross gives where the row at y enters and leaves a facet.
@@ -73,18 +138,4 @@ func (t *facet) cross(y float64) (x0, x1 float64) {
 		x0, x1 = math.Min(x0, x), math.Max(x1, x)
 	}
 	return x0, x1
-}
-
-// value reads the field at a point of a triangle.
-func (p *painter) value(i int, xi, eta float64) (here, mirrored float64) {
-	p.field.element.Basis(xi, eta, p.phi)
-	var s [4]float64
-	for k, v := range p.field.cells[i].stress {
-		w := p.phi[k]
-		s[0] += w * v[0]
-		s[1] += w * v[1]
-		s[2] += w * v[2]
-		s[3] += w * v[3]
-	}
-	return p.field.read.value(s)
 }

@@ -42,6 +42,11 @@ func (p *panel) curve(ps []point) {
 	p.pen(ink, 1.8)
 	p.polyline(ps)
 	p.dc.Stroke()
+	length := lengthOf(ps)
+	for d := 0.0; d < length; d += p.u(6) { // lettering keeps off the line
+		q := pointAlong(ps, d)
+		p.take(box{q.X, q.Y, q.X, q.Y}.grown(p.u(3)))
+	}
 	for _, q := range ps {
 		p.dc.DrawCircle(q.X, q.Y, p.u(5))
 		p.dc.SetColor(paper)
@@ -54,7 +59,7 @@ func (p *panel) curve(ps []point) {
 
 // name letters a point where there is room beside it.
 func (p *panel) name(q point, text string) {
-	for _, d := range [6][4]float64{{0, -12, 0.5, 1}, {0, 12, 0.5, 0}, {12, 0, 0, 0.5}, {-12, 0, 1, 0.5}, {9, -9, 0, 1}, {9, 9, 0, 0}} {
+	for _, d := range [8][4]float64{{0, -11, 0.5, 1}, {9, -9, 0, 1}, {13, 0, 0, 0.5}, {0, 11, 0.5, 0}, {9, 9, 0, 0}, {-13, 0, 1, 0.5}, {-9, 9, 1, 0}, {-9, -9, 1, 1}} {
 		at := q.plus(p.u(d[0]), p.u(d[1]))
 		if b := p.sheet.place(at, d[2], d[3], text, small); p.free(b) && p.frame.holds(b) {
 			p.text(at, d[2], d[3], text, small, ink)

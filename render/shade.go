@@ -17,17 +17,17 @@ import (
 func (f *field) shade(v *view) *raster {
 	r := newRaster(v.pixels())
 	facets := f.facets(v, r.area)
-	axis := r.area.Max.Y // rows from here on show the mirror image
-	if v.mirror {
+	top, end, axis := r.area.Min.Y, r.area.Max.Y, r.area.Max.Y
+	if v.mirror { // only the upper half is read, each row for itself and its image
 		axis = int(math.Round(v.origin.Y))
+		top, end = min(top, 2*axis-end), axis
 	}
 	const band = 16
-	bands := (r.area.Dy() + band - 1) / band
-	concurrently(bands, func() func(i int) {
-		p := painter{field: f, raster: r, axis: axis, phi: make([]float64, f.element.Count)}
+	concurrently((end-top+band-1)/band, func() func(i int) {
+		p := newPainter(f, r, axis)
 		return func(i int) {
-			y := r.area.Min.Y + i*band
-			p.rows(facets, v, y, min(y+band, r.area.Max.Y))
+			y := top + i*band
+			p.rows(facets, y, min(y+band, end))
 		}
 	})
 	return r

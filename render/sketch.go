@@ -14,7 +14,9 @@ type SketchOptions struct {
 // Sketch draws a part with its dimensions and without stresses, so that a
 // reader sees what the dimensions of a family mean. Lengths stand as they are
 // in the part's unit.
-func Sketch(part *specimen.Part, o SketchOptions) image.Image {
+func Sketch(part *specimen.Part, o SketchOptions) image.Image { return sketch(part, o).im }
+
+func sketch(part *specimen.Part, o SketchOptions) *sheet {
 	const height = 760
 	s := newSheet(o.Width, height)
 	v, left, right := mainView(part, s.area(150, 90, 1450, 610), s.scale)
@@ -37,7 +39,7 @@ func Sketch(part *specimen.Part, o SketchOptions) image.Image {
 	if unit := unitText(part.Unit); unit != "" {
 		s.text(point{s.u(1550), s.u(height - 62)}, 1, 0.5, unit, normal, grey)
 	}
-	return s.im
+	return s
 }
 
 func unitText(unit string) string {
