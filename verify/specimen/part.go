@@ -18,14 +18,18 @@ import (
 
 // A Part is what is checked.
 type Part struct {
-	Title   string // what it is, for people; may be empty
-	Family  *scf.Family
+	Title   string      // what it is, for people; may be empty
+	Name    string      // of the family, or "outline"
+	Family  *scf.Family // nil for an outline of the user's own
 	Dims    scf.Dims    // complete, with defaults
 	Given   scf.Dims    // as they were given
 	Unit    string      // unit of all lengths, empty when unnamed
 	Options scf.Options // Poisson's ratio, force line
 	Region  *outline.Region
 	Notch   []int // sides on which the factor is sought
+	// Watch are free sides off the notch on which the stress is looked at too:
+	// where it is higher than on the notch the user is warned.
+	Watch []int
 	// Joints are the points where the curvature of the boundary jumps; the
 	// stress is less smooth there and the mesh is graded towards them.
 	Joints []Joint
