@@ -73,8 +73,7 @@ func (s *sheet) spot(v *view, r *raster, line []point, text string) (box, bool) 
 	return box{}, false
 }
 
-// contours strokes the lines, and letters the labels in the gaps left for them.
-// Islands are left alone.
+// contours strokes the lines, but not where labels and islands are.
 func (s *sheet) contours(cs []contour, top float64) {
 	for _, c := range cs {
 		s.pen(over(c.level/top), 1)
@@ -82,6 +81,12 @@ func (s *sheet) contours(cs []contour, top float64) {
 			s.gapped(line, append(c.gaps, s.islands...))
 		}
 		s.dc.Stroke()
+	}
+}
+
+// letter writes the labels into their gaps.
+func (s *sheet) letter(cs []contour, top float64) {
+	for _, c := range cs {
 		for _, b := range c.gaps {
 			s.text(point{b.X0, b.Y0}, 0, 0, levelText(c.level), small, over(c.level/top))
 		}

@@ -14,7 +14,8 @@ import (
 // Its scale is a round multiple of the main view's.
 func detail(part *specimen.Part, peak r2.Vec, main *view, center point, radius float64) (v *view, times float64) {
 	about, reach := root(part, peak)
-	times = roundScale(radius / reach / main.scale)
+	const least = 1.5 // below that the main view shows as much
+	times = math.Max(least, roundScale(radius/reach/main.scale))
 	v = &view{scale: times * main.scale, window: circle(center, radius)}
 	v.origin = point{center.X - v.scale*about.X, center.Y + v.scale*about.Y}
 	// Near the axis of a half model the mirror image comes into view.

@@ -167,6 +167,7 @@ func (p *plate) lines(v *view, r *raster, most int) {
 	p.contours(cs, p.top)
 	p.edges(v, p.part, wide, ink)
 	p.dc.ResetClip()
+	p.letter(cs, p.top)
 }
 
 // shown gives the levels of the contours of a view: those of the legend, and a

@@ -205,10 +205,11 @@ func (s *sheet) quills(v *view, list []needle, unit, space float64) {
 		}
 	}
 	s.pen(accent, hairline)
+	s.quill(feet[middle], ends[middle])
 	for _, step := range [2]int{1, -1} {
 		last := middle
 		for i := middle; i >= 0 && i < len(list); i += step {
-			if i == middle || distance(feet[i], feet[last]) >= space || distance(ends[i], ends[last]) >= space {
+			if distance(feet[i], feet[last]) >= space || distance(ends[i], ends[last]) >= space {
 				s.quill(feet[i], ends[i])
 				last = i
 			}

@@ -73,6 +73,7 @@ func solved(t testing.TB, part *specimen.Part, name scf.Load, order int) *verify
 		Ladder: []verify.Rung{{Order: order, Triangles: len(m.Triangles), Unknowns: 12345, Factor: 1.8741}},
 		Last:   s[0],
 	}}
+	f.Because = []string{"the claim is 14.6 % below the computed factor, outside of its tolerance of 5.3 %"}
 	f.Claim = &verify.ClaimComparison{Claim: verify.Claim{Factor: 1.6, From: "sheet 12 of the bow thruster's drive train, revision C, as it was read off the chart"}}
 	f.Claim.Comparison = verify.Comparison{Factor: 1.6, Difference: -0.146, Verdict: verify.Disagrees}
 	for _, v := range part.Family.Handbook(name, part.Dims, part.Options) {

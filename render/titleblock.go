@@ -75,15 +75,21 @@ func (t *table) factor(height float64, f *verify.Finding) {
 	t.rule(height)
 }
 
-// comparisons letters what the factor was held against, as many as there is
-// room for above the two rows that follow.
+// comparisons letters what the factor was held against and, in the room that is
+// left above the two rows that follow, the conventions and the reasons.
 func (t *table) comparisons(f *verify.Finding) {
 	const line, below = 25, 62 + 36
 	room := t.box.Y1 - t.s.u(below+10) - t.y
 	lines := comparisonTexts(f)
-	if most := int(room / t.s.u(line)); len(lines) > most {
+	most := int(room / t.s.u(line))
+	if len(lines) > most {
 		left := len(lines) - most + 1
 		lines = append(lines[:most-1:most-1], [4]string{fmt.Sprintf("and %d more", left)})
+	}
+	for _, remark := range append(f.Load.Nominal.Notes[:len(f.Load.Nominal.Notes):len(f.Load.Nominal.Notes)], f.Because...) {
+		for _, part := range t.s.wrap(remark, normal, t.box.width()-2*t.s.u(cellMargin), most-len(lines)) {
+			lines = append(lines, [4]string{part})
+		}
 	}
 	for i, l := range lines {
 		t.columns(t.y+t.s.u(6+line*float64(i)), l)
@@ -102,10 +108,10 @@ func (t *table) columns(y float64, c [4]string) {
 		s.text(point{x, y}, 0, 0, s.fit(c[0], normal, width), normal, ink)
 		return
 	}
-	s.text(point{x, y}, 0, 0, s.fit(c[0], normal, 0.44*width), normal, ink)
-	s.text(point{x + 0.55*width, y}, 1, 0, c[1], normal, ink)
-	s.text(point{x + 0.67*width, y}, 1, 0, c[2], normal, ink)
-	s.text(point{x + 0.70*width, y}, 0, 0, s.fit(c[3], normal, 0.3*width), normal, ink)
+	s.text(point{x, y}, 0, 0, s.fit(c[0], normal, 0.49*width), normal, ink)
+	s.text(point{x + 0.59*width, y}, 1, 0, c[1], normal, ink)
+	s.text(point{x + 0.71*width, y}, 1, 0, c[2], normal, ink)
+	s.text(point{x + 0.74*width, y}, 0, 0, s.fit(c[3], normal, 0.26*width), normal, ink)
 }
 
 func (t *table) foot() {
@@ -176,8 +182,7 @@ func verdictText(v verify.Verdict) string {
 	return "undecided"
 }
 
-// comparisonTexts has one line for the claim and one for each handbook value;
-// without either, what the verdict says about itself.
+// comparisonTexts has one line for the claim and one for each handbook value.
 func comparisonTexts(f *verify.Finding) [][4]string {
 	var lines [][4]string
 	say := func(who string, factor float64, c verify.Comparison) {
@@ -196,11 +201,6 @@ func comparisonTexts(f *verify.Finding) [][4]string {
 	}
 	for _, h := range f.Handbook {
 		say("handbook "+h.Value.ID, h.Value.Factor, h.Comparison)
-	}
-	if len(lines) == 0 {
-		for _, b := range f.Because {
-			lines = append(lines, [4]string{b})
-		}
 	}
 	return lines
 }
