@@ -74,15 +74,13 @@ func shoulder(dims scf.Dims) *Part {
 		line("large section", corner(-c, D/2), corner(left, D/2)),
 		line("large end", corner(left, D/2), corner(left, 0)))
 
-	// Where the fillet runs out the curvature jumps or, at a fillet that is cut
-	// off, the boundary has a corner. The radii are those of an ellipse at the
-	// ends of its axes.
-	joints := []Joint{{toe, ra * ra / r}, {top, r * r / ra}}
+	region := &outline.Region{Outer: loop}
+	notch := []int{shoulderFillet}
 	return &Part{
 		Dims:   dims,
-		Region: &outline.Region{Outer: loop},
-		Notch:  []int{shoulderFillet},
-		Joints: joints,
+		Region: region,
+		Notch:  notch,
+		Joints: findJoints(region, notch),
 		Half:   true,
 		Net:    reach + 0.37*d,
 		Plain: []Plain{
