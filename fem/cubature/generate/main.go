@@ -10,19 +10,17 @@ import (
 	"fmt"
 	"os"
 	"slices"
-	"time"
 )
 
 func main() {
 	searching := flag.Bool("search", false, "look for rules instead of writing the table")
 	low := flag.Int("low", 1, "lowest degree to search")
 	high := flag.Int("high", 20, "highest degree to search")
-	patience := flag.Duration("patience", 10*time.Second, "time spent on one structure")
-	first := flag.Uint64("seed", 1, "first start")
+	tries := flag.Uint64("starts", 2000, "starts for one structure")
 	flag.Parse()
 	if *searching {
 		for degree := *low; degree <= *high; degree++ {
-			search(degree, *first, *patience)
+			search(degree, *tries)
 		}
 		return
 	}
@@ -34,11 +32,10 @@ func main() {
 
 // search tries the structures with enough unknowns, those of fewest points
 // first, and stops at the first that yields a rule.
-func search(degree int, seed uint64, patience time.Duration) {
+func search(degree int, tries uint64) {
 	for _, shape := range candidates(degree) {
 		s := newSystem(degree, shape)
-		begin := time.Now()
-		for n := seed; time.Since(begin) < patience; n++ {
+		for n := uint64(1); n <= tries; n++ {
 			y, ok := s.solve(s.start(n))
 			if !ok {
 				continue

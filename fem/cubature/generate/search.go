@@ -27,27 +27,99 @@ func newSystem(degree int, shape structure) *system {
 	return s
 }
 
-// start draws unknowns: equal weights but for a little noise, points anywhere.
+// start draws a first guess. Good nodes spread like a multivariate arcsine law,
+// which is even on the octant of a sphere x with λ_k = x_k²; so each orbit is
+// the best of some candidates there, the one farthest from all others. An even
+// share of the sphere is an area of the triangle in proportion to x_0 x_1 x_2,
+// and that is the weight.
 func (s *system) start(seed uint64) []float64 {
 	rng := rand.New(rand.NewPCG(seed, 20))
-	weight := func() float64 { return math.Log(1/float64(s.shape.points())) + 0.3*rng.NormFloat64() }
+	var taken [][3]float64
+	place := func(median bool) [3]float64 {
+		var best [3]float64
+		far := -1.0
+		for range 8 {
+			x := octant(rng, median)
+			if d := nearest(x, taken, median); d > far {
+				best, far = x, d
+			}
+		}
+		taken = append(taken, images(best)...)
+		return best
+	}
+	var medians, generals [][3]float64
+	if s.shape.centroid > 0 {
+		taken = append(taken, [3]float64{math.Sqrt(1. / 3), math.Sqrt(1. / 3), math.Sqrt(1. / 3)})
+	}
+	for _, i := range rng.Perm(s.shape.median + s.shape.general) {
+		if i < s.shape.median {
+			medians = append(medians, place(true))
+		} else {
+			generals = append(generals, place(false))
+		}
+	}
+	size := func(x [3]float64) float64 { return x[0] * x[1] * x[2] }
+	total := float64(s.shape.centroid) * math.Pow(3, -1.5)
+	for _, x := range medians {
+		total += 3 * size(x)
+	}
+	for _, x := range generals {
+		total += 6 * size(x)
+	}
+	weight := func(share float64) float64 { return math.Log(share/total) + 0.1*rng.NormFloat64() }
 	var y []float64
 	for range s.shape.centroid {
-		y = append(y, weight())
+		y = append(y, weight(math.Pow(3, -1.5)))
 	}
-	for range s.shape.median {
-		a := 0.02 + 0.96*rng.Float64()
-		y = append(y, weight(), math.Log(a/(1-a)))
+	for _, x := range medians {
+		a := 2 * x[0] * x[0]
+		y = append(y, weight(size(x)), math.Log(a/(1-a)))
 	}
-	for range s.shape.general {
-		a, b := rng.Float64(), rng.Float64()
-		if a+b > 1 {
-			a, b = 1-a, 1-b
-		}
-		c := 1 - a - b + 1e-3
-		y = append(y, weight(), math.Log((a+1e-3)/c), math.Log((b+1e-3)/c))
+	for _, x := range generals {
+		y = append(y, weight(size(x)), 2*math.Log(x[0]/x[2]), 2*math.Log(x[1]/x[2]))
 	}
 	return y
+}
+
+// octant draws a point of the sphere's positive octant, a little off its edges;
+// on a median the first two coordinates are equal.
+func octant(rng *rand.Rand, median bool) [3]float64 {
+	for {
+		x := [3]float64{math.Abs(rng.NormFloat64()), math.Abs(rng.NormFloat64()), math.Abs(rng.NormFloat64())}
+		if median {
+			u := math.Pi / 2 * rng.Float64()
+			x = [3]float64{math.Sin(u) * math.Sqrt2 / 2, math.Sin(u) * math.Sqrt2 / 2, math.Cos(u)}
+		}
+		n := math.Sqrt(x[0]*x[0] + x[1]*x[1] + x[2]*x[2])
+		for k := range x {
+			x[k] /= n
+		}
+		if min(x[0], x[1], x[2]) > 0.05 {
+			return x
+		}
+	}
+}
+
+func images(x [3]float64) [][3]float64 {
+	a, b, c := x[0], x[1], x[2]
+	return [][3]float64{{a, b, c}, {b, c, a}, {c, a, b}, {b, a, c}, {a, c, b}, {c, b, a}}
+}
+
+// nearest gives the distance of a point from those taken, and from its own
+// images unless they are one with it.
+func nearest(x [3]float64, taken [][3]float64, median bool) float64 {
+	least := math.Inf(1)
+	others := images(x)[1:]
+	if median {
+		others = others[:2]
+	}
+	for _, list := range [][][3]float64{taken, others} {
+		for _, y := range list {
+			dx, dy, dz := x[0]-y[0], x[1]-y[1], x[2]-y[2]
+			least = min(least, dx*dx+dy*dy+dz*dz)
+		}
+	}
+	return least
 }
 
 // orbits turns unknowns into orbits. Da and db are the derivatives of a and b
@@ -108,7 +180,7 @@ func (s *system) evaluate(y []float64) float64 {
 func (s *system) solve(y []float64) ([]float64, bool) {
 	const (
 		steps = 300
-		zero  = 1e-26 // squared residual
+		zero  = 1e-22 // squared residual; rounding leaves some 1e-25
 	)
 	damping := 1e-2
 	current := s.evaluate(y)
