@@ -30,7 +30,7 @@ func (m *Mesh) Quality() Quality {
 			} else {
 				q.LargestAngle = max(q.LargestAngle, angle)
 			}
-			l := r2.Norm(r2.Sub(b, a))
+			l := dist(a, b)
 			q.Shortest, q.Longest = min(q.Shortest, l), max(q.Longest, l)
 		}
 	}
@@ -40,5 +40,5 @@ func (m *Mesh) Quality() Quality {
 // cornerAngle is the angle at p between a and b, in degrees.
 func cornerAngle(p, a, b r2.Vec) float64 {
 	u, w := r2.Sub(a, p), r2.Sub(b, p)
-	return math.Atan2(math.Abs(r2.Cross(u, w)), r2.Dot(u, w)) * 180 / math.Pi
+	return math.Atan2(math.Abs(cross(u, w)), dot(u, w)) * 180 / math.Pi
 }

@@ -1,5 +1,7 @@
 package mesh
 
+import "gonum.org/v1/gonum/spatial/r2"
+
 // A crossing says why a segment cannot be an edge.
 type crossing struct {
 	seg    int32 // the segment wanted
@@ -106,8 +108,8 @@ func (t *triangulation) toward(a, b int32) (tri int32, k int, on int32) {
 
 // ahead tells whether u, on the line through a and b, lies on b's side of a.
 func (t *triangulation) ahead(a, b, u int32) bool {
-	p, q, r := t.points[a], t.points[b], t.points[u]
-	return (q.X-p.X)*(r.X-p.X)+(q.Y-p.Y)*(r.Y-p.Y) > 0
+	p := t.points[a]
+	return dot(r2.Sub(t.points[b], p), r2.Sub(t.points[u], p)) > 0
 }
 
 // constrain marks edge k of triangle i as the segment, on both sides.

@@ -26,22 +26,27 @@ type refiner struct {
 	field   *sizeField
 	queue   queue
 
-	sharp []bool  // by vertex: a corner sharper than 60°
-	shell []int32 // by vertex: the sharp corner whose shell it lies on, or -1
+	shell []int32   // by vertex: the sharp corner whose shell it lies on, or -1
+	bound []bool    // by vertex: it lies on the boundary
+	free  int32     // no vertex before this one lies inside
+	least []float64 // by vertex: 0, or at a sharp corner the radius of its smallest shell
 
 	shortest2 float64 // square of the length below which nothing is cut
 }
 
 const (
-	goodAngle    = 28         // smallest angle aimed for, degrees
-	oversize     = math.Sqrt2 // an edge this many times longer than wished for is cut: its halves are no better
-	maxTriangles = 1 << 22    // a mesh of more is given up
-	lensCosine   = -0.5       // of the angle, 120°, at which a point sees a segment that it is too near to
+	goodSin2     = 0.2204035482646266 // sin² 28°, the smallest angle aimed for
+	offCentre    = 1.9687             // height over base of the triangle with 28.5° at the top
+	oversize     = math.Sqrt2         // an edge this many times longer than wished for is cut: its halves are no better
+	maxTriangles = 1 << 21            // a mesh of more is given up
+	lensCosine   = -0.5               // of the angle, 120°, at which a point sees a segment that it is too near to
 )
 
 // refine does all that.
 func refine(t *triangulation, b *boundary, field *sizeField) (*refiner, error) {
-	r := &refiner{triangulation: t, outline: b, field: field, shortest2: math.Pow(shortestPiece*b.extent, 2)}
+	r := &refiner{triangulation: t, outline: b, field: field, shortest2: float64(shortestPiece*b.extent) * float64(shortestPiece*b.extent)}
+	r.free = int32(len(t.points))
+	r.bound = make([]bool, len(t.points))
 	r.queue = newQueue(r.shortest2, b.extent*b.extent)
 	r.markShells()
 	for i := range t.tris {
@@ -64,25 +69,6 @@ func refine(t *triangulation, b *boundary, field *sizeField) (*refiner, error) {
 	}
 }
 
-// markShells finds the sharp corners and the vertices at the ends of the pieces
-// that begin or end there.
-func (r *refiner) markShells() {
-	r.sharp = make([]bool, len(r.points))
-	r.shell = make([]int32, len(r.points))
-	for i := range r.shell {
-		r.shell[i] = -1
-	}
-	for side, next := range r.outline.next {
-		if !sharpCorner(r.outline.sides[side].Curve, r.outline.sides[next].Curve) {
-			continue
-		}
-		before, behind := &r.segs[r.outline.last[side]], &r.segs[r.outline.first[next]]
-		r.sharp[before.b] = true
-		r.shell[before.a] = before.b
-		r.shell[behind.b] = before.b
-	}
-}
-
 // A shape is what decides about a triangle.
 type shape struct {
 	k      int     // corner opposite the shortest edge
@@ -91,9 +77,6 @@ type shape struct {
 	small  bool    // it has a small angle
 	large  bool    // it has an edge longer than wished for
 }
-
-// sin2Good is sin² of the smallest angle aimed for.
-var sin2Good = math.Pow(math.Sin(goodAngle*math.Pi/180), 2)
 
 // measure looks at triangle i.
 func (r *refiner) measure(i int32) shape {
@@ -111,9 +94,9 @@ func (r *refiner) measure(i int32) shape {
 	}
 	s := shape{k: k, short2: d[k], area2: area2(p, q, o)}
 	// sin α = 2·area / (product of the edges at α).
-	s.small = s.area2*s.area2 < sin2Good*d[after[k]]*d[after[after[k]]]
+	s.small = s.area2*s.area2 < goodSin2*d[after[k]]*d[after[after[k]]]
 	v := tr.v
-	mid := r2.Scale(0.5, r2.Add(r.point(v[after[l]]), r.point(v[after[after[l]]])))
+	mid := midpoint(r.point(v[after[l]]), r.point(v[after[after[l]]]))
 	h := r.field.at(mid)
 	limit := min(oversize*h, r.field.largest)
 	s.large = d[l] > limit*limit
@@ -146,12 +129,12 @@ func (r *refiner) improve(i int32) error {
 	c := r.steiner(i, s)
 	tri, wall := r.walk(i, c)
 	if wall >= 0 {
-		return r.cutFor(i, r.tris[tri].s[wall])
+		return r.cutFor(i, r.tris[tri].s[wall], s.large)
 	}
 	r.find(c, tri)
 	for _, e := range r.cavity.ring {
 		if e.seg >= 0 && r.encroaches(c, e.seg) {
-			return r.cutFor(i, e.seg)
+			return r.cutFor(i, e.seg, s.large)
 		}
 	}
 	if _, ok := r.sound(c); !ok {
@@ -168,28 +151,18 @@ func (r *refiner) addVertex(p r2.Vec) int32 {
 	v := int32(len(r.points))
 	r.points = append(r.points, p)
 	r.at = append(r.at, 0)
-	r.sharp = append(r.sharp, false)
 	r.shell = append(r.shell, -1)
+	r.least = append(r.least, 0)
+	r.bound = append(r.bound, false)
 	return v
-}
-
-// excused tells whether an edge spans a sharp corner from one side to the other
-// on a shell: then it is as short as the corner makes it.
-func (r *refiner) excused(u, v int32) bool {
-	corner := r.shell[u]
-	if corner < 0 || r.shell[v] != corner {
-		return false
-	}
-	du, dv := dist(r.point(u), r.point(corner)), dist(r.point(v), r.point(corner))
-	return math.Abs(du-dv) <= 1e-6*du
 }
 
 // encroaches tells whether p sees a segment at more than 120°.
 func (r *refiner) encroaches(p r2.Vec, seg int32) bool {
 	s := &r.segs[seg]
 	u, w := r2.Sub(r.point(s.a), p), r2.Sub(r.point(s.b), p)
-	dot := r2.Dot(u, w)
-	return dot < 0 && dot*dot > lensCosine*lensCosine*r2.Norm2(u)*r2.Norm2(w)
+	d := dot(u, w)
+	return d < 0 && d*d > lensCosine*lensCosine*dot(u, u)*dot(w, w)
 }
 
 // steiner gives the point to insert for triangle i: on the bisector of its
@@ -197,7 +170,7 @@ func (r *refiner) encroaches(p r2.Vec, seg int32) bool {
 func (r *refiner) steiner(i int32, s shape) r2.Vec {
 	v := r.tris[i].v
 	p, q, o := r.point(v[after[s.k]]), r.point(v[after[after[s.k]]]), r.point(v[s.k])
-	m := r2.Scale(0.5, r2.Add(p, q))
+	m := midpoint(p, q)
 	l := math.Sqrt(s.short2)
 	n := r2.Scale(1/l, r2.Vec{X: p.Y - q.Y, Y: q.X - p.X}) // towards o
 	// With m the origin and pq along x, o = (x, y) has the circumcentre
@@ -206,25 +179,21 @@ func (r *refiner) steiner(i int32, s shape) r2.Vec {
 	d = min(d, l*offCentre)
 	if s.large {
 		h := r.field.at(m)
-		h = r.field.at(r2.Add(m, r2.Scale(0.5*min(h, 2*l), n)))
+		h = r.field.at(shifted(m, 0.5*min(h, 2*l), n))
 		if l < 1.5*h {
-			d = min(d, math.Sqrt(h*h-s.short2/4))
+			d = min(d, math.Sqrt(float64(h*h)-s.short2/4))
 		}
 	}
-	return r2.Add(m, r2.Scale(d, n))
+	return shifted(m, d, n)
 }
 
-// offCentre is the height of the triangle with base 1 whose smallest angle, at
-// the top, is a little better than the smallest aimed for.
-var offCentre = 0.5 / math.Tan((goodAngle+0.5)/2*math.Pi/180)
-
 // cutFor cuts a segment for the sake of triangle i, which is looked at again.
-func (r *refiner) cutFor(i, seg int32) error {
+func (r *refiner) cutFor(i, seg int32, large bool) error {
 	stamp := r.tris[i].stamp
 	if seg < 0 {
 		return nil
 	}
-	done, err := r.cutSegment(seg, 0)
+	done, err := r.cutSegment(seg, large, 0)
 	if err != nil || !done {
 		return err
 	}

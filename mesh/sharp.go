@@ -24,7 +24,7 @@ func sharpCorner(before, next outline.Curve) bool {
 	// The material's angle runs counter-clockwise from the next side to the
 	// one before. Sides that fold back onto each other by less than rounding
 	// count as sharp.
-	angle := math.Atan2(r2.Cross(w, u), r2.Dot(w, u))
+	angle := math.Atan2(cross(w, u), dot(w, u))
 	return angle > -1e-9 && angle < sharpAngle
 }
 
@@ -97,7 +97,7 @@ func (s shellSide) cut(r float64) []float64 {
 func shellParameter(c outline.Curve, t0, t1, r float64) float64 {
 	center := c.At(t0)
 	if straight(c) {
-		return t0 + (t1-t0)*min(1, r/dist(center, c.At(t1)))
+		return t0 + float64((t1-t0)*min(1, r/dist(center, c.At(t1))))
 	}
 	for range 60 {
 		tm := (t0 + t1) / 2
@@ -108,4 +108,63 @@ func shellParameter(c outline.Curve, t0, t1, r float64) float64 {
 		}
 	}
 	return t1
+}
+
+// markShells finds the sharp corners and the vertices at the ends of the pieces
+// that begin or end there.
+func (r *refiner) markShells() {
+	r.least = make([]float64, len(r.points))
+	r.shell = make([]int32, len(r.points))
+	for i := range r.shell {
+		r.shell[i] = -1
+	}
+	for side, next := range r.outline.next {
+		if !sharpCorner(r.outline.sides[side].Curve, r.outline.sides[next].Curve) {
+			continue
+		}
+		before, behind := &r.segs[r.outline.last[side]], &r.segs[r.outline.first[next]]
+		corner := before.b
+		r.shell[before.a] = corner
+		r.shell[behind.b] = corner
+		r.least[corner] = smallestShell * r.room(behind)
+	}
+}
+
+// smallestShell is the radius of the smallest shell made for the sake of angles,
+// as a part of the room about the corner. In a cusp shells would otherwise grow
+// smaller without end, as the angle between the shells' ends does.
+const smallestShell = 1.0 / 64
+
+// room is the distance from the begin of a segment, a corner, to the nearest
+// vertex joined to it and to the segments across the triangles there.
+func (r *refiner) room(s *segment) float64 {
+	corner := r.point(s.a)
+	room := math.Inf(1)
+	i, k := r.edge(s.a, s.b) // k+1 is the corner, k+2 and k the other two
+	for {
+		tr := &r.tris[i]
+		k1, k2 := after[k], after[after[k]]
+		p, q := r.point(tr.v[k2]), r.point(tr.v[k])
+		room = min(room, dist(corner, p), dist(corner, q))
+		if tr.s[k1] >= 0 {
+			piece := sizePiece{a: p, u: r2.Sub(q, p), uu: dist2(p, q)}
+			room = piece.lower(corner, 1, room)
+		}
+		if tr.s[k2] >= 0 {
+			return room
+		}
+		n := tr.n[k2]
+		i, k = n, r.entry(n, i)
+	}
+}
+
+// excused tells whether an edge spans a sharp corner from one side to the other
+// on a shell: then it is as short as the corner makes it.
+func (r *refiner) excused(u, v int32) bool {
+	corner := r.shell[u]
+	if corner < 0 || r.shell[v] != corner {
+		return false
+	}
+	du, dv := dist(r.point(u), r.point(corner)), dist(r.point(v), r.point(corner))
+	return math.Abs(du-dv) <= 1e-6*du
 }

@@ -10,13 +10,17 @@ import (
 
 // cutSegment cuts a segment in the middle of its curve's parameter, or half way
 // to a sharp corner at its end. The new vertex lies on the true curve, on either
-// side of the chord. It reports false if the segment is too short to be cut.
-func (r *refiner) cutSegment(seg int32, depth int) (bool, error) {
+// side of the chord. It reports false if the segment is too short to be cut, at a sharp
+// corner unless it is for the sake of a large triangle.
+func (r *refiner) cutSegment(seg int32, large bool, depth int) (bool, error) {
 	s := r.segs[seg]
 	if dist2(r.point(s.a), r.point(s.b)) < r.shortest2 {
 		return false, nil
 	}
 	t, corner := r.middle(&s)
+	if corner >= 0 && !large && dist(r.point(s.a), r.point(s.b)) < 2*r.least[corner] {
+		return false, nil
+	}
 	p := r.outline.sides[s.side].Curve.At(t)
 	i, k := r.edge(s.a, s.b)
 	ring, ok := r.open(i, k, seg, p)
@@ -25,16 +29,17 @@ func (r *refiner) cutSegment(seg int32, depth int) (bool, error) {
 		if ring >= 0 && depth < 40 {
 			// Another curve's chord is in the way.
 			if other := r.cavity.ring[ring].seg; other >= 0 && r.segs[other].curved {
-				if done, err := r.cutSegment(other, depth+1); err != nil || !done {
+				if done, err := r.cutSegment(other, large, depth+1); err != nil || !done {
 					return false, err
 				}
-				return r.cutSegment(seg, depth+1)
+				return r.cutSegment(seg, large, depth+1)
 			}
 		}
 		return false, fmt.Errorf("side %d (%q) touches or crosses another near (%g, %g)", s.side, r.outline.sides[s.side].Name, p.X, p.Y)
 	}
 	v := r.addVertex(p)
 	r.shell[v] = corner
+	r.bound[v] = true
 	r.fill(v)
 	r.halve(seg, v, t)
 	for _, f := range r.cavity.tris {
@@ -48,7 +53,7 @@ func (r *refiner) cutSegment(seg int32, depth int) (bool, error) {
 func (r *refiner) middle(s *segment) (t float64, corner int32) {
 	c := r.outline.sides[s.side].Curve
 	half := dist(r.point(s.a), r.point(s.b)) / 2
-	switch a, b := r.sharp[s.a], r.sharp[s.b]; {
+	switch a, b := r.least[s.a] > 0, r.least[s.b] > 0; {
 	case a && !b:
 		return shellParameter(c, s.t0, s.t1, half), s.a
 	case b && !a:

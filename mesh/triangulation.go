@@ -1,8 +1,6 @@
 package mesh
 
 import (
-	"math"
-
 	"gonum.org/v1/gonum/spatial/r2"
 
 	"notchproof/mesh/predicate"
@@ -141,15 +139,3 @@ func (t *triangulation) edgeBackwards(a, b int32) (int32, int) {
 	}
 	return -1, 0
 }
-
-// area2 is twice the signed area of a triangle, in rounded arithmetic.
-func area2(a, b, c r2.Vec) float64 {
-	return float64((b.X-a.X)*(c.Y-a.Y)) - float64((b.Y-a.Y)*(c.X-a.X))
-}
-
-func dist2(a, b r2.Vec) float64 {
-	dx, dy := a.X-b.X, a.Y-b.Y
-	return float64(dx*dx) + float64(dy*dy)
-}
-
-func dist(a, b r2.Vec) float64 { return math.Sqrt(dist2(a, b)) }

@@ -12,7 +12,7 @@ import (
 // radians, as long as the curve turns less than half a turn between them.
 func turning(c outline.Curve, t0, t1 float64) float64 {
 	a, b := c.Deriv(t0), c.Deriv(t1)
-	return math.Abs(math.Atan2(r2.Cross(a, b), r2.Dot(a, b)))
+	return math.Abs(math.Atan2(cross(a, b), dot(a, b)))
 }
 
 // turningCuts gives parameters from 0 to 1 between which the curve turns by at
@@ -49,4 +49,11 @@ func straight(c outline.Curve) bool {
 		}
 	}
 	return true
+}
+
+// curvature is the size of a curve's curvature at t.
+func curvature(c outline.Curve, t float64) float64 {
+	d := c.Deriv(t)
+	n := norm(d)
+	return math.Abs(cross(d, c.Second(t))) / (n * n * n)
 }

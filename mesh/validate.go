@@ -3,8 +3,6 @@ package mesh
 import (
 	"fmt"
 
-	"gonum.org/v1/gonum/spatial/r2"
-
 	"notchproof/mesh/predicate"
 )
 
@@ -117,7 +115,7 @@ func (m *Mesh) checkSides() error {
 				return fmt.Errorf("side %d has an edge from %g to %g after parameter %g", s, e.T0, e.T1, t)
 			}
 			c := sides[s].Curve
-			if r2.Norm(r2.Sub(c.At(e.T0), m.Points[a])) > slack || r2.Norm(r2.Sub(c.At(e.T1), m.Points[b])) > slack {
+			if dist(c.At(e.T0), m.Points[a]) > slack || dist(c.At(e.T1), m.Points[b]) > slack {
 				return fmt.Errorf("the edge of side %d from %g to %g has a corner off the curve", s, e.T0, e.T1)
 			}
 			t, last = e.T1, b
