@@ -1,8 +1,6 @@
 package fem
 
 import (
-	"math"
-
 	"notchproof/mesh"
 )
 
@@ -46,7 +44,7 @@ func newAssembler(shape *mesh.Curved, model Model, mat Material, t tables) *asse
 	a.coupling = coupling(&a.kin, &a.elastic, a.unknowns)
 	nq := max(t.straight.points, t.bent.points)
 	size := shape.Element.Count * nq
-	buffer := make([]float64, 6*size+6*nq+shape.Element.Count*a.unknowns)
+	buffer := make([]float64, 6*size+6*nq)
 	cut := func(n int) []float64 {
 		s := buffer[:n:n]
 		buffer = buffer[n:]
@@ -56,7 +54,6 @@ func newAssembler(shape *mesh.Curved, model Model, mat Material, t tables) *asse
 	a.wx, a.wy, a.w0 = cut(size), cut(size), cut(size)
 	a.weight, a.radius = cut(nq), cut(nq)
 	a.j11, a.j12, a.j21, a.j22 = cut(nq), cut(nq), cut(nq), cut(nq)
-	a.local = cut(shape.Element.Count * a.unknowns)
 	return a
 }
 
@@ -164,157 +161,4 @@ func (a *assembler) radii(t *table, nodes []int32) {
 			radius[q] += float64(phi[q] * y)
 		}
 	}
-}
-
-// stiffness writes the lower triangle of the element matrix of a triangle,
-// row-major, unknowns running within nodes.
-func (a *assembler) stiffness(tri int, k []float64) {
-	t := a.operators(tri)
-	n, nq, u := a.shape.Element.Count, t.points, a.unknowns
-	weight := a.weight[:nq]
-	for i := range n {
-		gx, gy, g0 := a.gx[i*nq:][:nq], a.gy[i*nq:][:nq], a.g0[i*nq:][:nq]
-		wx, wy, w0 := a.wx[i*nq:][:nq], a.wy[i*nq:][:nq], a.w0[i*nq:][:nq]
-		for q, w := range weight {
-			wx[q], wy[q], w0[q] = w*gx[q], w*gy[q], w*g0[q]
-		}
-	}
-	ld := n * u
-	var g [strainOperators * strainOperators]float64
-	for i := range n {
-		wx, wy, w0 := a.wx[i*nq:][:nq], a.wy[i*nq:][:nq], a.w0[i*nq:][:nq]
-		for j := 0; j <= i; j++ {
-			gx, gy, g0 := a.gx[j*nq:][:nq], a.gy[j*nq:][:nq], a.g0[j*nq:][:nq]
-			if a.revolved {
-				products9(&g, wx, wy, w0, gx, gy, g0)
-			} else {
-				products4(&g, wx, wy, gx, gy)
-			}
-			for c := range u {
-				row := k[(i*u+c)*ld+j*u:]
-				for d := range u {
-					m := &a.coupling[c][d]
-					row[d] = float64(m[0]*g[0]) + float64(m[1]*g[1]) + float64(m[2]*g[2]) +
-						float64(m[3]*g[3]) + float64(m[4]*g[4]) + float64(m[5]*g[5]) +
-						float64(m[6]*g[6]) + float64(m[7]*g[7]) + float64(m[8]*g[8])
-				}
-			}
-		}
-	}
-}
-
-func products9(g *[9]float64, wx, wy, w0, gx, gy, g0 []float64) {
-	n := len(wx)
-	if len(wy) < n || len(w0) < n || len(gx) < n || len(gy) < n || len(g0) < n {
-		panic("fem: operator rows of unequal length")
-	}
-	var s0, s1, s2, s3, s4, s5, s6, s7, s8 float64
-	for q := range n {
-		x, y, z := gx[q], gy[q], g0[q]
-		w := wx[q]
-		s0 += float64(w * x)
-		s1 += float64(w * y)
-		s2 += float64(w * z)
-		w = wy[q]
-		s3 += float64(w * x)
-		s4 += float64(w * y)
-		s5 += float64(w * z)
-		w = w0[q]
-		s6 += float64(w * x)
-		s7 += float64(w * y)
-		s8 += float64(w * z)
-	}
-	*g = [9]float64{s0, s1, s2, s3, s4, s5, s6, s7, s8}
-}
-
-func products4(g *[9]float64, wx, wy, gx, gy []float64) {
-	n := len(wx)
-	if len(wy) < n || len(gx) < n || len(gy) < n {
-		panic("fem: operator rows of unequal length")
-	}
-	var s0, s1, s3, s4 float64
-	for q := range n {
-		x, y := gx[q], gy[q]
-		w := wx[q]
-		s0 += float64(w * x)
-		s1 += float64(w * y)
-		w = wy[q]
-		s3 += float64(w * x)
-		s4 += float64(w * y)
-	}
-	*g = [9]float64{s0, s1, 0, s3, s4}
-}
-
-// addForces adds the forces that the displacements x (all unknowns, node by
-// node) exert on the nodes of one triangle, by way of the stresses and without
-// the element matrix: what is left of them at a free node is the residual, at a
-// supported node the reaction.
-func (a *assembler) addForces(tri int, x, forces []float64) {
-	t := a.operators(tri)
-	n, nq, u := a.shape.Element.Count, t.points, a.unknowns
-	nodes := a.shape.Triangle(tri)
-	for q := range nq {
-		var grad [3][strainOperators]float64
-		for i := range n {
-			at := i*nq + q
-			for c := range u {
-				v := x[int(nodes[i])*u+c]
-				grad[c][alongX] += float64(a.gx[at] * v)
-				grad[c][alongY] += float64(a.gy[at] * v)
-				grad[c][overY] += float64(a.g0[at] * v)
-			}
-		}
-		flux := a.flux(&grad)
-		w := a.weight[q]
-		for i := range n {
-			at := i*nq + q
-			for c := range u {
-				f := &flux[c]
-				forces[int(nodes[i])*u+c] += w * (float64(f[0]*a.gx[at]) + float64(f[1]*a.gy[at]) + float64(f[2]*a.g0[at]))
-			}
-		}
-	}
-}
-
-// flux turns operators of the unknowns into what they do work with: the
-// stresses, each sent back through the strain that it belongs to.
-func (a *assembler) flux(grad *[3][strainOperators]float64) (f [3][strainOperators]float64) {
-	stress := a.elastic.times(a.kin.strains(grad, a.unknowns))
-	for c := range components {
-		for u := range a.unknowns {
-			for k := range strainOperators {
-				f[u][k] += float64(a.kin.Strain[c][u][k] * stress[c])
-			}
-		}
-	}
-	return f
-}
-
-// strains evaluates the strains from the operators of the unknowns.
-func (k *Kinematics) strains(grad *[3][strainOperators]float64, unknowns int) (e [components]float64) {
-	for c := range components {
-		for u := range unknowns {
-			for o := range strainOperators {
-				e[c] += float64(k.Strain[c][u][o] * grad[u][o])
-			}
-		}
-	}
-	return e
-}
-
-func (d *Elasticity) times(e [components]float64) (s [components]float64) {
-	for i := range components {
-		for j := range components {
-			s[i] += float64(d[i][j] * e[j])
-		}
-	}
-	return s
-}
-
-func norm(v []float64) float64 {
-	sum := 0.0
-	for _, x := range v {
-		sum += x * x
-	}
-	return math.Sqrt(sum)
 }

@@ -13,8 +13,7 @@ type table struct {
 	phi, dxi, de []float64
 }
 
-func newTable(t *lagrange.Triangle, degree int) *table {
-	rule := cubature.Triangle(degree)
+func newTable(t *lagrange.Triangle, rule cubature.Rule) *table {
 	n, nq := t.Count, len(rule.Weights)
 	tab := &table{
 		points:  nq,
@@ -33,20 +32,31 @@ func newTable(t *lagrange.Triangle, degree int) *table {
 	return tab
 }
 
-// tables are the two rules of one order. On a straight triangle the gradients
-// are polynomials of degree p−1 and the weight y adds one; on a bent one the
-// Jacobian adds more, and its inverse is no polynomial at all, so that two more
-// degrees are spent there.
+// tables are what elements of one order are integrated with.
 type tables struct {
 	straight, bent *table
+	affine         *affineTable
 }
 
+// maxNodes is the number of nodes of the highest order.
+const maxNodes = lagrange.MaxCount
+
+// newTables chooses the rules. On a straight triangle the gradients are
+// polynomials of degree p−1; on a bent one the Jacobian adds to that, and its
+// inverse is no polynomial at all, so that four more degrees are spent there.
+// In bodies of revolution the terms divided by y are no polynomials where a
+// triangle touches the axis with one corner; on straight triangles three
+// degrees more are for those.
 func newTables(t *lagrange.Triangle, revolved bool) tables {
-	degree := 2*t.Order - 2
+	degree := max(2*t.Order-2, 1)
 	if revolved {
-		// The terms divided by y are no polynomials where a triangle touches
-		// the axis with one corner; the spare degree is for those.
-		degree += 3
+		degree = 2*t.Order + 1
 	}
-	return tables{newTable(t, max(degree, 1)), newTable(t, 2*t.Order+2)}
+	rule := cubature.Triangle(degree)
+	straight := newTable(t, rule)
+	return tables{
+		straight: straight,
+		bent:     newTable(t, cubature.Triangle(2*t.Order+2)),
+		affine:   newAffineTable(straight, t.Count, revolved, rule.Points),
+	}
 }
