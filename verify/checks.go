@@ -6,6 +6,7 @@ import (
 	"gonum.org/v1/gonum/spatial/r2"
 
 	"notchproof/fem"
+	"notchproof/scf"
 	"notchproof/verify/specimen"
 )
 
@@ -55,17 +56,25 @@ func plainSize(p *specimen.Part, plain specimen.Plain) float64 {
 }
 
 // imbalance is the largest deviation of the resultants that the outside fixes,
-// relative to the force or moment that the nominal stress gives.
+// relative to the load. Forces count by their moment over half the part's size.
 func imbalance(p *specimen.Part, l *specimen.Load, s *fem.Solution) float64 {
 	got, want := s.Section(p.Net), l.Resultant
-	switch {
-	case want.Torque != 0:
-		return math.Abs(got.Torque/want.Torque - 1)
-	case want.Moment != 0:
-		size := p.Plain[1].High
-		return math.Max(math.Abs(got.Moment/want.Moment-1), math.Abs(got.Transverse)*size/math.Abs(want.Moment))
+	arm := 0.0
+	for _, plain := range p.Plain {
+		arm = math.Max(arm, plainSize(p, plain)/2)
 	}
-	return math.Abs(got.Axial/want.Axial - 1)
+	axial := math.Abs(got.Axial - want.Axial)
+	moment := math.Abs(got.Moment - want.Moment)
+	switch {
+	case l.Shear:
+		return math.Abs(got.Torque/want.Torque - 1)
+	case !p.Half:
+		worst := math.Max(moment/arm, math.Max(axial, math.Abs(got.Transverse)))
+		return worst / math.Max(math.Abs(want.Axial), math.Abs(want.Moment)/arm)
+	case l.Name == scf.Bending:
+		return math.Max(moment, math.Abs(got.Transverse)*arm) / math.Abs(want.Moment)
+	}
+	return axial / math.Abs(want.Axial)
 }
 
 // farError compares the stress along the part (in torsion the shear around it)

@@ -6,14 +6,15 @@ import (
 	"notchproof/scf"
 )
 
-// A drawing turns complete, checked dimensions of a family into a part.
-type drawing func(family *scf.Family, dims scf.Dims, o scf.Options) *Part
+// A drawing turns complete, checked dimensions of a family into a part without
+// loads.
+type drawing func(dims scf.Dims, o scf.Options) *Part
 
 // drawings lists how each family of package scf is drawn.
 func drawings() map[string]drawing {
 	return map[string]drawing{
-		"bar-shoulder":   barShoulder,
-		"shaft-shoulder": shaftShoulder,
+		"bar-shoulder":   shoulder,
+		"shaft-shoulder": shoulder,
 	}
 }
 
@@ -28,12 +29,13 @@ func New(family *scf.Family, dims scf.Dims, unit string, o scf.Options) (*Part, 
 	if err := family.Check(dims); err != nil {
 		return nil, err
 	}
-	p := draw(family, family.Complete(dims), o)
+	full := family.Complete(dims)
+	p := draw(full, o)
 	p.Name, p.Family = family.Name, family
-	p.Given, p.Unit, p.Options = dims, unit, o
-	for i := range p.Loads {
-		p.Loads[i].Nominal = family.Nominal(p.Loads[i].Name, p.Dims, o)
-	}
+	p.Dims, p.Given, p.Unit, p.Options = full, dims, unit, o
+	p.addLoads(family.Kind, family.Loads, func(load scf.Load) scf.Nominal {
+		return family.Nominal(load, full, o)
+	})
 	return p, nil
 }
 

@@ -1,87 +1,41 @@
 package specimen
 
 import (
-	"math"
-
 	"gonum.org/v1/gonum/spatial/r2"
 
 	"notchproof/fem"
+	"notchproof/mesh/outline"
 	"notchproof/scf"
 )
 
-// halfBar gives tension or in-plane bending of a bar that is its own mirror
-// image in y = 0. The far stress is that of beam theory, exact in a plain bar.
-func halfBar(p *Part, load scf.Load, net float64, axis int) Load {
-	l := Load{Name: load, Model: fem.PlaneStress{}}
-	far := make([]func(y float64) float64, len(p.Plain))
-	switch load {
-	case scf.Tension:
-		for i, s := range p.Plain {
-			stress := net / (2 * s.High)
-			far[i] = func(float64) float64 { return stress }
-		}
-		l.Fixed = []fem.Fixed{{Side: axis, Unknown: 1}}
-		l.Pins = []Pin{{At: r2.Vec{X: p.Plain[0].To}, Unknown: 0}}
-		l.Resultant.Axial = net / 2
-	case scf.Bending:
-		for i, s := range p.Plain {
-			slope := math.Pow(net/(2*s.High), 3) / (net / 2)
-			far[i] = func(y float64) float64 { return slope * y }
-		}
-		// Antisymmetric: u_x vanishes on the middle line, which leaves a shift
-		// and a turn, held by the deflection at both ends of that line.
-		l.Fixed = []fem.Fixed{{Side: axis, Unknown: 0}}
-		for _, s := range p.Plain {
-			l.Pins = append(l.Pins, Pin{At: r2.Vec{X: s.To}, Unknown: 1})
-		}
-		l.Resultant.Moment = net * net / 12
+// addLoads lets the part carry loads, each scaled so that its nominal stress
+// on the net section is one.
+func (p *Part) addLoads(kind scf.Kind, names []scf.Load, nominal func(scf.Load) scf.Nominal) {
+	switch kind {
+	case scf.Bar:
+		p.addBarLoads(names, nominal)
+	case scf.Shaft:
+		p.addShaftLoads(names, nominal)
+	default:
+		panic("specimen: part that is neither bar nor shaft")
 	}
-	l.endTractions(p, far, 0)
-	return l
 }
 
-// shaft gives tension, bending or torsion of a solid shaft of net diameter net.
-func shaft(p *Part, load scf.Load, net float64) Load {
-	l := Load{Name: load}
-	far := make([]func(y float64) float64, len(p.Plain))
-	radius := net / 2
-	for i, s := range p.Plain {
-		uniform := math.Pow(radius/s.High, 2)
-		slope := math.Pow(radius/s.High, 4) / radius
-		if load == scf.Tension {
-			far[i] = func(float64) float64 { return uniform }
-		} else {
-			far[i] = func(y float64) float64 { return slope * y }
+// axis lists the straight sides on y = 0: what a half model is cut along. A
+// hole on that line breaks it into several.
+func (p *Part) axis() []int {
+	var sides []int
+	for i, s := range p.Region.Sides() {
+		if l, ok := s.Curve.(outline.Line); ok && l.A.Y == 0 && l.B.Y == 0 {
+			sides = append(sides, i)
 		}
 	}
-	start := r2.Vec{X: p.Plain[0].To}
-	switch load {
-	case scf.Tension:
-		l.Model = fem.Axisymmetric{}
-		l.Pins = []Pin{{At: start, Unknown: 0}}
-		l.Resultant.Axial = radius * radius / 2
-		l.endTractions(p, far, 0)
-	case scf.Bending:
-		// What is left to a body whose axis conditions hold is a shift across
-		// and a turn: the deflection V is held at both ends of the axis.
-		l.Model = fem.Bending{}
-		for _, s := range p.Plain {
-			l.Pins = append(l.Pins, Pin{At: r2.Vec{X: s.To}, Unknown: 1})
-		}
-		l.Resultant.Moment = math.Pow(radius, 3) / 4
-		l.endTractions(p, far, 0)
-	case scf.Torsion:
-		l.Model = fem.Torsion{}
-		l.Shear = true
-		l.Pins = []Pin{{At: r2.Vec{X: start.X, Y: p.Plain[0].High}, Unknown: 0}}
-		l.Resultant.Torque = math.Pow(radius, 3) / 4
-		l.endTractions(p, far, 2)
-	}
-	return l
+	return sides
 }
 
-// endTractions puts the far stress on both ends: along x (component 0) or
-// around the axis (component 2). The outward normal is that of the end.
+// endTractions puts the far stress, one function of y a plain stretch, on both
+// ends: along x (component 0) or around the axis (component 2). It acts along
+// the outward normal.
 func (l *Load) endTractions(p *Part, far []func(y float64) float64, component int) {
 	l.Far = func(plain int, y float64) float64 { return far[plain](y) }
 	for i, s := range p.Plain {

@@ -2,7 +2,8 @@
 // its outline, model, loads, supports, nominal section and the sides where the
 // factor is sought.
 //
-// Conventions. x runs along the part with the larger section at smaller x; y = 0
+// Conventions. x runs along the part, from the middle of a notch, hole or
+// collar or from the face of a shoulder, whose larger section is at x < 0; y = 0
 // is the axis (shafts) or the middle line (bars). Every load is scaled so that
 // the nominal stress on the net section is one: stresses that come out of a
 // solve are factors.
@@ -35,7 +36,11 @@ type Part struct {
 	Joints []Joint
 	// Half tells that only y ≥ 0 is modelled.
 	Half bool
-	// Plain are the stretches of constant section at both ends.
+	// ForceLine is the y along which a bar's axial force acts.
+	ForceLine float64
+	// Opposite tells that a bar's bending moment puts y < 0 in tension, not y > 0.
+	Opposite bool
+	// Plain are the stretches of constant section at both ends, one at either.
 	Plain []Plain
 	// Net is the x of the cut on which the balance of forces is checked.
 	Net   float64

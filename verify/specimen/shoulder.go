@@ -28,7 +28,7 @@ const (
 // of the shoulder at x = 0, fillet from (ra, d/2) up to the face or, when the
 // step is lower than the fillet, to where the outer surface cuts it off. A
 // chamfer of leg c breaks the edge of the large section.
-func shoulder(dims scf.Dims) *Part {
+func shoulder(dims scf.Dims, _ scf.Options) *Part {
 	D, d, r := dims["D"], dims["d"], dims["r"]
 	ra, elliptic := dims["ra"]
 	if !elliptic {
@@ -77,7 +77,6 @@ func shoulder(dims scf.Dims) *Part {
 	region := &outline.Region{Outer: loop}
 	notch := []int{shoulderFillet}
 	return &Part{
-		Dims:   dims,
 		Region: region,
 		Notch:  notch,
 		Joints: findJoints(region, notch),
