@@ -21,16 +21,22 @@ type Solution struct {
 	Problem  *Problem
 	Values   []float64 // unknown c of node i at i·u + c
 	Unknowns int       // unknowns that were solved for
+	// Pivots are the extreme pivots of the factorisation.
+	Pivots sparse.Pivots
+
+	load   []float64 // nodal forces of the loads, by place
+	number *numbering
+	sampler
+}
+
+// Balance is how well the nodal forces of a solution balance the loads.
+type Balance struct {
 	// Residual is the norm of the unbalanced nodal forces at free unknowns over
-	// the norm of all nodal forces, found from the stresses, not from the matrix.
+	// the norm of all nodal forces.
 	Residual float64
 	// Reactions are the forces of the pins over the norm of all nodal forces.
 	// Where loads balance and pins only hold rigid motion they are rounding.
 	Reactions []Reaction
-	// Pivots are the extreme pivots of the factorisation.
-	Pivots sparse.Pivots
-
-	sampler
 }
 
 // Reaction is the force of one pin, relative to all nodal forces.
@@ -107,8 +113,7 @@ func (p *Problem) solveCases(factor *sparse.Factor, num *numbering, a *assembler
 			}
 		}
 		s := &Solution{Problem: p, Values: values, Unknowns: num.count, Pivots: factor.Pivots()}
-		s.sampler = newSampler(p)
-		s.balance(num, loads[i], a)
+		s.load, s.number, s.sampler = loads[i], num, newSampler(p)
 		solutions[i] = s
 	}
 	return solutions
@@ -126,27 +131,33 @@ func (p *Problem) internal(values []float64, a *assembler) []float64 {
 	return f
 }
 
-// balance compares nodal forces with loads: residual and reactions.
-func (s *Solution) balance(num *numbering, load []float64, a *assembler) {
-	f := s.Problem.internal(s.Values, a)
+// Balance compares the nodal forces of the stresses with the loads. The forces
+// are integrated from the stresses anew and know nothing of the matrix that was
+// factorised, so that a fault in either shows.
+func (s *Solution) Balance() Balance {
+	p := s.Problem
+	a := newAssembler(p.Shape, p.Model, p.Material, newTables(p.Shape.Element, p.Model.Revolved()))
+	f := p.internal(s.Values, a)
 	total, free := 0.0, 0.0
-	for place, e := range num.equation {
+	for place, e := range s.number.equation {
 		total += f[place] * f[place]
 		if e >= 0 {
-			d := f[place] - load[place]
+			d := f[place] - s.load[place]
 			free += d * d
 		}
 	}
+	var b Balance
 	scale := math.Sqrt(total)
 	if scale == 0 {
-		return
+		return b
 	}
-	s.Residual = math.Sqrt(free) / scale
-	u := s.Problem.Model.Unknowns()
-	for _, place := range num.pinned {
+	b.Residual = math.Sqrt(free) / scale
+	u := p.Model.Unknowns()
+	for _, place := range s.number.pinned {
 		pin := Pin{Point: place / u, Unknown: place % u}
-		s.Reactions = append(s.Reactions, Reaction{pin, (f[place] - load[place]) / scale})
+		b.Reactions = append(b.Reactions, Reaction{pin, (f[place] - s.load[place]) / scale})
 	}
+	return b
 }
 
 // pattern describes the elements to the solver.

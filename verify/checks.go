@@ -26,6 +26,7 @@ const (
 func (c *climb) checks(s *shape, out *Computed) []Check {
 	sol := out.Last
 	last := out.Ladder[len(out.Ladder)-1]
+	balance := sol.Balance()
 	jacobian, _ := s.order(last.Order).LeastJacobian()
 	list := []Check{
 		below("balance of forces and moments across the net section", imbalance(c.part, c.load, sol), forceLimit),
@@ -40,8 +41,8 @@ func (c *climb) checks(s *shape, out *Computed) []Check {
 	}
 	return append(list,
 		below("observed contraction of the ladder", out.Factor.Order, 1),
-		below("unbalanced nodal forces", sol.Residual, solveLimit),
-		below("support forces", reactions(sol), solveLimit),
+		below("unbalanced nodal forces", balance.Residual, solveLimit),
+		below("support forces", largestReaction(balance), solveLimit),
 		above("smallest angle of the mesh in degrees", s.mesh.Quality().SmallestAngle, angleLimit),
 		above("smallest Jacobian of the bent triangles", jacobian, jacobianLimit),
 	)
@@ -104,9 +105,9 @@ func farError(p *specimen.Part, l *specimen.Load, s *fem.Solution, plain int) fl
 	return worst / scale
 }
 
-func reactions(s *fem.Solution) float64 {
+func largestReaction(b fem.Balance) float64 {
 	worst := 0.0
-	for _, r := range s.Reactions {
+	for _, r := range b.Reactions {
 		worst = math.Max(worst, math.Abs(r.Force))
 	}
 	return worst
