@@ -82,10 +82,9 @@ func (s *Solution) Amplitude(tri int, xi, eta float64) Stress {
 
 // What is divided by the radius vanishes on the axis; there the quotient is the
 // derivative. Close to it, at a share y of an element's size, the quotient of
-// two small numbers is good to 1e-16/y only, while the
-// derivative is off by y² in a field as smooth as it should be, and by y times
-// the error of the strain in one that is not yet: the change is made at nearAxis.
-const nearAxis = 1e-6
+// two small numbers is good to 1e-16/y only, while the derivative is off by y
+// times the second one: the change is made where the two are alike.
+const nearAxis = 1e-8
 
 // operators applies ∂x, ∂y and 1/y to the unknowns at a point.
 func (s *Solution) operators(tri int, xi, eta float64) (grad [3][strainOperators]float64) {
