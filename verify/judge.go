@@ -12,13 +12,13 @@ func (f *Finding) judge(p *specimen.Part, o Options) {
 	e := f.Computed.Factor
 	settled := f.settle(o)
 	f.consult(p, settled)
-	if o.Claim != nil {
-		reading := o.Claim.Reading
+	if claim := o.Claims[f.Load.Name]; claim != nil {
+		reading := claim.Reading
 		if reading == 0 {
 			reading = defaultReading
 		}
-		tolerance := claimTolerance(o.Claim.Factor, o.Claim.LastDigit, reading)
-		f.Claim = &ClaimComparison{*o.Claim, compare(o.Claim.Factor, tolerance, e, settled)}
+		tolerance := claimTolerance(claim.Factor, claim.LastDigit, reading)
+		f.Claim = &ClaimComparison{*claim, compare(claim.Factor, tolerance, e, settled)}
 	}
 	if !settled {
 		return

@@ -1,11 +1,14 @@
 package verify
 
+import "notchproof/scf"
+
 // Options say what is asked of a check. The zero value is the default.
 type Options struct {
 	// Target is the uncertainty wished for, relative to the factor; 0: 0.001.
 	Target float64
-	// Claim is the user's own factor, nil when there is none.
-	Claim *Claim
+	// Claims are the user's own factors, by load; a load without one is judged
+	// by the handbook.
+	Claims map[scf.Load]*Claim
 	// Workers is the number of goroutines; 0: one a processor.
 	Workers int
 	// Progress hears what is being done, rung by rung. It may be called from

@@ -83,11 +83,10 @@ func (q *questions) job(args []string) (*job, error) {
 	if err != nil {
 		return nil, err
 	}
-	count := len(loads)
-	if count == 0 {
-		count = len(part.Loads)
+	if len(loads) == 0 {
+		loads = part.Family.Loads
 	}
-	options, err := q.verify(count)
+	options, err := q.verify(loads)
 	return &job{part, loads, options}, err
 }
 

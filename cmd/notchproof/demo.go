@@ -19,10 +19,10 @@ func demonstration(q *questions) (*job, error) {
 		return nil, err
 	}
 	part.Title = "bow thruster drive shaft, step at the bearing seat (demonstration)"
-	options, err := q.verify(1)
+	options, err := q.verify([]scf.Load{scf.Torsion})
 	if err != nil {
 		return nil, err
 	}
-	options.Claim = &verify.Claim{Factor: 1.36, LastDigit: 0.01, From: "design note of the thruster (invented)"}
+	options.Claims = map[scf.Load]*verify.Claim{scf.Torsion: {Factor: 1.36, LastDigit: 0.01, From: "design note of the thruster (invented)"}}
 	return &job{part, []scf.Load{scf.Torsion}, options}, nil
 }

@@ -80,9 +80,8 @@ func loadNames(family *scf.Family) string {
 	return strings.Join(names, ", ")
 }
 
-// verify collects what the flags ask of a check. loads is the number of loads
-// that will be checked.
-func (q *questions) verify(loads int) (verify.Options, error) {
+// verify collects what the flags ask of a check of the given loads.
+func (q *questions) verify(loads []scf.Load) (verify.Options, error) {
 	var o verify.Options
 	target, err := share(q.target)
 	if err != nil || target < 1e-9 || target > 0.1 {
@@ -95,10 +94,11 @@ func (q *questions) verify(loads int) (verify.Options, error) {
 		}
 		return o, nil
 	}
-	if loads > 1 {
+	if len(loads) != 1 {
 		return o, &inputError{text: "--claim " + q.claim + ": for which load?", hint: "name the one load that it is meant for with --load"}
 	}
-	o.Claim, err = q.claimed()
+	claim, err := q.claimed()
+	o.Claims = map[scf.Load]*verify.Claim{loads[0]: claim}
 	return o, err
 }
 
