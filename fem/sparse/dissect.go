@@ -8,7 +8,7 @@ import (
 // leafLength is the length of the element lists up to which elements share a
 // leaf. Larger leaves waste arithmetic on zeros between the elements' insides,
 // smaller ones spend their time on handing tiny matrices to the parent.
-const leafLength = 24
+const leafLength = 64
 
 // A node of the dissection is a set of elements. Nodes are numbered in
 // postorder: children before their parent, the root last.
@@ -140,10 +140,7 @@ func (d *dissection) choose(lo, hi int) (across, at int) {
 		for t := 1; t < n; t++ {
 			size += d.cover[t]
 			small := float64(min(t, n-t)) / float64(n)
-			if small < 0.3 && t != n/2 {
-				continue
-			}
-			if c := float64(size) / small; best < 0 || c < best {
+			if c := float64(size) / (small * (1 - small)); best < 0 || c < best {
 				across, at, best = k, t, c
 			}
 		}
