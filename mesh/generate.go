@@ -33,7 +33,7 @@ func Generate(region *outline.Region, size Sizing) (*Mesh, error) {
 	if err != nil {
 		return nil, err
 	}
-	if err := checkCount(region, size.Largest); err != nil {
+	if err := checkArea(region, size.Largest, box); err != nil {
 		return nil, err
 	}
 	t, b, err := start(region, field, size, box)
@@ -48,24 +48,30 @@ func Generate(region *outline.Region, size Sizing) (*Mesh, error) {
 	return r.mesh(region), nil
 }
 
-// checkCount refuses at once what would come to far too many triangles: the area
-// over that of an equilateral triangle of the largest size.
-func checkCount(region *outline.Region, largest float64) error {
-	if largest == 0 {
-		return nil
-	}
+// checkArea refuses outlines that enclose nothing, and at once what would come to
+// far too many triangles: the area over that of an equilateral triangle of the
+// largest size.
+func checkArea(region *outline.Region, largest float64, box r2.Box) error {
+	extent := extentOf(box)
 	area := 0.0
 	for _, s := range region.Sides() {
 		ts := turningCuts(s.Curve, sizePieceTurn*math.Pi/180)
 		for i := range len(ts) - 1 {
-			area += cross(s.Curve.At(ts[i]), s.Curve.At(ts[i+1])) / 2
+			area += area2(box.Min, s.Curve.At(ts[i]), s.Curve.At(ts[i+1])) / 2
 		}
 	}
-	if n := area / (math.Sqrt(3) / 4 * largest * largest); n > maxTriangles {
+	if math.Abs(area) < leastArea*extent*extent {
+		return fmt.Errorf("the outline encloses no area: %g at an extent of %g", area, extent)
+	}
+	if n := area / (math.Sqrt(3) / 4 * largest * largest); largest > 0 && n > maxTriangles {
 		return fmt.Errorf("largest size %g: would take %.2g triangles, more than %d", largest, n, maxTriangles)
 	}
 	return nil
 }
+
+// leastArea is the smallest area, in squares of the extent, told from rounding
+// errors.
+const leastArea = 1e-12
 
 // mesh keeps what is inside, with the boundary side by side.
 func (r *refiner) mesh(region *outline.Region) *Mesh {

@@ -124,7 +124,7 @@ func (r *refiner) improve(i int32) error {
 	}
 	v := r.tris[i].v
 	if !s.large && r.excused(v[after[s.k]], v[after[after[s.k]]]) {
-		return nil
+		return r.unbend(i)
 	}
 	c := r.steiner(i, s)
 	tri, wall := r.walk(i, c)
@@ -138,7 +138,7 @@ func (r *refiner) improve(i int32) error {
 		}
 	}
 	if _, ok := r.sound(c); !ok {
-		return nil
+		return r.unbend(i)
 	}
 	r.fill(r.addVertex(c))
 	for _, f := range r.cavity.tris {
@@ -190,12 +190,12 @@ func (r *refiner) steiner(i int32, s shape) r2.Vec {
 // cutFor cuts a segment for the sake of triangle i, which is looked at again.
 func (r *refiner) cutFor(i, seg int32, large bool) error {
 	stamp := r.tris[i].stamp
-	if seg < 0 {
-		return nil
-	}
 	done, err := r.cutSegment(seg, large, 0)
-	if err != nil || !done {
+	if err != nil {
 		return err
+	}
+	if !done {
+		return r.unbend(i)
 	}
 	if r.tris[i].stamp == stamp {
 		r.judge(i)

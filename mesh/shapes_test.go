@@ -19,8 +19,6 @@ func polygon(ps ...r2.Vec) outline.Loop {
 	return l
 }
 
-// chain is polygon for a loop with curves between: a nil point is replaced by
-// the curve given in its place.
 func line(a, b r2.Vec) outline.Side { return outline.Side{Curve: outline.Line{A: a, B: b}} }
 
 func arc(c r2.Vec, r, start, sweep float64) outline.Side {

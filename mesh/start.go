@@ -7,7 +7,6 @@ import (
 	"gonum.org/v1/gonum/spatial/r2"
 
 	"notchproof/mesh/outline"
-	"notchproof/mesh/predicate"
 )
 
 // start triangulates the boundary alone. Where chords of curves cross or leave
@@ -88,6 +87,7 @@ func triangulate(b *boundary) (*triangulation, []int32, error) {
 		for s := range t.segs {
 			coarse = append(coarse, t.lens(b, int32(s))...)
 		}
+		coarse = append(coarse, t.foldedCorners(b)...)
 	}
 	slices.Sort(coarse)
 	return t, slices.Compact(coarse), nil
@@ -142,37 +142,4 @@ func (c crossing) err(t *triangulation, b *boundary) error {
 	}
 	p := t.points[c.vertex]
 	return fmt.Errorf("side %d (%q) runs through the vertex (%g, %g)", s.side, b.sides[s.side].Name, p.X, p.Y)
-}
-
-// lens lists the curved segments to be cut if something lies between a segment's
-// chord and its curve: then a later cut of the segment would put that on the
-// wrong side.
-func (t *triangulation) lens(b *boundary, seg int32) []int32 {
-	s := &t.segs[seg]
-	if !s.curved {
-		return nil
-	}
-	p := b.sides[s.side].Curve.At((s.t0 + s.t1) / 2)
-	i, k := t.edge(s.a, s.b)
-	from, to := t.points[s.a], t.points[s.b]
-	switch predicate.Orient(from, to, p) {
-	case 0:
-		return nil
-	case -1:
-		n := t.tris[i].n[k]
-		i, k = n, t.entry(n, i)
-		from, to = to, from
-	}
-	// The circle through a, p, b stands for the curve.
-	if predicate.InCircle(from, to, p, t.points[t.tris[i].v[k]]) > 0 {
-		return []int32{seg}
-	}
-	tri, wall := t.walk(i, p)
-	if wall < 0 {
-		return nil
-	}
-	if other := t.tris[tri].s[wall]; other >= 0 {
-		return crossing{seg, other, -1}.of(t)
-	}
-	return []int32{seg}
 }
