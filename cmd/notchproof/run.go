@@ -31,7 +31,7 @@ type command struct {
 
 // commands lists all verbs in the order of the help text.
 func commands() []*command {
-	return []*command{checkCommand()}
+	return []*command{checkCommand(), studyCommand(), pictureCommand(), partsCommand()}
 }
 
 // A call is one run of a command.

@@ -1,0 +1,57 @@
+package main
+
+import (
+	"bufio"
+	"io"
+	"os"
+	"path/filepath"
+	"strings"
+)
+
+// checkOutput refuses, before any work is done, a name that could not be
+// written. An empty name asks for no file.
+func checkOutput(name, extension string) error {
+	if name == "" {
+		return nil
+	}
+	if !strings.EqualFold(filepath.Ext(name), extension) {
+		return &inputError{text: "-o " + quoted(name) + ": not a name that ends in " + extension, hint: "the file is written in that format alone"}
+	}
+	info, err := os.Stat(filepath.Dir(name))
+	if err != nil || !info.IsDir() {
+		return &inputError{text: "-o " + quoted(name) + ": its folder does not exist", hint: "make the folder first"}
+	}
+	if info, err := os.Stat(name); err == nil && info.IsDir() {
+		return &inputError{text: "-o " + quoted(name) + ": is a folder", hint: "name a file in it"}
+	}
+	return nil
+}
+
+// writeFile writes a file whole or not at all: to a neighbour first, which
+// takes the name only when all of it is there.
+func writeFile(name string, write func(io.Writer) error) (err error) {
+	f, err := os.CreateTemp(filepath.Dir(name), ".notchproof-*")
+	if err != nil {
+		return &inputError{text: "-o " + quoted(name) + ": cannot be written", hint: "choose a folder that may be written to"}
+	}
+	defer func() {
+		if err != nil {
+			f.Close()
+			os.Remove(f.Name())
+		}
+	}()
+	buffer := bufio.NewWriter(f)
+	if err = write(buffer); err != nil {
+		return err
+	}
+	if err = buffer.Flush(); err != nil {
+		return err
+	}
+	if err = f.Chmod(0o644); err != nil {
+		return err
+	}
+	if err = f.Close(); err != nil {
+		return err
+	}
+	return os.Rename(f.Name(), name)
+}

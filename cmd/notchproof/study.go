@@ -1,0 +1,172 @@
+package main
+
+import (
+	"context"
+	"fmt"
+	"io"
+	"math"
+	"strings"
+
+	"notchproof/render"
+	"notchproof/render/number"
+	"notchproof/verify"
+	"notchproof/verify/specimen"
+)
+
+func studyCommand() *command {
+	return &command{
+		name:  "study",
+		args:  "PART [dimension=value ...] [--by size|order] [flags]",
+		short: "show how the factor converges with the mesh or the order",
+		long: `Solves the part on a ladder and prints every rung: triangles, elements per 90°
+of arc on the notch, unknowns, factor, change, observed order, then the limit.
+By size the elements keep their order (2 unless --order says otherwise) and the
+meshes are refined everywhere alike; the limit is Richardson's, its bar the grid
+convergence index of Roache (1994) by the procedure of Celik et al. (2008).
+By order the mesh stays and the order climbs from 1 to 8.
+
+  notchproof study bar-shoulder D=60mm d=40mm r=4mm --load tension --by size -o study.png
+`,
+		run: runStudy,
+	}
+}
+
+func runStudy(c *call) (int, error) {
+	var q questions
+	by := c.flags.String("by", "size", "what is refined: size or order")
+	order := c.flags.Int("order", 0, "order of the elements in a study by size, 1 to 8 (default 2)")
+	rungs := c.flags.Int("rungs", 0, "number of meshes in a study by size, 3 to 8 (default 5)")
+	file := c.flags.StringP("output", "o", "", "write the plot to this PNG file")
+	q.loadFlag(c.flags)
+	q.partFlags(c.flags)
+	args, err := c.parse()
+	if err != nil {
+		return 0, err
+	}
+	part, load, err := q.one(args)
+	if err != nil {
+		return 0, err
+	}
+	climb, err := studyKind(*by, *order, *rungs)
+	if err != nil {
+		return 0, err
+	}
+	if err := checkOutput(*file, ".png"); err != nil {
+		return 0, err
+	}
+	bar := c.progress()
+	s, err := climb(c.ctx, part, load, verify.StudyOptions{Order: *order, Rungs: *rungs, Progress: bar.tell})
+	bar.clear()
+	if err != nil {
+		return 0, err
+	}
+	if err := writeStudy(c.stdout, s, c.style()); err != nil {
+		return 0, err
+	}
+	if *file != "" {
+		im, err := render.StudyPlot(plotOf(s), render.StudyOptions{})
+		if err != nil {
+			return 0, err
+		}
+		if err := writeFile(*file, func(w io.Writer) error { return render.WritePNG(w, im) }); err != nil {
+			return 0, err
+		}
+		fmt.Fprintf(c.stdout, "\nplot written to %s\n", *file)
+	}
+	if !s.Estimate.Status.Settled() {
+		return exitUndecided, nil
+	}
+	return exitAgrees, nil
+}
+
+// one reads a part and the one load that a study or picture is about: the one
+// that is named, else the first that the part carries.
+func (q *questions) one(args []string) (*specimen.Part, *specimen.Load, error) {
+	if len(q.load) > 1 {
+		return nil, nil, &inputError{text: "--load " + strings.Join(q.load, ",") + ": more than one", hint: "name the one load that is wanted"}
+	}
+	job, err := q.job(args)
+	if err != nil {
+		return nil, nil, err
+	}
+	name := job.part.Loads[0].Name
+	if len(job.loads) > 0 {
+		name = job.loads[0]
+	}
+	load, _ := job.part.Load(name)
+	return job.part, load, nil
+}
+
+// A climber makes one kind of study.
+type climber = func(context.Context, *specimen.Part, *specimen.Load, verify.StudyOptions) (*verify.Study, error)
+
+func studyKind(by string, order, rungs int) (climber, error) {
+	if order != 0 && (order < 1 || order > 8) {
+		return nil, &inputError{text: fmt.Sprintf("--order %d: no such order", order), hint: "give an order from 1 to 8"}
+	}
+	if rungs != 0 && (rungs < 3 || rungs > 8) {
+		return nil, &inputError{text: fmt.Sprintf("--rungs %d: too few or too many", rungs), hint: "give 3 to 8; three are needed to observe an order"}
+	}
+	switch by {
+	case "size":
+		return verify.BySize, nil
+	case "order":
+		if order != 0 || rungs != 0 {
+			return nil, &inputError{text: "--order and --rungs belong to a study by size", hint: "a study by order climbs from 1 to 8 on one mesh"}
+		}
+		return verify.ByOrder, nil
+	}
+	return nil, &inputError{text: "--by " + quoted(by) + ": no such study", hint: "size or order"}
+}
+
+// writeStudy prints the table.
+func writeStudy(w io.Writer, s *verify.Study, st style) error {
+	var b strings.Builder
+	fmt.Fprintf(&b, "%s  %s\n%s, nominal stress %s (%s)\n\n", st.bold(s.Part.Name), dimensionText(s.Part),
+		st.bold(string(s.Load.Name)), s.Load.Nominal.Formula, s.Load.Nominal.Section)
+	fmt.Fprintf(&b, "%5s %10s %8s %9s %12s %12s %9s\n", "order", "triangles", "per 90°", "unknowns", "factor", "change", "observed")
+	for _, r := range s.Rows {
+		fmt.Fprintf(&b, "%5d %10d %8.1f %9d %12.7f %12s %9s\n", r.Order, r.Triangles, r.PerQuarter, r.Unknowns, r.Factor,
+			orNothing("%+.2e", r.Change), orNothing("%.2f", r.ObservedOrder))
+	}
+	e := s.Estimate
+	switch {
+	case !e.Status.Settled():
+		fmt.Fprintf(&b, "\n%s\n", st.weak("no limit: "+e.Status.String()))
+	case s.Sizes != nil:
+		fmt.Fprintf(&b, "\nobserved order %.2f (%s); extrapolated limit %.6f\ngrid convergence index of the finest mesh %s, so that its factor is %s\n",
+			s.Sizes.Order, e.Status, s.Sizes.Limit, number.Percent(s.Sizes.GCI, 3), number.Uncertain(e.Value, e.Uncertainty))
+	default:
+		fmt.Fprintf(&b, "\none order more leaves about %.2f of the error (%s); the factor is %s\n", e.Order, e.Status, number.Uncertain(e.Value, e.Uncertainty))
+	}
+	for _, note := range e.Notes {
+		fmt.Fprintf(&b, "note: %s\n", note)
+	}
+	_, err := io.WriteString(w, b.String())
+	return err
+}
+
+func orNothing(format string, v float64) string {
+	if math.IsNaN(v) || math.IsInf(v, 0) {
+		return "–"
+	}
+	return fmt.Sprintf(format, v)
+}
+
+func plotOf(s *verify.Study) render.Study {
+	p := render.Study{Title: s.Part.Name + ", " + string(s.Load.Name), Note: dimensionText(s.Part), Limit: math.NaN(), Uncertainty: math.NaN()}
+	if s.Estimate.Status.Settled() {
+		p.Limit, p.Uncertainty = s.Estimate.Value, s.Estimate.Uncertainty
+		if s.Sizes != nil {
+			p.Limit = s.Sizes.Limit
+		}
+	}
+	for _, r := range s.Rows {
+		label := fmt.Sprintf("order %d", r.Order)
+		if s.Sizes != nil {
+			label = fmt.Sprintf("%.3g per 90°", r.PerQuarter)
+		}
+		p.Points = append(p.Points, render.StudyPoint{Label: label, Unknowns: r.Unknowns, Factor: r.Factor, Change: math.Abs(r.Change)})
+	}
+	return p
+}
