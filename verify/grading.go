@@ -60,3 +60,10 @@ func (s *shape) order(p int) *mesh.Curved {
 	}
 	return c
 }
+
+// halved is the shape with every element split into four.
+func (s *shape) halved() *shape {
+	g := s.grading
+	g.perQuarter, g.growth = 2*g.perQuarter, g.growth/2
+	return &shape{grading: g, mesh: s.mesh.Halved(), curved: make(map[int]*mesh.Curved)}
+}

@@ -15,7 +15,7 @@ type StudyOptions struct {
 	// Order is the order of the elements of a study by size; 0: 2, the order
 	// most meshes in use have.
 	Order int
-	// Rungs is the number of meshes of a study by size; 0: 5.
+	// Rungs is the number of meshes of a study by size; 0: 4.
 	Rungs    int
 	Workers  int
 	Progress func(text string)
@@ -39,44 +39,39 @@ type StudyRow struct {
 	ObservedOrder float64 // by size: from this row and the two before, NaN where there is none
 }
 
-// refinement is the ratio of element sizes from rung to rung of a study by
-// size: above the 1.3 that Celik et al. (2008) ask for, small enough that five
-// rungs stay cheap.
-const refinement = 1.5
-
 // mostUnknowns bounds a single solve of a study: about 3 GB of factor.
 const mostUnknowns = 1_200_000
 
-// BySize solves one order on meshes that are refined everywhere alike.
+// BySize solves one order on a graded mesh and on those made of it by halving
+// every element, so that nothing but the size changes from rung to rung and the
+// order can be observed.
 func BySize(ctx context.Context, p *specimen.Part, l *specimen.Load, o StudyOptions) (*Study, error) {
 	order, rungs := o.Order, o.Rungs
 	if order == 0 {
 		order = 2
 	}
 	if rungs == 0 {
-		rungs = 5
+		rungs = 4
 	}
 	s := &Study{Part: p, Load: l}
+	made, err := newShape(p, grading{perQuarter: 3, growth: 0.6, joint: 0.5})
+	if err != nil {
+		return nil, err
+	}
 	var w fem.Workspace
 	var sizes, values []float64
-	scale := 1.0
-	for range rungs {
-		// A size field is refined everywhere alike when the sizes at its
-		// sources and its growth shrink together.
-		g := grading{perQuarter: 4 * scale, growth: 0.6 / scale, joint: 0.3}
-		scale *= refinement
-		made, err := newShape(p, g)
-		if err != nil {
-			return nil, err
+	for k := range rungs {
+		if k > 0 {
+			made = made.halved()
 		}
 		if n := estimateUnknowns(len(made.mesh.Triangles), order, l.Model.Unknowns()); n > mostUnknowns {
-			return nil, fmt.Errorf("rung %d would have about %d unknowns, more than %d: ask for fewer rungs or a lower order", len(s.Rows)+1, n, mostUnknowns)
+			return nil, fmt.Errorf("rung %d would have about %d unknowns, more than %d: ask for fewer rungs or a lower order", k+1, n, mostUnknowns)
 		}
 		if err := s.add(ctx, made, order, &w, o); err != nil {
 			return nil, err
 		}
 		sizes = append(sizes, 1/math.Sqrt(float64(len(made.mesh.Triangles))))
-		values = append(values, s.Rows[len(s.Rows)-1].Factor)
+		values = append(values, s.Rows[k].Factor)
 	}
 	study := extrapolate.Sizes(sizes, values)
 	s.Sizes, s.Estimate = &study, study.Estimate()

@@ -83,6 +83,9 @@ func loadNames(family *scf.Family) string {
 // verify collects what the flags ask of a check of the given loads.
 func (q *questions) verify(loads []scf.Load) (verify.Options, error) {
 	var o verify.Options
+	if q.target == "" { // the command has no such flag
+		q.target = "0.1%"
+	}
 	target, err := share(q.target)
 	if err != nil || target < 1e-9 || target > 0.1 {
 		return o, &inputError{text: "--target " + quoted(q.target) + ": not a target", hint: "give a share of the factor from 1e-9 to 0.1, as in 0.1% or 0.001"}

@@ -21,7 +21,7 @@ func studyCommand() *command {
 		long: `Solves the part on a ladder and prints every rung: triangles, elements per 90°
 of arc on the notch, unknowns, factor, change, observed order, then the limit.
 By size the elements keep their order (2 unless --order says otherwise) and the
-meshes are refined everywhere alike; the limit is Richardson's, its bar the grid
+every element is split into four from rung to rung; the limit is Richardson's, its bar the grid
 convergence index of Roache (1994) by the procedure of Celik et al. (2008).
 By order the mesh stays and the order climbs from 1 to 8.
 
@@ -35,7 +35,7 @@ func runStudy(c *call) (int, error) {
 	var q questions
 	by := c.flags.String("by", "size", "what is refined: size or order")
 	order := c.flags.Int("order", 0, "order of the elements in a study by size, 1 to 8 (default 2)")
-	rungs := c.flags.Int("rungs", 0, "number of meshes in a study by size, 3 to 8 (default 5)")
+	rungs := c.flags.Int("rungs", 0, "number of meshes in a study by size, 3 to 6 (default 4)")
 	file := c.flags.StringP("output", "o", "", "write the plot to this PNG file")
 	q.loadFlag(c.flags)
 	q.partFlags(c.flags)
@@ -104,8 +104,8 @@ func studyKind(by string, order, rungs int) (climber, error) {
 	if order != 0 && (order < 1 || order > 8) {
 		return nil, &inputError{text: fmt.Sprintf("--order %d: no such order", order), hint: "give an order from 1 to 8"}
 	}
-	if rungs != 0 && (rungs < 3 || rungs > 8) {
-		return nil, &inputError{text: fmt.Sprintf("--rungs %d: too few or too many", rungs), hint: "give 3 to 8; three are needed to observe an order"}
+	if rungs != 0 && (rungs < 3 || rungs > 6) {
+		return nil, &inputError{text: fmt.Sprintf("--rungs %d: too few or too many", rungs), hint: "give 3 to 6; three are needed to observe an order"}
 	}
 	switch by {
 	case "size":
