@@ -13,8 +13,16 @@ type drawing func(dims scf.Dims, o scf.Options) *Part
 // drawings lists how each family of package scf is drawn.
 func drawings() map[string]drawing {
 	return map[string]drawing{
-		"bar-shoulder":   shoulder,
-		"shaft-shoulder": shoulder,
+		"bar-shoulder":      shoulder,
+		"bar-notch":         notch,
+		"bar-edge-notch":    barEdgeNotch,
+		"bar-hole":          barHole,
+		"bar-ellipse":       barEllipse,
+		"bar-collar":        collar,
+		"shaft-shoulder":    shoulder,
+		"shaft-groove":      notch,
+		"shaft-ring-groove": shaftRingGroove,
+		"shaft-collar":      collar,
 	}
 }
 
