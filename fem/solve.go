@@ -66,8 +66,8 @@ func (p *Problem) Solve(ctx context.Context, w *Workspace, workers int) ([]*Solu
 	if w == nil {
 		w = new(Workspace)
 	}
-	if !(p.Material.E > 0) || !(p.Material.Nu > -1 && p.Material.Nu < 0.5) {
-		return nil, fmt.Errorf("material: E=%g, nu=%g: want E > 0 and −1 < nu < 0.5", p.Material.E, p.Material.Nu)
+	if !(p.Material.E > 0) || math.IsInf(p.Material.E, 0) || !(p.Material.Nu > -1 && p.Material.Nu < 0.5) {
+		return nil, fmt.Errorf("material: E=%g, nu=%g: want a finite E > 0 and −1 < nu < 0.5", p.Material.E, p.Material.Nu)
 	}
 	num := p.number()
 	plan, err := sparse.Analyse(p.pattern(&num))
