@@ -206,12 +206,16 @@ func (p *manufactured) checkHarmonic(t *testing.T) {
 }
 
 // Bounds of observed orders. One halving of a mesh of some forty elements is not
-// yet the limit: it may fall short of the order by 0.45 where a fault of
-// geometry, loads or integration would cost a whole order or more. Below the
-// floor errors are rounding and have no order; 4e-12 is the most that was seen.
+// yet the limit: it may fall short of the order by 0.45, on a surface of a few
+// edges by 0.7, where a fault of geometry, loads or integration would cost a
+// whole order or more. Below the
+// floor errors are rounding and have no order; 4e-12 is the most that was seen
+// on these meshes. It grows with the condition of the system, fourfold with
+// every further halving.
 const (
-	orderShortfall = 0.45
-	roundingFloor  = 1e-11
+	orderShortfall   = 0.45
+	surfaceShortfall = 0.7
+	roundingFloor    = 1e-11
 )
 
 // Halving the elements must divide the error of displacements by 2^(p+1), that
@@ -233,7 +237,7 @@ func TestManufacturedOrder(t *testing.T) {
 			for i, m := range meshes {
 				e := p.misfit(p.problem(m.Curve(order), p.part).mustSolve(t))
 				if i > 0 {
-					p.checkOrder(t, order, last, e)
+					p.checkOrder(t, order, last, e, roundingFloor*math.Pow(4, float64(i-1)))
 				}
 				last = e
 			}
@@ -241,21 +245,22 @@ func TestManufacturedOrder(t *testing.T) {
 	}
 }
 
-func (p *manufactured) checkOrder(t *testing.T, order int, coarse, fine misfit) {
+func (p *manufactured) checkOrder(t *testing.T, order int, coarse, fine misfit, floor float64) {
 	t.Helper()
 	for _, row := range []struct {
 		what         string
 		order        int
+		shortfall    float64
 		coarse, fine float64
 	}{
-		{"displacement", order + 1, coarse.displacement, fine.displacement},
-		{"stress", order, coarse.stress, fine.stress},
-		{"surface stress", order, coarse.surface, fine.surface},
+		{"displacement", order + 1, orderShortfall, coarse.displacement, fine.displacement},
+		{"stress", order, orderShortfall, coarse.stress, fine.stress},
+		{"surface stress", order, surfaceShortfall, coarse.surface, fine.surface},
 	} {
-		if row.what == "surface stress" && len(p.free) == 0 || row.fine < roundingFloor {
+		if row.what == "surface stress" && len(p.free) == 0 || row.fine < floor {
 			continue
 		}
-		if got := math.Log2(row.coarse / row.fine); !(got > float64(row.order)-orderShortfall) {
+		if got := math.Log2(row.coarse / row.fine); !(got > float64(row.order)-row.shortfall) {
 			t.Errorf("%s, %s, order %d: error of %s falls from %.2g to %.2g, order %.2f, want %d",
 				p.exact.name, p.model.Name(), order, row.what, row.coarse, row.fine, got, row.order)
 		}

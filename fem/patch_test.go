@@ -2,6 +2,7 @@ package fem
 
 import (
 	"fmt"
+	"slices"
 	"testing"
 
 	"notchproof/mesh"
@@ -59,18 +60,30 @@ const (
 	patchDisplacement = 1e-12
 	patchStress       = 2e-11
 	patchResidual     = 1e-12
+	// On bent triangles of a body of revolution the virtual work of a constant
+	// stress, ∂φ·σ·y·det J, is of degree 3p−2; the rule there is exact to 2p+2,
+	// which is less from order 5 on. Measured is 3e-11 on edges that turn by 45°.
+	patchIntegrated = 1e-10
 )
 
 func checkPatch(t *testing.T, e *exact, on part, m *mesh.Mesh, order int) {
 	t.Helper()
-	s := e.problem(m.Curve(order), on).mustSolve(t)
+	shape := m.Curve(order)
+	s := e.problem(shape, on).mustSolve(t)
 	du, ds := e.deviation(s)
-	if !(du <= patchDisplacement) || !(ds <= patchStress) {
+	bound := patchStress
+	if order >= 5 && e.model.Revolved() && slices.Contains(shape.Straight, false) {
+		bound = patchIntegrated
+	}
+	if !(du <= patchDisplacement) || !(ds <= bound) {
 		t.Errorf("%s, %s, %s, order %d: displacement off by %.2g, stress by %.2g", e.name, e.model.Name(), on.name, order, du, ds)
 	}
 	// Without stress there are no forces that a residual could be a share of.
-	if _, size := difference(Stress{}, e.at(pt(1.3, 0.8)).stress); size > 1e-9 && !(s.Balance().Residual < patchResidual) {
-		t.Errorf("%s, %s, %s, order %d: residual %.2g", e.name, e.model.Name(), on.name, order, s.Balance().Residual)
+	if _, size := difference(Stress{}, e.at(pt(1.3, 0.8)).stress); size < 1e-9 {
+		return
+	}
+	if r := s.Balance().Residual; !(r < patchResidual) {
+		t.Errorf("%s, %s, %s, order %d: residual %.2g", e.name, e.model.Name(), on.name, order, r)
 	}
 }
 
