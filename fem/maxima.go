@@ -2,6 +2,7 @@ package fem
 
 import (
 	"math"
+	"slices"
 	"sort"
 )
 
@@ -16,36 +17,73 @@ type Quantity func(SurfacePoint) float64
 // them.
 func (s *Solution) Maxima(sides []int, of Quantity) []SurfacePoint {
 	var found []SurfacePoint
-	for _, chain := range s.chains(sides) {
-		found = append(found, s.chainMaxima(chain, of)...)
+	for _, c := range s.chains(sides) {
+		found = append(found, s.chainMaxima(c, of)...)
 	}
 	sort.SliceStable(found, func(i, j int) bool { return of(found[i]) > of(found[j]) })
 	return found
 }
 
-// chains lists the boundary edges of the sides in order, cut wherever one does
-// not begin where the last one ended.
-func (s *Solution) chains(sides []int) [][]int {
+// A chain is a run of boundary edges, each beginning where the one before it
+// ends. A closed one ends where it began.
+type chain struct {
+	edges  []int
+	closed bool
+}
+
+// chains lists the boundary edges of the sides in order, cut wherever the
+// boundary leaves those sides.
+func (s *Solution) chains(sides []int) []chain {
 	m := s.Problem.Shape.Mesh
 	wanted := make(map[int]bool, len(sides))
 	for _, side := range sides {
 		wanted[side] = true
 	}
-	var chains [][]int
-	last := int32(-1)
+	var runs [][]int
 	for i, e := range m.Boundary {
 		if !wanted[int(e.Side)] {
 			continue
 		}
-		corners := m.Triangles[e.Triangle]
-		from, to := corners[(e.Opposite+1)%3], corners[(e.Opposite+2)%3]
-		if from != last {
-			chains = append(chains, nil)
+		if n := len(runs) - 1; n >= 0 && s.follows(runs[n], []int{i}) {
+			runs[n] = append(runs[n], i)
+		} else {
+			runs = append(runs, []int{i})
 		}
-		chains[len(chains)-1] = append(chains[len(chains)-1], i)
-		last = to
 	}
+	return s.joinUp(runs)
+}
+
+// joinUp puts together what the first side of a loop has cut.
+func (s *Solution) joinUp(runs [][]int) []chain {
+	var chains []chain
+	for len(runs) > 0 {
+		last := len(runs) - 1
+		run := runs[last]
+		runs = runs[:last]
+		before := slices.IndexFunc(runs, func(r []int) bool { return s.follows(run, r) })
+		if before >= 0 {
+			runs[before] = append(run, runs[before]...)
+			continue
+		}
+		chains = append(chains, chain{run, s.follows(run, run)})
+	}
+	slices.Reverse(chains)
 	return chains
+}
+
+// follows tells whether one run begins where another ends.
+func (s *Solution) follows(before, after []int) bool {
+	_, end := s.edgeCorners(before[len(before)-1])
+	start, _ := s.edgeCorners(after[0])
+	return start == end
+}
+
+// edgeCorners are the mesh points at the ends of a boundary edge, in its
+// direction.
+func (s *Solution) edgeCorners(edge int) (from, to int32) {
+	e := s.Problem.Shape.Mesh.Boundary[edge]
+	corners := s.Problem.Shape.Mesh.Triangles[e.Triangle]
+	return corners[(e.Opposite+1)%3], corners[(e.Opposite+2)%3]
 }
 
 // A sample is a place on an edge with the value there.
@@ -63,29 +101,38 @@ type place struct {
 	value   float64 // the larger one
 }
 
-func (s *Solution) places(chain []int, of Quantity) (places []place, step float64) {
+func (s *Solution) places(c chain, of Quantity) (places []place, step float64) {
 	per := 2*s.Problem.Shape.Element.Order + 1
-	for i, edge := range chain {
+	join := func(p *place, here sample) {
+		p.samples = append(p.samples, here)
+		p.value = math.Max(p.value, here.value)
+	}
+	for i, edge := range c.edges {
 		for k := range per + 1 {
 			at := float64(k) / float64(per)
 			here := sample{edge, at, of(s.Surface(edge, at))}
-			if k == 0 && i > 0 {
-				joint := &places[len(places)-1]
-				joint.samples = append(joint.samples, here)
-				joint.value = math.Max(joint.value, here.value)
-				continue
+			switch {
+			case k == 0 && i > 0:
+				join(&places[len(places)-1], here)
+			case k == per && c.closed && i == len(c.edges)-1:
+				join(&places[0], here)
+			default:
+				places = append(places, place{[]sample{here}, here.value})
 			}
-			places = append(places, place{[]sample{here}, here.value})
 		}
 	}
 	return places, 1 / float64(per)
 }
 
-func (s *Solution) chainMaxima(chain []int, of Quantity) []SurfacePoint {
-	places, step := s.places(chain, of)
+func (s *Solution) chainMaxima(c chain, of Quantity) []SurfacePoint {
+	places, step := s.places(c, of)
+	n := len(places)
 	var found []SurfacePoint
 	for i, here := range places {
-		if i > 0 && here.value < places[i-1].value || i+1 < len(places) && here.value <= places[i+1].value {
+		if (i > 0 || c.closed) && here.value < places[(i+n-1)%n].value {
+			continue
+		}
+		if (i+1 < n || c.closed) && here.value <= places[(i+1)%n].value {
 			continue
 		}
 		best := s.refine(here.samples[0], step, of)
@@ -95,6 +142,10 @@ func (s *Solution) chainMaxima(chain []int, of Quantity) []SurfacePoint {
 			}
 		}
 		found = append(found, best)
+	}
+	if len(found) == 0 {
+		// The same value all around: any place will do.
+		found = append(found, s.Surface(c.edges[0], 0))
 	}
 	return found
 }
