@@ -82,6 +82,9 @@ func checkLoops(region *outline.Region) (r2.Box, error) {
 				return box, fmt.Errorf("side %q of loop %d has no length at (%g, %g)", s.Name, i, b.Min.X, b.Min.Y)
 			}
 			end, begin := s.Curve.At(1), loop[(j+1)%len(loop)].Curve.At(0)
+			if foldsBack(s.Curve, loop[(j+1)%len(loop)].Curve) {
+				return box, fmt.Errorf("loop %d folds back onto itself after side %q at (%g, %g)", i, s.Name, end.X, end.Y)
+			}
 			if !(dist(end, begin) <= gapAllowed*extent) {
 				return box, fmt.Errorf("loop %d is open after side %q: (%g, %g) to (%g, %g)", i, s.Name, end.X, end.Y, begin.X, begin.Y)
 			}

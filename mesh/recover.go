@@ -26,7 +26,11 @@ func (t *triangulation) recover(seg int32) (crossing, bool) {
 		return bad, false
 	}
 	var fresh []edgeName
-	for len(cross) > 0 {
+	limit := 1000 + len(cross)*len(cross)
+	for turn := 0; len(cross) > 0; turn++ {
+		if turn > limit { // every turn of the queue finds an edge to flip, so this cannot be
+			return crossing{seg, -1, s.a}, false
+		}
 		e := cross[0]
 		cross = cross[1:]
 		i, k := t.edge(e.a, e.b)

@@ -64,7 +64,8 @@ func refine(t *triangulation, b *boundary, field *sizeField) (*refiner, error) {
 			return nil, err
 		}
 		if len(t.tris) > maxTriangles {
-			return nil, fmt.Errorf("more than %d triangles: the sizes wished for are too small for this region", maxTriangles)
+			p := r.point(t.tris[e.tri].v[0])
+			return nil, fmt.Errorf("more than %d triangles, many near (%g, %g): sides there nearly touch, or the sizes wished for are too small", maxTriangles, p.X, p.Y)
 		}
 	}
 }

@@ -28,6 +28,12 @@ func sharpCorner(before, next outline.Curve) bool {
 	return angle > -1e-9 && angle < sharpAngle
 }
 
+// foldsBack tells whether two straight sides meet at no angle to speak of.
+func foldsBack(before, next outline.Curve) bool {
+	u, w := before.Deriv(1), next.Deriv(0)
+	return straight(before) && straight(next) && dot(u, w) < 0 && math.Abs(cross(u, w)) < 1e-9*norm(u)*norm(w)
+}
+
 // shellCuts gives the sides that meet in a sharp corner equal first pieces.
 func shellCuts(region *outline.Region, cuts [][]float64) {
 	first := 0

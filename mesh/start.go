@@ -18,7 +18,7 @@ func start(region *outline.Region, field *sizeField, size Sizing, box r2.Box) (*
 		return nil, nil, err
 	}
 	shellCuts(region, cuts)
-	for {
+	for extra := 0; ; {
 		b := cutSides(region, cuts, box)
 		t, coarse, err := triangulate(b)
 		if err != nil {
@@ -27,10 +27,11 @@ func start(region *outline.Region, field *sizeField, size Sizing, box r2.Box) (*
 		if len(coarse) == 0 {
 			return t, b, t.classify()
 		}
+		extra += len(coarse)
 		for _, s := range coarse {
 			seg := &b.segs[s]
 			tm := (seg.t0 + seg.t1) / 2
-			if dist(b.points[seg.a], b.points[seg.b]) < shortestPiece*b.extent {
+			if extra > maxExtraCuts || dist(b.points[seg.a], b.points[seg.b]) < shortestPiece*b.extent {
 				p := b.points[seg.a]
 				return nil, nil, fmt.Errorf("side %d (%q) touches or crosses another near (%g, %g)", seg.side, b.sides[seg.side].Name, p.X, p.Y)
 			}
@@ -40,6 +41,11 @@ func start(region *outline.Region, field *sizeField, size Sizing, box r2.Box) (*
 		}
 	}
 }
+
+// maxExtraCuts is the number of cuts made for curves that nearly touch: enough for
+// a ring as thin as a ten-millionth of its radius, and soon reached by curves
+// that lie upon each other.
+const maxExtraCuts = 1 << 14
 
 // shortestPiece is the length, in extents of the region, below which a boundary
 // piece is not cut any more: a thousandth of it is still well above the rounding
