@@ -5,13 +5,15 @@ import "slices"
 // analysis turns the dissection's tree into fronts. Until unknowns are
 // numbered, everything is in terms of groups.
 type analysis struct {
-	groups *groups
-	plan   *Plan
-	pivots [][]int32 // groups eliminated at each front
-	border [][]int32 // groups of each front's border
-	stamp  []int32
-	first  []int32 // elimination number of each group's first unknown
-	place  []int32 // place of each group in the front at hand
+	groups  *groups
+	plan    *Plan
+	pivots  [][]int32 // groups eliminated at each front
+	border  [][]int32 // groups of each front's border
+	stamp   []int32
+	scratch []int32
+	runs    []run
+	first   []int32 // elimination number of each group's first unknown
+	place   []int32 // place of each group in the front at hand
 }
 
 // gather makes the fronts, bottom up: the border of a front is what its
@@ -42,25 +44,27 @@ func (a *analysis) add(f front, pivots []int32) int32 {
 	for _, g := range pivots {
 		a.stamp[g] = i
 	}
-	var border []int32
-	touch := func(list []int32) {
-		for _, g := range list {
-			if a.stamp[g] != i {
-				a.stamp[g] = i
-				border = append(border, g)
-			}
-		}
-	}
+	a.scratch = a.scratch[:0]
 	for _, e := range f.elements {
-		touch(a.groups.ofElement(e))
+		a.touch(a.groups.ofElement(e), i)
 	}
 	for _, c := range f.children {
 		a.plan.fronts[c].parent = i
-		touch(a.border[c])
+		a.touch(a.border[c], i)
 	}
 	a.plan.fronts = append(a.plan.fronts, f)
-	a.pivots, a.border = append(a.pivots, pivots), append(a.border, border)
+	a.pivots, a.border = append(a.pivots, pivots), append(a.border, slices.Clone(a.scratch))
 	return i
+}
+
+// touch collects the groups that do not bear stamp i yet.
+func (a *analysis) touch(list []int32, i int32) {
+	for _, g := range list {
+		if a.stamp[g] != i {
+			a.stamp[g] = i
+			a.scratch = append(a.scratch, g)
+		}
+	}
 }
 
 // numberUnknowns gives out the elimination numbers, front by front.
@@ -89,8 +93,7 @@ func (a *analysis) numberUnknowns() {
 func (a *analysis) connect() {
 	p := a.plan
 	a.place = make([]int32, a.groups.count())
-	p.runStart = make([]int32, p.pattern.Elements()+1)
-	elementRuns := make([][]run, p.pattern.Elements())
+	p.runs = make([][]run, p.pattern.Elements())
 	for i := range a.stamp {
 		a.stamp[i] = -1
 	}
@@ -111,12 +114,8 @@ func (a *analysis) connect() {
 			a.connectChild(f, a.pivots[i], a.border[i], c)
 		}
 		for _, e := range f.elements {
-			elementRuns[e] = a.elementRuns(e, at)
+			p.runs[e] = a.elementRuns(e, at)
 		}
-	}
-	for e, r := range elementRuns {
-		p.runs = append(p.runs, r...)
-		p.runStart[e+1] = int32(len(p.runs))
 	}
 }
 
@@ -136,38 +135,41 @@ func (a *analysis) connectChild(f *front, pivots, border []int32, c int32) {
 	}
 	child := &a.plan.fronts[c]
 	sorted := a.border[c][:0]
+	a.runs = a.runs[:0]
 	from := int32(0)
 	for _, list := range [2][]int32{pivots, border} {
 		for _, g := range list {
 			if a.stamp[g] == c {
 				sorted = append(sorted, g)
-				child.toward = extend(child.toward, from, a.place[g], a.groups.size(g), int32(f.pivots))
+				a.extend(from, a.place[g], a.groups.size(g), int32(f.pivots))
 				from += a.groups.size(g)
 			}
 		}
 	}
+	child.toward = slices.Clone(a.runs)
 }
 
 // elementRuns maps the list of element e onto its leaf's front.
-func (a *analysis) elementRuns(e, pivots int32) (runs []run) {
+func (a *analysis) elementRuns(e, pivots int32) []run {
+	a.runs = a.runs[:0]
 	for from, u := range a.plan.pattern.list(e) {
 		if u >= 0 {
 			to := a.place[a.groups.of[u]] + a.groups.rank[u]
-			runs = extend(runs, int32(from), to, 1, pivots)
+			a.extend(int32(from), to, 1, pivots)
 		}
 	}
-	return runs
+	return slices.Clone(a.runs)
 }
 
-// extend adds a stretch to a list of runs, as a part of the last one where it
-// continues that and does not cross from the pivots into the border.
-func extend(runs []run, from, to, length, pivots int32) []run {
-	if n := len(runs); n > 0 {
-		r := &runs[n-1]
+// extend adds a stretch to the list of runs, as a part of the last one where
+// it continues that and does not cross from the pivots into the border.
+func (a *analysis) extend(from, to, length, pivots int32) {
+	if n := len(a.runs); n > 0 {
+		r := &a.runs[n-1]
 		if r.from+r.length == from && r.to+r.length == to && to != pivots {
 			r.length += length
-			return runs
+			return
 		}
 	}
-	return append(runs, run{from, to, length})
+	a.runs = append(a.runs, run{from, to, length})
 }

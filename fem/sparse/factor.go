@@ -27,9 +27,12 @@ func (f *Factor) Pivots() Pivots { return f.pivots }
 
 // Factor assembles and factorises a matrix. It uses up to the given number of
 // goroutines, GOMAXPROCS if that is 0; the bits of the result do not depend on
-// it. The error is a *PivotError when the matrix is not positive definite to
+// it. Without a workspace it makes one. The error is a *PivotError when the matrix is not positive definite to
 // working precision, or the context's when that ends first.
 func (p *Plan) Factor(ctx context.Context, fill Fill, w *Workspace, workers int) (*Factor, error) {
+	if w == nil {
+		w = new(Workspace)
+	}
 	workers = crewSize(workers)
 	n := &numeric{plan: p, ctx: ctx, fill: fill, workspace: w}
 	if err := n.run(workers); err != nil {
@@ -77,7 +80,7 @@ func (n *numeric) front(worker int, i int32, share sharing) {
 	for _, e := range f.elements {
 		size := len(p.pattern.list(e))
 		n.fill(worker, int(e), h.matrix[:size*size])
-		a.addElement(h.matrix, size, p.runs[p.runStart[e]:p.runStart[e+1]])
+		a.addElement(h.matrix, size, p.runs[e])
 	}
 	for _, c := range f.children {
 		child := &p.fronts[c]

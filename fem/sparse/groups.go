@@ -15,11 +15,10 @@ type groups struct {
 	elements  []int32 // number of elements of each group
 }
 
-func (g *groups) size(i int32) int32           { return g.start[i+1] - g.start[i] }
-func (g *groups) ofElement(e int32) []int32    { return g.elem[g.elemStart[e]:g.elemStart[e+1]] }
-func (g *groups) unknowns(i int32) []int32     { return g.members[g.start[i]:g.start[i+1]] }
-func (g *groups) count() int                   { return len(g.start) - 1 }
-func (g *groups) crossesElements(i int32) bool { return g.elements[i] > 1 }
+func (g *groups) size(i int32) int32        { return g.start[i+1] - g.start[i] }
+func (g *groups) ofElement(e int32) []int32 { return g.elem[g.elemStart[e]:g.elemStart[e+1]] }
+func (g *groups) unknowns(i int32) []int32  { return g.members[g.start[i]:g.start[i+1]] }
+func (g *groups) count() int                { return len(g.start) - 1 }
 
 // groupUnknowns finds the groups of a valid pattern.
 func groupUnknowns(p *Pattern) *groups {

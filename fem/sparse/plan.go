@@ -36,8 +36,7 @@ type Plan struct {
 	order    []int32 // unknown of each elimination number
 	number   []int32 // elimination number of each unknown
 
-	runs      []run   // of element e: runs[runStart[e]:runStart[e+1]],
-	runStart  []int32 // from its list to its leaf's front
+	runs      [][]run // of each element, from its list to its leaf's front
 	largest   int     // rows of the largest front
 	listed    int     // length of the longest element list
 	factorLen int

@@ -119,7 +119,7 @@ func (f *Factor) eachElement(fill Fill, do func(e int, matrix []float64)) {
 			if e >= elements {
 				return
 			}
-			if p.runStart[e] == p.runStart[e+1] { // nothing but prescribed unknowns
+			if len(p.runs[e]) == 0 { // nothing but prescribed unknowns
 				continue
 			}
 			n := len(p.pattern.list(int32(e)))

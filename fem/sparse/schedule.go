@@ -21,11 +21,15 @@ const subtreesPerWorker = 8
 // takes about 0.2 ms, against some microseconds for waking a goroutine.
 const sharedFlops = 2e6
 
+// aloneFlops is the work up to which a second goroutine does not pay.
+const aloneFlops = 1e6
+
 // run works through all fronts.
 func (n *numeric) run(workers int) error {
-	if workers == 1 || len(n.plan.fronts) == 0 {
+	root := len(n.plan.fronts) - 1
+	if workers == 1 || root < 0 || n.plan.fronts[root].work < aloneFlops {
 		n.workspace.prepare(n.plan, 1, 0)
-		return n.subtree(0, 0, len(n.plan.fronts))
+		return n.subtree(0, 0, root+1)
 	}
 	c := newCrew(n, workers)
 	n.workspace.prepare(n.plan, workers, c.cut())
