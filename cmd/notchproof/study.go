@@ -23,7 +23,9 @@ of arc on the notch, unknowns, factor, change, observed order, then the limit.
 By size the elements keep their order (2 unless --order says otherwise) and the
 every element is split into four from rung to rung; the limit is Richardson's, its bar the grid
 convergence index of Roache (1994) by the procedure of Celik et al. (2008).
-By order the mesh stays and the order climbs from 1 to 8.
+By order the mesh stays and the order climbs from 1 to 8. The last column is the
+traction that the solution leaves on the free surface at the peak, where there
+is none in truth, at unit nominal stress.
 
   notchproof study bar-shoulder D=60mm d=40mm r=4mm --load tension --by size -o study.png
 `,
@@ -124,17 +126,17 @@ func writeStudy(w io.Writer, s *verify.Study, st style) error {
 	var b strings.Builder
 	fmt.Fprintf(&b, "%s  %s\n%s, nominal stress %s (%s)\n\n", st.bold(s.Part.Name), dimensionText(s.Part),
 		st.bold(string(s.Load.Name)), s.Load.Nominal.Formula, s.Load.Nominal.Section)
-	fmt.Fprintf(&b, "%5s %10s %8s %9s %12s %12s %9s\n", "order", "triangles", "per 90°", "unknowns", "factor", "change", "observed")
+	fmt.Fprintf(&b, "%5s %10s %8s %9s %12s %11s %9s %9s\n", "order", "triangles", "per 90°", "unknowns", "factor", "change", "observed", "traction")
 	for _, r := range s.Rows {
-		fmt.Fprintf(&b, "%5d %10d %8.1f %9d %12.7f %12s %9s\n", r.Order, r.Triangles, r.PerQuarter, r.Unknowns, r.Factor,
-			orNothing("%+.2e", r.Change), orNothing("%.2f", r.ObservedOrder))
+		fmt.Fprintf(&b, "%5d %10d %8.1f %9d %12.7f %11s %9s %9.1e\n", r.Order, r.Triangles, r.PerQuarter, r.Unknowns, r.Factor,
+			orNothing("%+.2e", r.Change), orNothing("%.2f", r.ObservedOrder), r.Leftover)
 	}
 	e := s.Estimate
 	switch {
 	case !e.Status.Settled():
 		fmt.Fprintf(&b, "\n%s\n", st.weak("no limit: "+e.Status.String()))
 	case s.Sizes != nil:
-		fmt.Fprintf(&b, "\nobserved order %.2f (%s); extrapolated limit %.6f\ngrid convergence index of the finest mesh %s, so that its factor is %s\n",
+		fmt.Fprintf(&b, "\nobserved order %.2f (%s); extrapolated limit %.6f\ngrid convergence index of the finest mesh %s, with the traction left on its surface its factor is %s\n",
 			s.Sizes.Order, e.Status, s.Sizes.Limit, number.Percent(s.Sizes.GCI, 3), number.Uncertain(e.Value, e.Uncertainty))
 	default:
 		fmt.Fprintf(&b, "\none order more leaves about %.2f of the error (%s); the factor is %s\n", e.Order, e.Status, number.Uncertain(e.Value, e.Uncertainty))
