@@ -22,3 +22,8 @@ func widen(b r2.Box, p r2.Vec) r2.Box {
 
 // extentOf is the longer side of a box.
 func extentOf(b r2.Box) float64 { return max(b.Max.X-b.Min.X, b.Max.Y-b.Min.Y) }
+
+// farthest is the largest coordinate of a box, without its sign.
+func farthest(b r2.Box) float64 {
+	return max(math.Abs(b.Min.X), math.Abs(b.Min.Y), math.Abs(b.Max.X), math.Abs(b.Max.Y))
+}

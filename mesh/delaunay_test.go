@@ -163,3 +163,23 @@ func TestCountGrowsLogarithmically(t *testing.T) {
 		t.Errorf("%g, %g, %g and %g triangles for radii of 1e-1, 1e-2, 1e-4 and 1e-8", n1, n2, n4, n8)
 	}
 }
+
+// Units and place of a drawing do not matter. Powers of two and whole numbers keep
+// the coordinates exact.
+func TestScaleAndPlace(t *testing.T) {
+	base := check(t, "base", &outline.Region{Outer: polygon(pt(0, 0), pt(4, 0), pt(4, 3), pt(1, 3), pt(1, 1), pt(0, 1))}, Sizing{Largest: 0.5}, 25)
+	for _, s := range []float64{0x1p-100, 0x1p-20, 0x1p100} {
+		scaled := &outline.Region{Outer: polygon(pt(0, 0), pt(4*s, 0), pt(4*s, 3*s), pt(s, 3*s), pt(s, s), pt(0, s))}
+		m := check(t, "scaled", scaled, Sizing{Largest: 0.5 * s}, 25)
+		if !reflect.DeepEqual(m.Triangles, base.Triangles) {
+			t.Errorf("scaled by %g: other triangles", s)
+		}
+	}
+	for _, d := range []float64{1e3, 1e6} {
+		far := &outline.Region{Outer: polygon(pt(d, -d), pt(d+4, -d), pt(d+4, 3-d), pt(d+1, 3-d), pt(d+1, 1-d), pt(d, 1-d))}
+		check(t, "far", far, Sizing{Largest: 0.5}, 25)
+		hole := holed(1, 1)
+		hole.Outer = outline.Loop{arc(pt(d, d), 1, 0, 2*math.Pi)}
+		check(t, "far disc", hole, Sizing{Spots: []SpotWish{{At: pt(d, d), Size: 1e-3}}}, 25)
+	}
+}

@@ -82,6 +82,8 @@ func TestMistakes(t *testing.T) {
 		{"hole in hole", outline.Region{Outer: square, Holes: []outline.Loop{hole, polygon(pt(0.25, 0.25), pt(0.25, 0.35), pt(0.35, 0.35))}}},
 		{"hole twice", outline.Region{Outer: square, Holes: []outline.Loop{hole, hole}}},
 		{"bow tie", outline.Region{Outer: polygon(pt(0, 0), pt(1, 1), pt(1, 0), pt(0, 1))}},
+		{"unequal bow tie", outline.Region{Outer: polygon(pt(0, 0), pt(1, 1), pt(1, 0), pt(0, 0.5))}},
+		{"far away", outline.Region{Outer: polygon(pt(1e9, 0), pt(1e9+1, 0), pt(1e9+1, 1))}},
 		{"touching itself", outline.Region{Outer: polygon(pt(0, 0), pt(2, 0), pt(2, 2), pt(1, 0), pt(0, 2))}},
 		{"vertex twice", outline.Region{Outer: polygon(pt(0, 0), pt(2, 0), pt(2, 2), pt(1, 1), pt(0, 2), pt(0, 1), pt(1, 1), pt(0, 0.5))}},
 		{"flat", outline.Region{Outer: polygon(pt(0, 0), pt(1, 0), pt(2, 0))}},

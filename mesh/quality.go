@@ -24,12 +24,11 @@ func (m *Mesh) Quality() Quality {
 	for _, v := range m.Triangles {
 		for k := range 3 {
 			p, a, b := m.Points[v[k]], m.Points[v[(k+1)%3]], m.Points[v[(k+2)%3]]
-			if angle := cornerAngle(p, a, b); angle < q.SmallestAngle {
+			angle := cornerAngle(p, a, b)
+			if angle < q.SmallestAngle {
 				q.SmallestAngle, q.At = angle, p
-				q.LargestAngle = max(q.LargestAngle, angle)
-			} else {
-				q.LargestAngle = max(q.LargestAngle, angle)
 			}
+			q.LargestAngle = max(q.LargestAngle, angle)
 			l := dist(a, b)
 			q.Shortest, q.Longest = min(q.Shortest, l), max(q.Longest, l)
 		}

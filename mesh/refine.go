@@ -44,7 +44,7 @@ const (
 
 // refine does all that.
 func refine(t *triangulation, b *boundary, field *sizeField) (*refiner, error) {
-	r := &refiner{triangulation: t, outline: b, field: field, shortest2: float64(shortestPiece*b.extent) * float64(shortestPiece*b.extent)}
+	r := &refiner{triangulation: t, outline: b, field: field, shortest2: float64(b.least * b.least)}
 	r.free = int32(len(t.points))
 	r.bound = make([]bool, len(t.points))
 	r.queue = newQueue(r.shortest2, b.extent*b.extent)

@@ -31,7 +31,7 @@ func start(region *outline.Region, field *sizeField, size Sizing, box r2.Box) (*
 		for _, s := range coarse {
 			seg := &b.segs[s]
 			tm := (seg.t0 + seg.t1) / 2
-			if extra > maxExtraCuts || dist(b.points[seg.a], b.points[seg.b]) < shortestPiece*b.extent {
+			if extra > maxExtraCuts || dist(b.points[seg.a], b.points[seg.b]) < b.least {
 				p := b.points[seg.a]
 				return nil, nil, fmt.Errorf("side %d (%q) touches or crosses another near (%g, %g)", seg.side, b.sides[seg.side].Name, p.X, p.Y)
 			}
@@ -46,11 +46,6 @@ func start(region *outline.Region, field *sizeField, size Sizing, box r2.Box) (*
 // a ring as thin as a ten-millionth of its radius, and soon reached by curves
 // that lie upon each other.
 const maxExtraCuts = 1 << 14
-
-// shortestPiece is the length, in extents of the region, below which a boundary
-// piece is not cut any more: a thousandth of it is still well above the rounding
-// errors of points on curves.
-const shortestPiece = 1e-11
 
 // triangulate makes the constrained Delaunay triangulation of the boundary, or
 // lists the segments that are too coarse for that.
