@@ -76,15 +76,8 @@ func (c *climb) finding(ctx context.Context) (Finding, error) {
 		return Finding{}, err
 	}
 	computed.Gross = computed.Factor.Value * c.load.Nominal.Net / c.load.Nominal.Gross
-	for i, at := range computed.peaks {
-		found := peak(c.load, computed.Last, at)
-		if i == 0 {
-			computed.Peak = found
-		} else {
-			computed.Others = append(computed.Others, found)
-		}
-	}
 	f := Finding{Load: c.load, Computed: computed}
+	f.places(c.part)
 	f.Checks = c.checks(s, &computed)
 	f.judge(c.part, c.options)
 	return f, nil

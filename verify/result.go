@@ -23,6 +23,7 @@ type Finding struct {
 	// value in range with the best accuracy.
 	Verdict     Verdict
 	Because     []string // what the verdict rests on, and what is missing
+	Warnings    []string // what the factor does not tell, such as a place off the notch that is stressed higher
 	Misreadings []Misreading
 }
 
@@ -32,7 +33,7 @@ type Computed struct {
 	VonMises Estimate // von Mises stress ÷ nominal (in torsion ÷ √3 nominal shear)
 	Gross    float64  // the factor on the gross section
 	Peak     Peak     // where the factor sits
-	Others   []Peak   // other local maxima, largest first
+	Others   []Peak   // other local maxima on the notch that compete, largest first, then higher ones off it
 	Ladder   []Rung
 	Last     *fem.Solution // of the last rung
 

@@ -97,14 +97,3 @@ func quantity(l *specimen.Load) fem.Quantity {
 	}
 	return fem.SurfacePoint.FirstPrincipal
 }
-
-// peak describes a maximum in the part's terms.
-func peak(l *specimen.Load, s *fem.Solution, at fem.SurfacePoint) Peak {
-	m := s.Problem.Shape.Mesh
-	return Peak{
-		X: at.At.X, Y: at.At.Y,
-		ArcDegrees: math.Atan2(math.Abs(at.Normal.X), math.Abs(at.Normal.Y)) * 180 / math.Pi,
-		Factor:     quantity(l)(at),
-		Side:       m.Region.Sides()[m.Boundary[at.Edge].Side].Name,
-	}
-}

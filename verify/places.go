@@ -1,0 +1,90 @@
+package verify
+
+import (
+	"fmt"
+	"math"
+
+	"gonum.org/v1/gonum/spatial/r2"
+
+	"notchproof/fem"
+	"notchproof/verify/specimen"
+)
+
+// competing is the share of the factor above which another local maximum on
+// the notch is worth a word.
+const competing = 0.5
+
+// places fills in where the factor sits, which other places compete with it,
+// and what is stressed higher off the notch. The factor is the notch's all the
+// same: another place has a nominal stress and a remedy of its own.
+func (f *Finding) places(p *specimen.Part) {
+	c := &f.Computed
+	for i, at := range c.peaks {
+		found := peak(f.Load, c.Last, at)
+		if i == 0 {
+			c.Peak = found
+		} else if found.Factor >= competing*c.Peak.Factor {
+			c.Others = append(c.Others, found)
+		}
+	}
+	for _, side := range p.Watch {
+		at, ok := highest(p, f.Load, c.Last, side)
+		if !ok || quantity(f.Load)(at) <= c.Factor.Value+c.Factor.Uncertainty {
+			continue
+		}
+		found := peak(f.Load, c.Last, at)
+		c.Others = append(c.Others, found)
+		f.Warnings = append(f.Warnings, fmt.Sprintf("the %s is stressed higher than the notch: %.4g times the nominal stress against %.4g",
+			found.Side, found.Factor, c.Factor.Value))
+	}
+}
+
+// highest is the most stressed place on a side off the notch. Where the side
+// meets the notch the stress is the notch's.
+func highest(p *specimen.Part, l *specimen.Load, s *fem.Solution, side int) (fem.SurfacePoint, bool) {
+	for _, at := range s.Maxima([]int{side}, quantity(l)) {
+		if !atJoint(p, at.At) {
+			return at, true
+		}
+	}
+	return fem.SurfacePoint{}, false
+}
+
+func atJoint(p *specimen.Part, at r2.Vec) bool {
+	for _, j := range p.Joints {
+		if r2.Norm(r2.Sub(at, j.At)) <= 1e-3*j.Radius {
+			return true
+		}
+	}
+	return false
+}
+
+// peak describes a maximum in the part's terms. Its coordinates are rounded to
+// what the search for it resolves.
+func peak(l *specimen.Load, s *fem.Solution, at fem.SurfacePoint) Peak {
+	m := s.Problem.Shape.Mesh
+	e := m.Boundary[at.Edge]
+	corners := m.Triangles[e.Triangle]
+	edge := r2.Norm(r2.Sub(m.Points[corners[(e.Opposite+1)%3]], m.Points[corners[(e.Opposite+2)%3]]))
+	return Peak{
+		X: rounded(at.At.X, resolution*edge), Y: rounded(at.At.Y, resolution*edge),
+		ArcDegrees: math.Atan2(math.Abs(at.Normal.X), math.Abs(at.Normal.Y)) * 180 / math.Pi,
+		Factor:     quantity(l)(at),
+		Side:       m.Region.Sides()[e.Side].Name,
+	}
+}
+
+// resolution of the place of a maximum, as a share of the edge it lies on. A
+// maximum is flat: the place is known far less well than the value.
+const resolution = 1e-5
+
+// rounded brings a coordinate to a decimal step no larger than the given one.
+func rounded(v, step float64) float64 {
+	digits := math.Ceil(-math.Log10(step))
+	if digits >= 0 {
+		scale := math.Pow(10, digits)
+		return math.Round(v*scale) / scale
+	}
+	scale := math.Pow(10, -digits)
+	return math.Round(v/scale) * scale
+}
