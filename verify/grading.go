@@ -20,14 +20,24 @@ type grading struct {
 // sizing turns a grading into wishes for the mesher.
 func (g grading) sizing(p *specimen.Part) mesh.Sizing {
 	s := mesh.Sizing{Growth: g.growth}
+	sides := p.Region.Sides()
 	for _, side := range p.Notch {
-		s.Sides = append(s.Sides, mesh.SideWish{Side: side, PerQuarter: g.perQuarter})
+		s.Sides = append(s.Sides, mesh.SideWish{
+			Side: side, PerQuarter: g.perQuarter,
+			// An arc that is cut off may turn by a few degrees only; it is not
+			// left to one element for that.
+			Size: sides[side].Curve.Length(0, 1) * leastPieces / g.perQuarter,
+		})
 	}
 	for _, j := range p.Joints {
 		s.Spots = append(s.Spots, mesh.SpotWish{At: j.At, Size: g.joint * j.Radius * quarter / g.perQuarter})
 	}
 	return s
 }
+
+// leastPieces: a notch side gets at least half as many elements as a quarter
+// turn would, however little it turns.
+const leastPieces = 2
 
 const quarter = 1.5707963267948966 // 90° in radians
 

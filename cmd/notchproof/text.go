@@ -100,6 +100,9 @@ func othersText(b *strings.Builder, c *verify.Computed, unit string) {
 func comparisonText(c verify.Comparison, s style) string {
 	text := fmt.Sprintf("%-6s %8s  ", number.Compact(c.Factor, 4), number.SignedPercent(c.Difference, 1))
 	switch {
+	case c.Verdict == verify.OutOfRange && c.Factor < 1:
+		// A polynomial far outside its range; the digits say nothing.
+		return fmt.Sprintf("%-6s %8s  ", "–", "") + s.weak("out of range")
 	case c.Unsafe():
 		return text + s.bad("disagrees, too low: unsafe")
 	case c.Verdict == verify.Disagrees:
