@@ -18,8 +18,12 @@ type Rule struct {
 }
 
 // Triangle returns a rule that is exact to a degree between 0 and MaxDegree:
-// the fully symmetric rule of the fewest points known to this package, or above
-// their degrees a product rule. The caller owns it.
+// to degree 20 a fully symmetric rule of few points,
+//
+//	degree   1  2  4  5  6  7  8  9 10 11 12 13 14 15 16 17 18 19 20
+//	points   1  3  6  7 12 15 16 19 25 28 33 37 42 49 55 60 67 73 82
+//
+// and above it a product rule of (degree/2 + 1)² points. The caller owns it.
 func Triangle(degree int) Rule {
 	if degree < 0 || degree > MaxDegree {
 		panic("cubature: degree out of range")
