@@ -71,6 +71,12 @@ func (q *questions) job(args []string) (*job, error) {
 		}
 		return demonstration(q)
 	}
+	if isFile(args[0]) {
+		if len(args) > 1 {
+			return nil, &inputError{text: quoted(args[1]) + ": a part file takes no dimensions", hint: "write them into the file, or name a family instead"}
+		}
+		return fileJob(args[0], q)
+	}
 	o, err := q.options()
 	if err != nil {
 		return nil, err

@@ -22,9 +22,12 @@ type questions struct {
 	claim          string
 	claimFrom      string
 	claimTolerance string
+
+	flags *pflag.FlagSet // those of the part, to tell what was given
 }
 
 func (q *questions) partFlags(f *pflag.FlagSet) {
+	q.flags = f
 	f.StringVar(&q.nu, "nu", "0.3", "Poisson's ratio")
 	f.StringVar(&q.forceLine, "force-line", scf.ForceLineNet, "where the force of a one-sided notch in tension passes: net or gross")
 }

@@ -40,6 +40,11 @@ type Part struct {
 	ForceLine float64
 	// Opposite tells that a bar's bending moment puts y < 0 in tension, not y > 0.
 	Opposite bool
+	// Section is where the nominal stress of an outline is taken; nil for families.
+	Section *Section
+	// Sharp are the concave corners of an outline that have no radius and
+	// therefore no factor.
+	Sharp []outline.Corner
 	// Plain are the stretches of constant section at both ends, one at either.
 	Plain []Plain
 	// Net is the x of the cut on which the balance of forces is checked.
