@@ -6,9 +6,10 @@ import "context"
 // element's list, n² numbers for a list of n. Only the lower triangle is read
 // (columns up to the row's own), without the rows and columns of prescribed
 // unknowns. The memory comes with old contents. Elements that have prescribed
-// unknowns only are left out. Fill is called from several
-// goroutines at once; those with the same worker number, which is below the
-// number of workers, follow one another.
+// unknowns only are left out.
+//
+// Fill is called from several goroutines at once. Calls with the same worker
+// number, which is below the number of workers, follow one another.
 type Fill func(worker, element int, matrix []float64)
 
 // A Factor is a factorised matrix. It lives in its workspace and ends with the
@@ -27,8 +28,9 @@ func (f *Factor) Pivots() Pivots { return f.pivots }
 
 // Factor assembles and factorises a matrix. It uses up to the given number of
 // goroutines, GOMAXPROCS if that is 0; the bits of the result do not depend on
-// it. Without a workspace it makes one. The error is a *PivotError when the matrix is not positive definite to
-// working precision, or the context's when that ends first.
+// it. A nil workspace stands for a new one. The error is a *PivotError when
+// the matrix is not positive definite to working precision, or the context's
+// when that ends first.
 func (p *Plan) Factor(ctx context.Context, fill Fill, w *Workspace, workers int) (*Factor, error) {
 	if w == nil {
 		w = new(Workspace)
@@ -58,7 +60,7 @@ type numeric struct {
 	ctx       context.Context
 	fill      Fill
 	workspace *Workspace
-	shared    []int // where a front's Schur complement begins in workspace.shared, −1 for the stack
+	shared    []int // where each front's Schur complement begins in workspace.shared, −1 if in a stack
 }
 
 // front works on front i: gathers it, eliminates its pivots, and leaves its

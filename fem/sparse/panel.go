@@ -102,6 +102,7 @@ func (p *panel) complete(schur []float64, rows int, share sharing) {
 	share(rows, func(i int) { p.completeRow(schur, rows-1-i) }) // long rows first
 }
 
+// completeRow is complete for one tile row.
 func (p *panel) completeRow(schur []float64, i int) {
 	k := p.columns()
 	a := p.row(k + i)

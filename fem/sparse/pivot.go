@@ -53,7 +53,7 @@ func (e *PivotError) Error() string {
 // Stability of Numerical Algorithms, 2nd ed. 2002, theorem 10.3), and n·ε is
 // where pivoted Cholesky codes stop (Hammarling, Higham & Lucas, "LAPACK-style
 // codes for pivoted Cholesky and QR updating", 2007). In floating bodies of up
-// to 80 000 unknowns the last pivots were seen below 120·ε.
+// to 80 000 unknowns the last pivots were seen below 130·ε.
 func pivotLimit(n int) float64 {
 	const epsilon = 0x1p-52
 	return epsilon * float64(max(n, 64))

@@ -1,7 +1,7 @@
 package sparse
 
 // A Workspace keeps the memory of factorisations for the next one: at the
-// usual sizes the first touch of fresh memory costs as much as the arithmetic.
+// usual sizes the first touch of fresh memory takes a tenth of the time.
 // The zero value is ready. A workspace serves one factorisation at a time, and
 // any plans one after the other; a Factor is good until its workspace is used
 // for the next.
