@@ -6,35 +6,40 @@ import (
 	"gonum.org/v1/gonum/spatial/r2"
 
 	"notchproof/scf"
+	"notchproof/verify/specimen"
 )
 
-// load draws the load's symbol beside both broken ends on the axis of the
-// part: an arrow for a force, a bent one for a moment, a double-headed one for
-// a torque (the vector of the right-hand rule).
-func (s *sheet) load(v *view, load scf.Load, left, right float64) {
+// load draws the load's symbol beside both broken ends, on the line along which
+// it acts: an arrow for a force, a bent one for a moment, a double-headed one
+// for a torque (the vector of the right-hand rule).
+func (s *sheet) load(v *view, part *specimen.Part, load scf.Load, left, right float64) {
+	line := 0.0
+	if load == scf.Tension {
+		line = part.ForceLine
+	}
 	for _, end := range [2]struct{ x, sign float64 }{{left, -1}, {right, 1}} {
-		at := v.at(r2.Vec{X: end.x})
-		root := at.plus(end.sign*s.u(2+breakSwing), 0)
+		root := v.at(r2.Vec{X: end.x, Y: line}).plus(end.sign*s.u(2+breakSwing), 0)
 		out := point{end.sign, 0}
+		letter := root.toward(out, s.u(loadLength/2))
 		s.pen(accent, wide)
 		switch load {
 		case scf.Tension:
 			s.force(root, out, 1)
-			s.symbolOf("P", root.toward(out, s.u(loadLength/2)).plus(0, -s.u(10)))
+			s.loadLetter("P", letter.plus(0, -s.u(10)))
 		case scf.Torsion:
 			s.force(root, out, 2)
-			s.symbolOf("T", root.toward(out, s.u(loadLength/2)).plus(0, -s.u(10)))
+			s.loadLetter("T", letter.plus(0, -s.u(10)))
 		case scf.Bending:
-			s.moment(root.toward(out, s.u(4)), end.sign)
-			s.symbolOf("M", root.toward(out, s.u(loadLength/2)).plus(0, -s.u(28)))
+			s.moment(root.toward(out, s.u(4)), end.sign, part.Opposite)
+			s.loadLetter("M", letter.plus(0, -s.u(28)))
 		}
 	}
 }
 
 const loadLength = 44
 
-// symbolOf letters a load's letter above its arrow, where there is room.
-func (s *sheet) symbolOf(letter string, p point) {
+// loadLetter letters a load's letter above its arrow, where there is room.
+func (s *sheet) loadLetter(letter string, p point) {
 	if s.free(s.place(p, 0.5, 1, letter, small)) {
 		s.text(p, 0.5, 1, letter, small, accent)
 	}
@@ -49,15 +54,19 @@ func (s *sheet) force(root, out point, heads int) {
 	}
 }
 
-// moment draws the arrow of a moment that stretches the upper side: clockwise
-// at the right end, the other way round at the left one. Both turn from the top
-// outwards and down.
-func (s *sheet) moment(center point, sign float64) {
+// moment draws the arrow of a moment. The one that stretches the upper side
+// turns clockwise at the right end and the other way round at the left one: at
+// both from the top outwards and down. The opposite moment turns up.
+func (s *sheet) moment(center point, sign float64, opposite bool) {
 	radius := s.u(26)
-	const from, to, pieces = -70.0, 70.0, 24 // degrees below the axis
+	const from, to, pieces = -70.0, 70.0, 24 // degrees below the horizontal
+	turn := 1.0
+	if opposite {
+		turn = -1
+	}
 	at := func(degrees float64) point {
 		sin, cos := math.Sincos(degrees * math.Pi / 180)
-		return center.plus(sign*radius*cos, radius*sin)
+		return center.plus(sign*radius*cos, turn*radius*sin)
 	}
 	ps := make([]point, pieces+1)
 	for i := range ps {
@@ -66,5 +75,5 @@ func (s *sheet) moment(center point, sign float64) {
 	s.polyline(ps)
 	s.dc.Stroke()
 	sin, cos := math.Sincos((to - 8) * math.Pi / 180)
-	s.arrow(at(to), point{-sign * sin, cos}, accent)
+	s.arrow(at(to), point{-sign * sin, turn * cos}, accent)
 }

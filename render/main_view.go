@@ -89,29 +89,44 @@ func waves(x, from, to, scale float64) []point {
 	return ps
 }
 
-// breaks strokes the break lines where there is material: the material's
-// silhouette inside a window a little wider than the view's own, outside of it
-// nothing.
-func (s *sheet) breaks(v *view, part *specimen.Part, left, right float64) {
-	high := func(x float64) (low, top float64) {
-		for _, p := range part.Plain {
-			if (p.To < p.From) == (x == left) {
-				low, top = p.Low, p.High
-			}
+// endRange is the range of y of the whole part's material in its plain end to
+// the left or to the right.
+func endRange(part *specimen.Part, left bool) (low, high float64) {
+	for _, p := range part.Plain {
+		if (p.To < p.From) == left {
+			low, high = p.Low, p.High
 		}
-		if part.Half {
-			low = -top
-		}
-		return low, top
 	}
-	b := v.bounds()
+	if part.Half {
+		low = -high
+	}
+	return low, high
+}
+
+// breaks strokes the break lines where there is material: on both sides of a
+// bore.
+func (s *sheet) breaks(v *view, part *specimen.Part, left, right float64) {
 	s.pen(ink, narrow)
-	for _, x := range [2]float64{left, right} {
-		low, top := high(x)
-		y0, y1 := v.at(r2.Vec{X: x, Y: top}).Y, v.at(r2.Vec{X: x, Y: low}).Y
-		for _, piece := range clipLine(waves(v.at(r2.Vec{X: x}).X, b.Y0, b.Y1, s.scale), box{b.X0 - 1, y0, b.X1 + 1, y1}) {
-			s.polyline(piece)
+	for _, p := range part.Plain {
+		x := right
+		if p.To < p.From {
+			x = left
 		}
+		if part.Half && p.Low > 0 {
+			s.breakLine(v, x, p.Low, p.High)
+			s.breakLine(v, x, -p.High, -p.Low)
+			continue
+		}
+		low, high := endRange(part, x == left)
+		s.breakLine(v, x, low, high)
 	}
 	s.dc.Stroke()
+}
+
+func (s *sheet) breakLine(v *view, x, low, high float64) {
+	b := v.bounds()
+	at := box{b.X0 - 1, v.at(r2.Vec{Y: high}).Y, b.X1 + 1, v.at(r2.Vec{Y: low}).Y}
+	for _, piece := range clipLine(waves(v.at(r2.Vec{X: x}).X, b.Y0, b.Y1, s.scale), at) {
+		s.polyline(piece)
+	}
 }

@@ -93,7 +93,7 @@ func (p *plate) title() string {
 func (p *plate) note(antisymmetric bool) string {
 	switch {
 	case antisymmetric:
-		return "upper side stretched, lower side compressed"
+		return "lower half: the same stresses with the opposite sign"
 	case p.part.Half:
 		return "lower half is the mirror image"
 	}
@@ -123,7 +123,7 @@ func (p *plate) draw() {
 	if p.part.Half {
 		p.symmetry(main, 18)
 	}
-	p.load(main, p.finding.Load.Name, left, right)
+	p.load(main, p.part, p.finding.Load.Name, left, right)
 
 	p.closeUp(close, peak)
 }

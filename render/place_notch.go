@@ -16,17 +16,9 @@ func (g geometry) middle() float64 { return (g.notch0 + g.notch1) / 2 }
 // size dimensions the whole height at the left end.
 func size(name string) placement {
 	return placement{Dim: name, Kind: acrossLeft, At: func(g geometry) (a, b r2.Vec) {
-		return r2.Vec{X: g.left, Y: g.ends(0).high}, r2.Vec{X: g.left, Y: g.ends(0).low}
+		low, high := endRange(g.part, true)
+		return r2.Vec{X: g.left, Y: high}, r2.Vec{X: g.left, Y: low}
 	}}
-}
-
-// ends gives the range of y of the material in a plain end.
-func (g geometry) ends(i int) extent {
-	p := g.part.Plain[i]
-	if g.part.Half {
-		return extent{low: -p.High, high: p.High}
-	}
-	return extent{low: p.Low, high: p.High}
 }
 
 // netBetween dimensions what two opposite notches leave between them.

@@ -68,6 +68,25 @@ func placements() map[string][]placement {
 	}
 }
 
+// placementsOf gives the dimensions that are drawn of a part: of an outline of
+// the user's own the sizes of both ends.
+func placementsOf(part *specimen.Part) []placement {
+	if list, ok := placements()[part.Name]; ok {
+		return list
+	}
+	end := func(kind placementKind, left bool) placement {
+		return placement{Kind: kind, At: func(g geometry) (a, b r2.Vec) {
+			x := g.right
+			if left {
+				x = g.left
+			}
+			low, high := endRange(g.part, left)
+			return r2.Vec{X: x, Y: high}, r2.Vec{X: x, Y: low}
+		}}
+	}
+	return []placement{end(acrossLeft, true), end(acrossRight, false)}
+}
+
 // centerOf gives the centre of a circular or elliptic arc.
 func centerOf(c outline.Curve) (r2.Vec, bool) {
 	switch a := c.(type) {
@@ -97,12 +116,12 @@ func radiusBelow(name string) func(g geometry) (a, b r2.Vec) {
 func (s *sheet) annotate(v *view, part *specimen.Part, left, right float64) {
 	g := geometry{part.Dims, part, left, right, extentOf(part)}
 	rows := 0
-	for _, p := range placements()[part.Family.Name] {
+	for _, p := range placementsOf(part) {
 		if p.Skip != nil && p.Skip(part.Dims) {
 			continue
 		}
 		a, b := p.At(g)
-		text := lettered(p, part)
+		text := lettered(p, part, a, b)
 		switch p.Kind {
 		case acrossLeft:
 			s.across(v, a, b, v.bounds().X0-s.u(dimensionOff), text)
@@ -115,21 +134,29 @@ func (s *sheet) annotate(v *view, part *specimen.Part, left, right float64) {
 			rows++
 		case leaderTo:
 			p, q := v.at(a), v.at(b)
-			l := math.Hypot(q.X-p.X, q.Y-p.Y)
-			s.leader(p, point{(q.X - p.X) / l, (q.Y - p.Y) / l}, text)
+			away := point{0.6, 0.8} // where there is no direction to come from
+			if l := distance(p, q); l > 0 {
+				away = point{(q.X - p.X) / l, (q.Y - p.Y) / l}
+			}
+			s.leader(p, away, text)
 		}
 	}
 }
 
-func lettered(p placement, part *specimen.Part) string {
+// lettered is the text of a dimension: its value, or what is measured between
+// the two points where it has no name.
+func lettered(p placement, part *specimen.Part, a, b r2.Vec) string {
 	if p.Text != nil {
 		return p.Text(part.Dims)
 	}
 	text := number.Length(part.Dims[p.Dim], "")
+	if p.Dim == "" {
+		text = number.Compact(math.Abs(a.Y-b.Y), 6)
+	}
 	switch {
 	case p.Kind == leaderTo:
 		return "R" + text
-	case p.Kind == alongBelow || part.Family.Kind == scf.Bar:
+	case p.Kind == alongBelow || !round(part):
 		return text
 	}
 	return "Ø" + text

@@ -34,19 +34,12 @@ func sketch(part *specimen.Part, o SketchOptions) *sheet {
 		s.symmetry(v, 18)
 	}
 	s.annotate(v, part, left, right)
-	s.text(point{s.u(50), s.u(height - 62)}, 0, 0.5, part.Family.Name, head, ink)
-	s.text(point{s.u(50), s.u(height - 62 + 3)}.plus(s.measure(part.Family.Name, head)+s.u(18), 0), 0, 0.5, part.Family.Title, normal, grey)
-	if unit := unitText(part.Unit); unit != "" {
-		s.text(point{s.u(1550), s.u(height - 62)}, 1, 0.5, unit, normal, grey)
-	}
+	base := s.u(height - 62)
+	name := s.text(point{s.u(50), base}, 0, 0.5, part.Name, head, ink)
+	unit := s.text(point{s.u(1550), base}, 1, 0.5, unitText(part.Unit), normal, grey)
+	title := s.fit(titleText(part), normal, unit.X0-name.X1-s.u(40))
+	s.text(point{name.X1 + s.u(18), base + s.u(2)}, 0, 0.5, title, normal, grey)
 	return s
-}
-
-func unitText(unit string) string {
-	if unit == "" {
-		return "all lengths in one unnamed unit"
-	}
-	return "all lengths in " + unit
 }
 
 // area gives a rectangle of the sheet from units.

@@ -30,7 +30,7 @@ type StudyPoint struct {
 
 // LadderStudy makes the study of a finding's own ladder.
 func LadderStudy(f *verify.Finding, part *specimen.Part) Study {
-	s := Study{Title: part.Family.Name + ", " + string(f.Load.Name), Limit: math.NaN(), Uncertainty: math.NaN()}
+	s := Study{Title: part.Name + ", " + string(f.Load.Name), Limit: math.NaN(), Uncertainty: math.NaN()}
 	ladder := f.Computed.Ladder
 	for i, r := range ladder {
 		p := StudyPoint{Label: "order " + number.Count(r.Order), Unknowns: r.Unknowns, Factor: r.Factor}

@@ -2,10 +2,10 @@ package render
 
 import (
 	"fmt"
+	"slices"
 	"strings"
 
 	"notchproof/render/number"
-	"notchproof/scf"
 	"notchproof/verify"
 	"notchproof/verify/specimen"
 )
@@ -15,7 +15,7 @@ import (
 func (s *sheet) titleBlock(b box, f *verify.Finding, part *specimen.Part) {
 	s.rectangle(b, wide, ink)
 	t := table{s, b, b.Y0}
-	t.row(62, part.Family.Title, strong, dimensionText(part), normal)
+	t.row(62, titleText(part), strong, dimensionText(part), normal)
 	t.row(62, loadText(f.Load), normal, nominalText(f.Load), normal)
 	t.factor(96, f)
 	t.comparisons(f)
@@ -76,7 +76,8 @@ func (t *table) factor(height float64, f *verify.Finding) {
 }
 
 // comparisons letters what the factor was held against and, in the room that is
-// left above the two rows that follow, the conventions and the reasons.
+// left above the two rows that follow, warnings,
+// conventions and reasons.
 func (t *table) comparisons(f *verify.Finding) {
 	const line, below = 25, 62 + 36
 	room := t.box.Y1 - t.s.u(below+10) - t.y
@@ -86,7 +87,7 @@ func (t *table) comparisons(f *verify.Finding) {
 		left := len(lines) - most + 1
 		lines = append(lines[:most-1:most-1], [4]string{fmt.Sprintf("and %d more", left)})
 	}
-	for _, remark := range append(f.Load.Nominal.Notes[:len(f.Load.Nominal.Notes):len(f.Load.Nominal.Notes)], f.Because...) {
+	for _, remark := range slices.Concat(f.Warnings, f.Load.Nominal.Notes, f.Because) {
 		for _, part := range t.s.wrap(remark, normal, t.box.width()-2*t.s.u(cellMargin), most-len(lines)) {
 			lines = append(lines, [4]string{part})
 		}
@@ -132,32 +133,6 @@ func (s *sheet) symbol(p point, l *specimen.Load) float64 {
 	return s.text(point{k.X1 + s.u(1), k.Y1 + s.u(2)}, 0, 1, subscript, head, ink).X1
 }
 
-func dimensionText(part *specimen.Part) string {
-	var list []string
-	for _, d := range part.Family.Dimensions {
-		if v, given := part.Given[d.Name]; given {
-			list = append(list, d.Name+" = "+number.Length(v, ""))
-		}
-	}
-	text := strings.Join(list, ", ")
-	if part.Unit != "" {
-		text += " " + part.Unit
-	}
-	return part.Family.Name + ": " + text
-}
-
-func loadText(l *specimen.Load) string {
-	names := map[scf.Load]string{scf.Tension: "tension, axial force P", scf.Bending: "bending, moment M", scf.Torsion: "torsion, torque T"}
-	if name, ok := names[l.Name]; ok {
-		return name
-	}
-	return string(l.Name)
-}
-
-func nominalText(l *specimen.Load) string {
-	return "nominal stress " + l.Nominal.Formula + "   (" + l.Nominal.Section + ")"
-}
-
 // sideText is what goes with the factor.
 func sideText(f *verify.Finding) string {
 	c := &f.Computed
@@ -166,20 +141,6 @@ func sideText(f *verify.Finding) string {
 	}
 	return fmt.Sprintf("von Mises %s   gross section %s   %s",
 		number.Decimal(c.VonMises.Value, 3), number.Decimal(c.Gross, 3), c.Factor.Status)
-}
-
-func verdictText(v verify.Verdict) string {
-	switch v {
-	case verify.Agrees:
-		return "agrees"
-	case verify.Disagrees:
-		return "disagrees"
-	case verify.OutOfRange:
-		return "out of range"
-	case verify.NothingToCompare:
-		return "nothing to compare"
-	}
-	return "undecided"
 }
 
 // comparisonTexts has one line for the claim and one for each handbook value.
@@ -222,5 +183,5 @@ func peakText(f *verify.Finding, part *specimen.Part) string {
 	if part.Unit != "" {
 		at += "\u00a0" + part.Unit
 	}
-	return "peak on the " + p.Side + " at " + at + ", " + number.Decimal(p.ArcDegrees, 1) + "° up the arc"
+	return "peak on the " + p.Side + " at " + at + ", " + number.Decimal(p.ArcDegrees, 1) + "° " + arcText(part)
 }
