@@ -21,7 +21,10 @@ func checkCollar(dims Dims) error {
 	if err := notBelow("L", L, "L/D", L, s.D); err != nil {
 		return err
 	}
-	return notLonger("L", L, "length", L, "D", s.D)
+	if err := notLonger("L", L, "length", L, "D", s.D); err != nil {
+		return err
+	}
+	return noSliver("r", s.r, "face", s.h()-s.r, s.r, s.D, L+2*cutRun(s.h(), s.r, s.r))
 }
 
 // collarHints turns the values of the shoulder into hints.

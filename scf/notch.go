@@ -32,9 +32,21 @@ func halfWidth(h, r, angle float64) float64 {
 	return r*math.Cos(half) + (h-flankStart(r, angle))*math.Tan(half)
 }
 
-// checkOpening refuses a notch that runs too far along the part.
+// checkOpening refuses a notch that runs too far along the part, or whose
+// flanks open so wide that they leave hardly any arc between them.
 func checkOpening(h, r, angle, D float64) error {
-	return notLonger("angle", angle, "half width of the notch", halfWidth(h, r, angle), "D", D)
+	half := halfWidth(h, r, angle)
+	if err := notLonger("angle", angle, "half width of the notch", half, "D", D); err != nil {
+		return err
+	}
+	if !hasFlanks(h, r, angle) {
+		return nil
+	}
+	if err := notBelow("angle", angle, "root arc/length", r*radians(180-angle), D+2*half); err != nil {
+		return err
+	}
+	flank := (h - flankStart(r, angle)) / math.Cos(radians(angle/2))
+	return noSliver("r", r, "flank", flank, r, D, 2*half)
 }
 
 func radians(degrees float64) float64 { return degrees * (math.Pi / 180) }

@@ -35,6 +35,25 @@ func notLonger(name string, value float64, what string, length float64, widthNam
 	}
 }
 
+// noSliver refuses a straight piece beside a root arc that is there, but is too
+// short to be drawn in a part of width D with a feature of the given run: an
+// outline needs sides of at least 1e-8 of its size, ends included. Pieces below
+// 1e-4 of the radius pass, since leaving them out changes nothing that shows.
+func noSliver(name string, value float64, what string, piece, r, D, run float64) error {
+	const (
+		unseen = 1e-4
+		ends   = 9 // lengths of both plain ends and the width, in D
+	)
+	if piece <= unseen*r || piece >= 1.5e-8*(ends*D+run) {
+		return nil
+	}
+	return &DimensionError{
+		Name: name, Value: value,
+		Reason: "leaves a " + what + " of " + short(piece) + ", which is too short to be meshed",
+		Hint:   "leave none or a longer one",
+	}
+}
+
 // checkStep holds the two sizes and the root radius of a part against each
 // other; depth is D − d for a notch on one side, half of that otherwise.
 func checkStep(D, d, r float64) error {

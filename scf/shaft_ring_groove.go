@@ -36,11 +36,18 @@ func checkRingGroove(dims Dims) error {
 	if err := checkStep(s.D, s.d, s.r); err != nil {
 		return err
 	}
-	if corners := 2 * cutRun(s.h(), s.r, s.r); w < corners*(1-limitSlack) {
+	corners := 2 * cutRun(s.h(), s.r, s.r)
+	if w < corners*(1-limitSlack) {
 		return &DimensionError{Name: "w", Value: w,
 			Reason: "narrower than its two corners, which take " + short(corners),
 			Hint:   "give a wider groove or a smaller r",
 		}
+	}
+	if err := noSliver("r", s.r, "wall", s.h()-s.r, s.r, s.D, w); err != nil {
+		return err
+	}
+	if err := noSliver("w", w, "floor", w-corners, s.r, s.D, w); err != nil {
+		return err
 	}
 	return notLonger("w", w, "width", w, "D", s.D)
 }

@@ -23,7 +23,10 @@ func checkShoulder(dims Dims) error {
 	if err := checkEllipticFillet(s, dims["ra"]); err != nil {
 		return err
 	}
-	return checkChamfer(s, dims["c"])
+	if err := checkChamfer(s, dims["c"]); err != nil {
+		return err
+	}
+	return noSliver("r", s.r, "face", s.h()-s.r-dims["c"], s.r, s.D, dims["ra"])
 }
 
 // checkEllipticFillet: an ellipse's sharpest curvatures are ra²/r and r²/ra.

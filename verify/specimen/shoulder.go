@@ -13,7 +13,7 @@ import (
 // off. A chamfer of leg c breaks the edge of the large section.
 func shoulder(dims scf.Dims, _ scf.Options) *Part {
 	D, d := dims["D"], dims["d"]
-	f := newFillet((D-d)/2, dims["r"], dims["ra"], dims["c"], (endLength+1)*(D+d))
+	f := newFillet((D-d)/2, dims["r"], dims["ra"], dims["c"], (endLength+1)*(D+d)+dims["ra"])
 	left, right := -endLength*D, f.reach+endLength*d
 
 	t := &trace{at: r2.Vec{X: left}}
