@@ -22,13 +22,13 @@ func barHole(dims scf.Dims, _ scf.Options) *Part {
 // to ±half along the bar; draw takes the trace over the hole.
 func halfHole(W, half float64, draw func(t *trace) int) *Part {
 	end := half + endLength*W
-	t := &trace{at: r2.Vec{X: half}}
+	t := &trace{at: r2.Vec{X: -end}}
+	t.line("left axis", -half, 0)
+	hole := draw(t)
 	t.line("right axis", end, 0)
 	rightEnd := t.line("right end", end, W/2)
 	t.line("edge", -end, W/2)
 	leftEnd := t.line("left end", -end, 0)
-	t.line("left axis", -half, 0)
-	hole := draw(t)
 	p := &Part{
 		Half: true,
 		Net:  0.23 * half,
