@@ -151,7 +151,7 @@ func (c *Curved) placeInteriors(next int) int {
 
 // prepareBlend computes how an edge's deviation from its chord spreads into
 // the triangle. The blending of Szabó & Babuška (Finite Element Analysis,
-// 1991, sec. 6.1) moves the point with the barycentric coordinates λa, λb at
+// 1991) moves the point with the barycentric coordinates λa, λb at
 // the edge's ends by
 //
 //	λa λb e(s) / (s (1−s)),   s = (1 + λb − λa)/2,

@@ -114,7 +114,7 @@ func (b *bounder) bounds(c *Curved, tri int) (low, high float64) {
 // and the product of two Bernstein forms of degree m is the Bernstein form of
 // degree 2m with the coefficients Σ C(α) C(β) p_α q_β / C(α+β) over all
 // α + β = γ, where C are multinomial coefficients. (Farin, Comput. Aided Geom.
-// Des. 3 (1986) 83-127.)
+// Des. 3 (1986) 83-127, cited from memory.)
 func (b *bounder) determinant(c *Curved, tri int) (det []float64, allowance float64) {
 	var (
 		room   control

@@ -22,7 +22,7 @@ func gauss(n int, alpha float64) (points, weights []float64) {
 	for i := range n {
 		// The i-th zero of the Jacobi polynomial on [−1, 1] from the left, by
 		// Newton's method from the leading term of its asymptotic expansion
-		// (Szegő, Orthogonal Polynomials, sec. 8.21). Two steps more than the
+		// (Szegő, Orthogonal Polynomials, ch. 8, cited from memory). Two steps more than the
 		// largest n needs, always as many.
 		x := -math.Cos(math.Pi * (float64(i) + 0.75) / (float64(n) + (alpha+1)/2))
 		var slope float64
@@ -33,14 +33,14 @@ func gauss(n int, alpha float64) (points, weights []float64) {
 		}
 		_, slope = jacobi(n, alpha, x)
 		points[i] = (1 + x) / 2
-		// Abramowitz & Stegun, eq. 25.4.33 brought to this interval.
+		// Szegő, eq. (15.3.1) (from memory), brought to this interval.
 		weights[i] = 1 / ((1 - x) * (1 + x) * slope * slope)
 	}
 	return points, weights
 }
 
 // jacobi evaluates the Jacobi polynomial P_n^(α,0) and its derivative at x by
-// the three-term recurrence (Szegő, eq. 4.5.1).
+// the three-term recurrence (Szegő, eq. (4.5.1), from memory).
 func jacobi(n int, alpha, x float64) (p, dp float64) {
 	p, p1 := 1.0, 0.0
 	dp, dp1 := 0.0, 0.0
@@ -66,7 +66,7 @@ func jacobi(n int, alpha, x float64) (p, dp float64) {
 // conical returns the product rule of n² points and degree 2n−1 that collapses
 // a square onto the triangle: x = u (1−y), with the factor 1−y of the area
 // element in the weight of the y rule. (Stroud, Approximate Calculation of
-// Multiple Integrals, 1971, sec. 2.5.)
+// Multiple Integrals, 1971, cited from memory.)
 func conical(n int) Rule {
 	u, wu := gauss(n, 0)
 	y, wy := gauss(n, 1)

@@ -9,7 +9,8 @@ import "math"
 // numbered by i, then j, where Q_i = (1−η)^i P_i((2ξ+η−1)/(1−η)) is a scaled
 // Legendre polynomial and P^(α,β) a Jacobi polynomial. (Proriol, C. R. Acad.
 // Sci. Paris 245 (1957) 2459; Koornwinder, in: Theory and Application of
-// Special Functions (1975) 435; Dubiner, J. Sci. Comput. 6 (1991) 345.)
+// Special Functions (1975) 435; Dubiner, J. Sci. Comput. 6 (1991) 345;
+// all cited from memory.)
 //
 // Every recurrence is in ξ and η themselves, without the quotient, so that the
 // corner η = 1 is as good a point as any other.
@@ -23,7 +24,8 @@ func newModal(order int) modal {
 	for i := 0; i <= order; i++ {
 		al := float64(2*i + 1)
 		for j := 0; j <= order-i; j++ {
-			// Szegő, Orthogonal Polynomials, eq. (4.5.1), with β = 0.
+			// Szegő, Orthogonal Polynomials, eq. (4.5.1) (from memory), with β = 0;
+			// TestModesAreOrthonormal holds it.
 			n := float64(j)
 			s := 2*n + al
 			den := 2 * (n + 1) * (n + al + 1)

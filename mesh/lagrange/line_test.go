@@ -5,8 +5,8 @@ import (
 	"testing"
 )
 
-// The Gauss-Lobatto points in closed form. (Abramowitz & Stegun, Handbook of
-// Mathematical Functions, table 25.6, lists the same points as decimals.)
+// The Gauss-Lobatto points in closed form: the zeros of P'_order, an even or odd
+// polynomial of at most degree 5, solved as a quadratic in x².
 func TestLobattoPoints(t *testing.T) {
 	half := func(x float64) float64 { return (1 - x) / 2 }
 	for order, want := range map[int][]float64{

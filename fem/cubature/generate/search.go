@@ -176,7 +176,7 @@ func (s *system) evaluate(y []float64) float64 {
 
 // solve runs Levenberg's and Marquardt's method from a start and reports
 // whether the moments vanish to rounding. (Marquardt, J. SIAM 11 (1963)
-// 431-441.)
+// 431-441, cited from memory.)
 func (s *system) solve(y []float64) ([]float64, bool) {
 	const (
 		steps = 300
