@@ -79,26 +79,35 @@ func (s *sheet) along(v *view, a, b r2.Vec, y float64, text string) {
 
 // leader points at the part from outside: an arrow at tip, coming from the
 // direction away, and a shelf that the text stands on. It is lengthened until
-// the text is clear of everything else.
-func (s *sheet) leader(tip, away point, text string) {
+// the text is clear of all lettering and of the material; where no length will
+// do, of the lettering alone.
+func (s *sheet) leader(tip, away point, text string, material [][]point) {
 	w, h := s.measure(text, normal), s.u(normal.Size)
 	side := 1.0
 	if away.X < 0 {
 		side = -1
 	}
-	var knee point
-	var b box
-	for reach := s.u(56); reach < s.u(260); reach += s.u(12) {
+	shelf := func(reach float64) (knee point, b box) {
 		knee = tip.toward(away, reach)
 		x := knee.X
 		if side < 0 {
 			x -= w + s.u(8)
 		}
-		b = box{x, knee.Y - h - s.u(3), x + w + s.u(8), knee.Y - s.u(3)}
-		if s.free(b.grown(s.u(4))) {
+		return knee, box{x, knee.Y - h - s.u(3), x + w + s.u(8), knee.Y - s.u(3)}
+	}
+	best := s.u(56)
+	for reach := s.u(240); reach >= s.u(40); reach -= s.u(10) {
+		if _, b := shelf(reach); s.free(b.grown(s.u(4))) {
+			best = reach
+		}
+	}
+	for reach := s.u(40); reach <= s.u(240); reach += s.u(10) {
+		if _, b := shelf(reach); s.free(b.grown(s.u(4))) && !touches(b.grown(s.u(3)), material) {
+			best = reach
 			break
 		}
 	}
+	knee, b := shelf(best)
 	s.pen(ink, narrow)
 	s.line(tip, knee)
 	s.line(knee, knee.plus(side*(w+s.u(8)), 0))

@@ -9,6 +9,7 @@ import (
 // legend draws the ramp with the levels of the contours as its ticks.
 func (s *sheet) legend(area box, title, note string, top float64, list []float64) {
 	s.text(point{area.X0, area.Y0}, 0, 0, title, strong, ink)
+	defer s.take(area)
 	if note != "" {
 		s.text(point{area.X1, area.Y0}, 1, 0, s.fit(note, small, area.width()-s.measure(title, strong)-s.u(24)), small, grey)
 	}

@@ -14,8 +14,12 @@ import (
 // Its scale is a round multiple of the main view's.
 func detail(part *specimen.Part, peak r2.Vec, main *view, center point, radius float64) (v *view, times float64) {
 	about, reach := root(part, peak)
-	const least = 1.5 // below that the main view shows as much
-	times = math.Max(least, roundScale(radius/reach/main.scale))
+	// Less would show little more than the main view, and its circle would
+	// leave the room that the main view has.
+	const least = 3
+	if times = roundScale(radius / reach / main.scale); times < least {
+		times, about = least, peak
+	}
 	v = &view{scale: times * main.scale, window: circle(center, radius)}
 	v.origin = point{center.X - v.scale*about.X, center.Y + v.scale*about.Y}
 	// Near the axis of a half model the mirror image comes into view.

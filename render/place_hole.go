@@ -1,6 +1,8 @@
 package render
 
 import (
+	"math"
+
 	"gonum.org/v1/gonum/spatial/r2"
 
 	"notchproof/render/number"
@@ -22,7 +24,8 @@ func holePlacements() []placement {
 		{Dim: "e", Kind: acrossRight, At: func(g geometry) (a, b r2.Vec) {
 			c := g.center()
 			return c, r2.Vec{X: c.X, Y: c.Y - g.d["e"]}
-		}, Skip: func(d scf.Dims) bool { return d["e"] == 0 }},
+		}, Text: func(d scf.Dims) string { return number.Length(math.Abs(d["e"]), "") },
+			Skip: func(d scf.Dims) bool { return d["e"] == 0 }},
 	}
 }
 

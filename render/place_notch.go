@@ -1,6 +1,8 @@
 package render
 
 import (
+	"math"
+
 	"gonum.org/v1/gonum/spatial/r2"
 
 	"notchproof/render/number"
@@ -59,11 +61,18 @@ func (g geometry) arc(t float64) (tip, center r2.Vec) {
 	return tip, center
 }
 
-// opening is the angle of a notch, noted beside it.
-func opening() placement {
+// opening is the angle of a notch, noted at the middle of its right flank: of
+// the lower notch where there are two.
+func opening(two bool) placement {
 	return placement{Dim: "angle", Kind: leaderTo, At: func(g geometry) (a, b r2.Vec) {
-		at := r2.Vec{X: g.notch0, Y: -g.d["D"] / 2}
-		return at, r2.Add(at, r2.Vec{X: -0.7, Y: -1})
+		end, _ := g.arc(1)
+		rest := math.Max(0, g.d["D"]/2-end.Y)
+		tip := r2.Add(end, r2.Scale(rest/2, r2.Vec{X: math.Tan(g.d["angle"] * math.Pi / 360), Y: 1}))
+		from := r2.Add(tip, r2.Vec{X: 0.05, Y: 1})
+		if two {
+			return mirrored(tip), mirrored(from)
+		}
+		return tip, from
 	}, Text: func(d scf.Dims) string { return "opens " + number.Length(d["angle"], "") + "°" },
 		Skip: func(d scf.Dims) bool { return d["angle"] == 0 }}
 }
@@ -77,7 +86,7 @@ func stretch(name string) placement {
 }
 
 func notchPlacements() []placement {
-	return []placement{size("D"), netBetween(), rootRadius(), opening()}
+	return []placement{size("D"), netBetween(), rootRadius(), opening(true)}
 }
 
 func edgeNotchPlacements() []placement {
@@ -93,7 +102,7 @@ func edgeNotchPlacements() []placement {
 		}
 		return r2.Vec{X: g.middle(), Y: bounds.Max.Y}, r2.Vec{X: g.middle(), Y: g.high}
 	}}
-	return []placement{size("D"), net, rootRadius()}
+	return []placement{size("D"), net, rootRadius(), opening(false)}
 }
 
 func ringGroovePlacements() []placement {

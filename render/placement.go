@@ -115,6 +115,7 @@ func radiusBelow(name string) func(g geometry) (a, b r2.Vec) {
 // annotate draws all dimensions of a part in a view.
 func (s *sheet) annotate(v *view, part *specimen.Part, left, right float64) {
 	g := geometry{part.Dims, part, left, right, extentOf(part)}
+	material := v.loops(part)
 	rows := 0
 	for _, p := range placementsOf(part) {
 		if p.Skip != nil && p.Skip(part.Dims) {
@@ -138,7 +139,7 @@ func (s *sheet) annotate(v *view, part *specimen.Part, left, right float64) {
 			if l := distance(p, q); l > 0 {
 				away = point{(q.X - p.X) / l, (q.Y - p.Y) / l}
 			}
-			s.leader(p, away, text)
+			s.leader(p, away, text, material)
 		}
 	}
 }

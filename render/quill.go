@@ -163,8 +163,8 @@ func (c *surface) nearest(to r2.Vec) (at, gap float64) {
 // sides: at even steps, and ever closer together towards the middle, where the
 // whole arc of a small root may be less than a step.
 func (c *surface) needles(at, step, reach float64) []needle {
-	if c.closed {
-		reach = math.Min(reach, c.length/2)
+	if half := c.length / 2; c.closed && reach > 0.7*half {
+		reach = half // all round rather than with a gap
 	}
 	offsets := []float64{0}
 	const closer, least = 0.8, 1e-3

@@ -94,6 +94,26 @@ func onAxis(ps []r2.Vec) bool {
 	return true
 }
 
+// touches tells whether a box meets what lies inside polygons, an odd number of
+// them, by points a few pixels apart.
+func touches(b box, polygons [][]point) bool {
+	const apart = 4
+	nx, ny := int(b.width()/apart)+1, int(b.height()/apart)+1
+	for i := range nx + 1 {
+		for j := range ny + 1 {
+			p := point{b.X0 + b.width()*float64(i)/float64(nx), b.Y0 + b.height()*float64(j)/float64(ny)}
+			odd := false
+			for _, ps := range polygons {
+				odd = odd != inside(p, ps)
+			}
+			if odd {
+				return true
+			}
+		}
+	}
+	return false
+}
+
 // coverage gives how much of each pixel of a rectangle lies inside polygons.
 func coverage(area image.Rectangle, polygons ...[]point) *image.Alpha {
 	r := vector.NewRasterizer(area.Dx(), area.Dy())

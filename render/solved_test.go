@@ -99,7 +99,7 @@ var proportions = []struct {
 	{"radius larger than half the part", "bar-shoulder", scf.Dims{"D": 60, "d": 20, "r": 20}, scf.Tension},
 	{"two notches", "bar-notch", scf.Dims{"D": 60, "d": 40, "r": 4, "angle": 60}, scf.Bending},
 	{"shallow notches", "bar-notch", scf.Dims{"D": 60, "d": 58, "r": 4}, scf.Tension},
-	{"notch on one side", "bar-edge-notch", scf.Dims{"D": 60, "d": 45, "r": 5}, scf.Bending},
+	{"notch on one side", "bar-edge-notch", scf.Dims{"D": 60, "d": 45, "r": 5, "angle": 40}, scf.Bending},
 	{"hole", "bar-hole", scf.Dims{"W": 60, "d": 20}, scf.Tension},
 	{"hole off the middle", "bar-hole", scf.Dims{"W": 60, "d": 20, "e": -8}, scf.Bending},
 	{"large hole", "bar-hole", scf.Dims{"W": 60, "d": 50}, scf.Tension},

@@ -14,6 +14,7 @@ import (
 // it is loaded, what came out and how far it may be trusted.
 func (s *sheet) titleBlock(b box, f *verify.Finding, part *specimen.Part) {
 	s.rectangle(b, wide, ink)
+	defer s.take(b)
 	t := table{s, b, b.Y0}
 	t.row(62, titleText(part), strong, dimensionText(part), normal)
 	t.row(62, loadText(f.Load), normal, nominalText(f.Load), normal)
