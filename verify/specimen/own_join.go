@@ -2,6 +2,7 @@ package specimen
 
 import (
 	"math"
+	"strconv"
 
 	"gonum.org/v1/gonum/spatial/r2"
 
@@ -21,8 +22,11 @@ func (s sheet) joined() sheet {
 	near := slack(s.region())
 	for k, loop := range s {
 		for i := range loop {
-			if l, ok := loop[i].Curve.(outline.Line); ok {
-				loop[i].Curve = outline.Line{A: ontoAxis(l.A, near), B: ontoAxis(l.B, near)}
+			switch c := loop[i].Curve.(type) {
+			case outline.Line:
+				loop[i].Curve = outline.Line{A: ontoAxis(c.A, near), B: ontoAxis(c.B, near)}
+			case outline.Arc:
+				loop[i].Curve = aboutCentre(c, c.At(0), c.At(1))
 			}
 		}
 		s[k] = joinLoop(loop)
@@ -35,6 +39,16 @@ func ontoAxis(p r2.Vec, near float64) r2.Vec {
 		p.Y = 0
 	}
 	return p
+}
+
+// aboutCentre gives an arc the bits that it has when it is drawn about its
+// centre between its ends, as the families' arcs are.
+func aboutCentre(c outline.Arc, from, to r2.Vec) outline.Curve {
+	arc, err := outline.NewArc(from, to, c.Center, c.Sweep > 0)
+	if err != nil {
+		return c
+	}
+	return arc
 }
 
 // joinLoop joins neighbours until nothing more can be joined.
@@ -98,11 +112,13 @@ func oneArc(parts []drawnSide) (outline.Curve, bool) {
 	if !writtenInParts(math.Abs(whole.Sweep)/math.Pi, len(parts)) {
 		return nil, false
 	}
-	if full := math.Copysign(2*math.Pi, whole.Sweep); math.Abs(whole.Sweep-full) <= sameShape {
-		whole.Sweep = full
-	}
+	from, to := parts[0].Curve.At(0), parts[len(parts)-1].Curve.At(1)
 	if whole.A == whole.B {
-		return outline.Arc{Center: whole.Center, Radius: whole.A, Start: whole.Start, Sweep: whole.Sweep}, true
+		whole.Center = r2.Vec{X: decimal(whole.Center.X, whole.A), Y: decimal(whole.Center.Y, whole.A)}
+		return aboutCentre(outline.Arc{Center: whole.Center, Radius: whole.A, Start: whole.Start, Sweep: whole.Sweep}, from, to), true
+	}
+	if from == to {
+		whole.Sweep = math.Copysign(2*math.Pi, whole.Sweep)
 	}
 	return whole, true
 }
@@ -117,6 +133,21 @@ func writtenInParts(halfTurns float64, parts int) bool {
 		return halfTurns > 1.8 && halfTurns < 2+sameShape
 	}
 	return false
+}
+
+// decimal rounds a coordinate to twelve digits behind the first of a length:
+// each part of an arc knows the centre but for rounding, and drawings have it
+// at a number of few digits.
+func decimal(x, length float64) float64 {
+	places := 12 - int(math.Floor(math.Log10(length)))
+	if places < 0 {
+		return x
+	}
+	rounded, err := strconv.ParseFloat(strconv.FormatFloat(x, 'f', places, 64), 64)
+	if err != nil {
+		return x
+	}
+	return rounded + 0 // no minus zero
 }
 
 // arcOf sees circular and elliptic arcs alike.
