@@ -10,7 +10,7 @@ import (
 // judge compares and comes to a verdict.
 func (f *Finding) judge(p *specimen.Part, o Options) {
 	e := f.Computed.Factor
-	settled := f.settle(o)
+	settled := f.settle(p, o)
 	f.consult(p, settled)
 	if claim := o.Claims[f.Load.Name]; claim != nil {
 		reading := claim.Reading
@@ -44,9 +44,9 @@ func (f *Finding) consult(p *specimen.Part, settled bool) {
 }
 
 // settle tells whether the computed factor may judge, and says why not.
-func (f *Finding) settle(o Options) bool {
+func (f *Finding) settle(p *specimen.Part, o Options) bool {
 	e := f.Computed.Factor
-	settled := true
+	settled := f.sharp(p)
 	if !e.Status.Settled() {
 		f.because("the ladder has not converged: %s", e.Status)
 		settled = false
