@@ -39,8 +39,8 @@ type climb struct {
 	work    fem.Workspace
 }
 
-// run climbs until the target is met or the stages are used up; the last
-// stage's state is what is reported.
+// run climbs until the target is met and the checks pass, or the stages are used
+// up; the last stage's state is what is reported.
 func (c *climb) run(ctx context.Context) (Computed, *shape, error) {
 	var out Computed
 	var at *shape
@@ -55,7 +55,7 @@ func (c *climb) run(ctx context.Context) (Computed, *shape, error) {
 			if err := c.step(ctx, s, order, &out); err != nil {
 				return out, s, err
 			}
-			if c.met(out.Factor) {
+			if c.met(out.Factor) && c.sound(s, &out) {
 				return out, s, nil
 			}
 		}
@@ -66,6 +66,17 @@ func (c *climb) run(ctx context.Context) (Computed, *shape, error) {
 // met tells that an estimate is as good as was wished for.
 func (c *climb) met(e Estimate) bool {
 	return e.Status.Settled() && e.Uncertainty <= c.options.target()*e.Value
+}
+
+// sound tells that all checks pass. The factor may be there before the stress
+// far off is, where elements are large.
+func (c *climb) sound(s *shape, out *Computed) bool {
+	for _, check := range c.checks(s, out) {
+		if !check.Passed {
+			return false
+		}
+	}
+	return true
 }
 
 // step solves one rung and brings the estimates up to date.
