@@ -187,16 +187,18 @@ func (t *treeReader) value(path string) (*node, error) {
 }
 
 func (t *treeReader) object(n *node) error {
+	seen := make(map[string]int)
 	for t.tokens.More() {
 		token, at, err := t.next()
 		if err != nil {
 			return err
 		}
 		name := token.(string)
-		if twin := n.member(name); twin != nil {
-			first := t.fail(twin.at, InputError{})
+		if twin, twice := seen[name]; twice {
+			first := t.fail(twin, InputError{})
 			return t.fail(at, InputError{What: "key", Value: name, Reason: fmt.Sprintf("given twice, first in line %d", first.Line), Hint: "give each key once"})
 		}
+		seen[name] = at
 		v, err := t.value(strings.TrimPrefix(n.path+"."+name, "."))
 		if err != nil {
 			return err

@@ -144,7 +144,11 @@ func (d *document) placed(n *node, err error) error {
 	if !errors.As(err, &fault) {
 		return d.refuse(n, err.Error(), "")
 	}
-	return d.refuse(n, fault.Reason, fault.Hint)
+	hint := fault.Hint
+	if hint == "" {
+		hint = "choose a unit in which the part has ordinary numbers"
+	}
+	return d.refuse(n, fault.Reason, hint)
 }
 
 // LastDigit is one unit of the last digit of a decimal number as it was
