@@ -67,3 +67,69 @@ func TestFamilyAndItsPartFileAgree(t *testing.T) {
 		}
 	}
 }
+
+func readPart(t *testing.T, file string) *specimen.Part {
+	t.Helper()
+	f, err := specimen.ReadPart([]byte(file), t.Name(), specimen.Over{})
+	if err != nil {
+		t.Fatal(err)
+	}
+	return f.Part
+}
+
+// The same hanger plate, drawn in different ways.
+const (
+	hangerHole = `, "holes": ["M -52 44 A 12 12 0 0 0 -28 44 A 12 12 0 0 0 -52 44 Z"]`
+	hanger     = `"model": "bar", "outline": "M -300 0 H 210 V 50 H 8 A 8 8 0 0 0 0 58 V 80 H -300 Z"` + hangerHole
+)
+
+// What a drawing does not mean changes no bit of the factor.
+func TestDrawnOtherwiseIsTheSamePart(t *testing.T) {
+	want := factors(t, readPart(t, `{"shape": {`+hanger+`}}`), Options{})
+	for name, path := range map[string]string{
+		"begun elsewhere": "M 8 50 A 8 8 0 0 0 0 58 V 80 H -300 V 0 H 210 V 50 Z",
+		"lines in pieces": "M -300 0 H -20 L 30 0 H 210 V 20 V 50 H 100 H 8 A 8 8 0 0 0 0 58 V 70 V 80 H -7 H -300 V 1 Z",
+		"clockwise":       "M -300 0 V 80 H 0 V 58 A 8 8 0 0 1 8 50 H 210 V 0 Z",
+		"relative":        "m -300 0 h 510 v 50 h -202 a 8 8 0 0 0 -8 8 v 22 h -300 z",
+	} {
+		got := factors(t, readPart(t, `{"shape": {"model": "bar", "outline": "`+path+`"`+hangerHole+`}}`), Options{})
+		for load, w := range want {
+			if g := got[load]; !(math.Abs(g.Value/w.Value-1) <= 1e-12) {
+				t.Errorf("%s, %s: %.15g, want %.15g", name, load, g.Value, w.Value)
+			}
+		}
+	}
+}
+
+// Half the size changes no more than the last bits. In another unit coordinates
+// round differently, which may tip the mesh; an image, and a half in place of
+// the whole, have other meshes anyway. Their bars must overlap.
+func TestSameShapeOtherwisePlaced(t *testing.T) {
+	compare := func(name string, a, b map[scf.Load]Estimate, rounding float64) {
+		for load, w := range a {
+			g := b[load]
+			gap := math.Abs(g.Value - w.Value)
+			if rounding > 0 && !(gap <= rounding*w.Value) || rounding == 0 && !(gap <= g.Uncertainty+w.Uncertainty) {
+				t.Errorf("%s, %s: %.12g ± %.2g, want %.12g ± %.2g", name, load, g.Value, g.Uncertainty, w.Value, w.Uncertainty)
+			}
+		}
+	}
+	want := factors(t, readPart(t, `{"shape": {`+hanger+`}}`), Options{})
+	compare("scaled", want, factors(t, readPart(t, `{"shape": {"unit": "m", "model": "bar",
+		"outline": "M -0.3 0 H 0.21 V 0.05 H 0.008 A 0.008 0.008 0 0 0 0 0.058 V 0.08 H -0.3 Z",
+		"holes": ["M -0.052 0.044 A 0.012 0.012 0 0 0 -0.028 0.044 A 0.012 0.012 0 0 0 -0.052 0.044 Z"]}}`), Options{}), 0)
+	compare("half as large", want, factors(t, readPart(t, `{"shape": {"model": "bar",
+		"outline": "M -150 0 H 105 V 25 H 4 A 4 4 0 0 0 0 29 V 40 H -150 Z",
+		"holes": ["M -26 22 A 6 6 0 0 0 -14 22 A 6 6 0 0 0 -26 22 Z"]}}`), Options{}), 1e-12)
+	compare("upside down", want, factors(t, readPart(t, `{"shape": {"model": "bar",
+		"outline": "M -300 0 V -80 H 0 V -58 A 8 8 0 0 0 8 -50 H 210 V 0 Z",
+		"holes": ["M -52 -44 A 12 12 0 0 0 -28 -44 A 12 12 0 0 0 -52 -44 Z"]}}`), Options{}), 0)
+	compare("turned round", want, factors(t, readPart(t, `{"shape": {"model": "bar",
+		"outline": "M 300 0 V 80 H 0 V 58 A 8 8 0 0 0 -8 50 H -210 V 0 Z",
+		"holes": ["M 52 44 A 12 12 0 0 0 28 44 A 12 12 0 0 0 52 44 Z"]}}`), Options{}), 0)
+	half := factors(t, readPart(t, `{"shape": {"model": "bar", "mirror": true,
+		"outline": "M -180 0 H 130 V 20 H 5 A 5 5 0 0 0 0 25 V 30 H -180 Z"}}`), Options{})
+	whole := factors(t, readPart(t, `{"shape": {"model": "bar",
+		"outline": "M -180 -30 H 0 V -25 A 5 5 0 0 0 5 -20 H 130 V 20 H 5 A 5 5 0 0 0 0 25 V 30 H -180 Z"}}`), Options{})
+	compare("whole", half, whole, 0)
+}
