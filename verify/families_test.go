@@ -15,8 +15,14 @@ import (
 // identities below hold in truth, so the tighter the more they say.
 const tight = 1e-6
 
-// found computes the factor of a family's part.
+// found computes the factor of a family's part tightly.
 func found(t *testing.T, name string, load scf.Load, dims scf.Dims, o scf.Options) *verify.Computed {
+	t.Helper()
+	return &finding(t, name, load, dims, o, tight).Computed
+}
+
+// finding checks a family's part under one load.
+func finding(t *testing.T, name string, load scf.Load, dims scf.Dims, o scf.Options, target float64) *verify.Finding {
 	t.Helper()
 	family, ok := scf.Lookup(name)
 	if !ok {
@@ -29,7 +35,7 @@ func found(t *testing.T, name string, load scf.Load, dims scf.Dims, o scf.Option
 	if err != nil {
 		t.Fatal(err)
 	}
-	r, err := verify.Run(context.Background(), p, []scf.Load{load}, verify.Options{Target: tight})
+	r, err := verify.Run(context.Background(), p, []scf.Load{load}, verify.Options{Target: target})
 	if err != nil {
 		t.Fatal(err)
 	}
@@ -42,7 +48,7 @@ func found(t *testing.T, name string, load scf.Load, dims scf.Dims, o scf.Option
 	if !f.Computed.Factor.Status.Settled() {
 		t.Fatalf("%s %s %v: ladder %s", name, load, dims, f.Computed.Factor.Status)
 	}
-	return &f.Computed
+	return f
 }
 
 func plain(t *testing.T, name string, load scf.Load, dims scf.Dims) verify.Estimate {
@@ -143,11 +149,14 @@ func TestScaleDoesNotMatter(t *testing.T) {
 	for _, family := range scf.Families() {
 		dims := ordinary(family.Name)
 		for _, load := range family.Loads {
-			at := plain(t, family.Name, load, dims)
-			if twice := plain(t, family.Name, load, scaled(family, dims, 1<<20)); math.Abs(twice.Value/at.Value-1) > 1e-10 {
+			factor := func(by float64) verify.Estimate {
+				return finding(t, family.Name, load, scaled(family, dims, by), scf.Options{}, 1e-3).Computed.Factor
+			}
+			at := factor(1)
+			if twice := factor(1 << 20); math.Abs(twice.Value/at.Value-1) > 1e-10 {
 				t.Errorf("%s %s: %.15g and %.15g", family.Name, load, at.Value, twice.Value)
 			}
-			same(t, family.Name+" "+string(load), plain(t, family.Name, load, scaled(family, dims, 1/25.4)), at, 0)
+			same(t, family.Name+" "+string(load), factor(1/25.4), at, 0)
 		}
 	}
 }
@@ -184,4 +193,58 @@ func ordinary(family string) scf.Dims {
 func loadsOf(family string) []scf.Load {
 	f, _ := scf.Lookup(family)
 	return f.Loads
+}
+
+// The angle up the arc counts from the bottom of a notch, the net section of a
+// hole, the foot of a fillet; other places that compete are told.
+func TestPlacesOfPeaks(t *testing.T) {
+	for _, c := range []struct {
+		family     string
+		load       scf.Load
+		dims       scf.Dims
+		x, y       float64 // where it sits; NaN: anywhere on the arc
+		low, high  float64 // degrees up the arc
+		others     int
+		otherwhere bool // the others are at −x
+	}{
+		{"bar-notch", scf.Tension, scf.Dims{"D": 60, "d": 40, "r": 5}, 0, 20, 0, 0.1, 0, false},
+		{"shaft-groove", scf.Torsion, scf.Dims{"D": 60, "d": 40, "r": 5}, 0, 20, 0, 0.1, 0, false},
+		{"bar-edge-notch", scf.Bending, scf.Dims{"D": 60, "d": 40, "r": 5}, 0, 10, 0, 0.1, 0, false},
+		{"bar-hole", scf.Tension, scf.Dims{"W": 60, "d": 20}, 0, 10, 0, 0.1, 0, false},
+		{"bar-hole", scf.Tension, scf.Dims{"W": 60, "d": 20, "e": 8}, 0, 18, 0, 0.1, 1, true},
+		{"bar-hole", scf.Bending, scf.Dims{"W": 60, "d": 10, "e": -20}, 0, -25, 0, 0.1, 1, true},
+		{"bar-ellipse", scf.Bending, scf.Dims{"W": 60, "a": 20, "b": 5}, 0, 20, 0, 0.1, 0, false},
+		{"bar-shoulder", scf.Tension, scf.Dims{"D": 72, "d": 48, "r": 3}, math.NaN(), math.NaN(), 15, 22, 0, false},
+		{"shaft-ring-groove", scf.Bending, scf.Dims{"D": 60, "d": 50, "r": 1, "w": 8}, math.NaN(), math.NaN(), 10, 30, 1, true},
+		{"shaft-collar", scf.Tension, scf.Dims{"D": 60, "d": 40, "r": 3, "L": 20}, math.NaN(), math.NaN(), 10, 30, 1, true},
+	} {
+		k := &finding(t, c.family, c.load, c.dims, scf.Options{}, 1e-3).Computed
+		what := fmt.Sprint(c.family, " ", c.load, " ", c.dims)
+		if at := k.Peak; math.Abs(at.X-c.x) > 0.01 || math.Abs(at.Y-c.y) > 0.001 || at.ArcDegrees < c.low || at.ArcDegrees > c.high {
+			t.Errorf("%s: peak at %g, %g, %g° up the arc", what, at.X, at.Y, at.ArcDegrees)
+		}
+		if len(k.Others) != c.others {
+			t.Errorf("%s: others %v, want %d", what, k.Others, c.others)
+		}
+		for _, o := range k.Others {
+			if c.otherwhere && math.Abs(o.X+k.Peak.X) > 0.02 {
+				t.Errorf("%s: peak at %g and another at %g", what, k.Peak.X, o.X)
+			}
+		}
+	}
+}
+
+// The edge of a bar with a hole in bending carries W/d times the hole's nominal
+// stress: a warning says so where that is more than the hole's factor, and not
+// where it is less. The factor stays the hole's.
+func TestWarnsOfHigherStressOffTheNotch(t *testing.T) {
+	for d, warns := range map[float64]bool{10: true, 20: true, 50: false} {
+		f := finding(t, "bar-hole", scf.Bending, scf.Dims{"W": 60, "d": d}, scf.Options{}, 1e-3)
+		if (len(f.Warnings) > 0) != warns || f.Computed.Peak.Side != "hole" || f.Computed.Factor.Value > 2.01 {
+			t.Errorf("d = %g: factor %.4f on %s, warnings %q", d, f.Computed.Factor.Value, f.Computed.Peak.Side, f.Warnings)
+		}
+		if warns && f.Computed.Others[len(f.Computed.Others)-1].Side != "edge" {
+			t.Errorf("d = %g: the edge is not among the other places %v", d, f.Computed.Others)
+		}
+	}
 }
