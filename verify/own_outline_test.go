@@ -3,6 +3,9 @@ package verify
 import (
 	"context"
 	"math"
+	"os"
+	"path/filepath"
+	"strings"
 	"testing"
 
 	"notchproof/scf"
@@ -132,4 +135,51 @@ func TestSameShapeOtherwisePlaced(t *testing.T) {
 	whole := factors(t, readPart(t, `{"shape": {"model": "bar",
 		"outline": "M -180 -30 H 0 V -25 A 5 5 0 0 0 5 -20 H 130 V 20 H 5 A 5 5 0 0 0 0 25 V 30 H -180 Z"}}`), Options{})
 	compare("whole", half, whole, 0)
+}
+
+// Every example converges, passes its checks and stays on the notch.
+func TestExamplePartsAreSettled(t *testing.T) {
+	names, err := filepath.Glob("../testdata/parts/*.json")
+	if err != nil || len(names) < 6 {
+		t.Fatal(names, err)
+	}
+	for _, name := range names {
+		data, err := os.ReadFile(name)
+		if err != nil {
+			t.Fatal(err)
+		}
+		p := readPart(t, string(data))
+		for load, e := range factors(t, p, Options{}) {
+			if !e.Status.Settled() || !(e.Value > 1) || e.Uncertainty > 1e-3*e.Value {
+				t.Errorf("%s, %s: %v", name, load, e)
+			}
+		}
+	}
+}
+
+// A corner without a radius is named and has no factor; elsewhere it takes
+// nothing from the factor of the notch.
+func TestSharpCornerHasNoFactor(t *testing.T) {
+	p := readPart(t, `{"shape": {"model": "shaft", "outline": "M -216 0 H 147 V 24 H 0 V 36 H -216 Z"}}`)
+	if len(p.Sharp) != 1 || p.Sharp[0].At.X != 0 || p.Sharp[0].At.Y != 24 || math.Abs(p.Sharp[0].Degrees-270) > 1e-9 {
+		t.Fatalf("sharp corners %+v", p.Sharp)
+	}
+	for load, power := range map[scf.Load]string{scf.Bending: "distance^-0.456", scf.Torsion: "distance^-0.333"} {
+		r, err := Run(t.Context(), p, []scf.Load{load}, Options{})
+		if err != nil {
+			t.Fatal(err)
+		}
+		f := r.Findings[0]
+		if f.Verdict != Undecided || len(f.Because) == 0 || !strings.Contains(f.Because[0], "x = 0, y = 24 (270°") || !strings.Contains(f.Because[0], power) {
+			t.Errorf("%s: %v because %q", load, f.Verdict, f.Because)
+		}
+	}
+	p = readPart(t, `{"shape": {"model": "shaft", "outline": "M -216 0 H 267 V 24 H 120 V 28 H 3 A 3 3 0 0 0 0 31 V 36 H -216 Z"}}`)
+	r, err := Run(t.Context(), p, []scf.Load{scf.Torsion}, Options{})
+	if err != nil {
+		t.Fatal(err)
+	}
+	if f := r.Findings[0]; f.Verdict == Undecided || len(f.Warnings) == 0 || !strings.Contains(strings.Join(f.Warnings, "\n"), "x = 120, y = 24") {
+		t.Errorf("%v, warnings %q", f.Verdict, f.Warnings)
+	}
 }
