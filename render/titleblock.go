@@ -140,7 +140,7 @@ func sideText(f *verify.Finding) string {
 	if !c.Factor.Status.Settled() {
 		return ""
 	}
-	return fmt.Sprintf("von Mises %s   gross section %s   %s",
+	return fmt.Sprintf("von Mises %s   gross section %s   ladder %s",
 		number.Decimal(c.VonMises.Value, 3), number.Decimal(c.Gross, 3), c.Factor.Status)
 }
 

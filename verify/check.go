@@ -78,7 +78,9 @@ func (c *climb) finding(ctx context.Context) (Finding, error) {
 	computed.Gross = computed.Factor.Value * c.load.Nominal.Net / c.load.Nominal.Gross
 	f := Finding{Load: c.load, Computed: computed}
 	f.places(c.part)
-	f.Checks = c.checks(s, &computed)
+	if f.Checks = computed.checks; f.Checks == nil {
+		f.Checks = c.checks(s, &computed)
+	}
 	f.judge(c.part, c.options)
 	return f, nil
 }

@@ -25,10 +25,6 @@ func stages() []stage {
 	}
 }
 
-// enoughRungs is the least number of rungs from which a limit and its
-// uncertainty can be told.
-const enoughRungs = 3
-
 // A climb is the ladder of one part under one load.
 type climb struct {
 	part    *specimen.Part
@@ -71,7 +67,8 @@ func (c *climb) met(e Estimate) bool {
 // sound tells that all checks pass. The factor may be there before the stress
 // far off is, where elements are large.
 func (c *climb) sound(s *shape, out *Computed) bool {
-	for _, check := range c.checks(s, out) {
+	out.checks = c.checks(s, out)
+	for _, check := range out.checks {
 		if !check.Passed {
 			return false
 		}
@@ -91,6 +88,7 @@ func (c *climb) step(ctx context.Context, s *shape, order int, out *Computed) er
 	out.Ladder = append(out.Ladder, rung)
 	out.Last, out.peaks = sol, peaks
 	out.estimate()
+	out.checks = nil // those of the rung before
 	return nil
 }
 

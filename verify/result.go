@@ -37,7 +37,8 @@ type Computed struct {
 	Ladder   []Rung
 	Last     *fem.Solution // of the last rung
 
-	peaks []fem.SurfacePoint
+	peaks  []fem.SurfacePoint
+	checks []Check // of the last rung, nil where not yet made
 }
 
 // A Peak is a local maximum of the stress on the notch.

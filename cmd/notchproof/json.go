@@ -3,6 +3,7 @@ package main
 import (
 	"encoding/json"
 	"io"
+	"math"
 
 	"notchproof/scf"
 	"notchproof/verify"
@@ -35,6 +36,16 @@ type jsonFinding struct {
 	Misreadings []jsonMisreading `json:"misreadings"`
 }
 
+// maybe is a number that may be missing: null where a ladder has no value.
+type maybe float64
+
+func (m maybe) MarshalJSON() ([]byte, error) {
+	if v := float64(m); math.IsNaN(v) || math.IsInf(v, 0) {
+		return []byte("null"), nil
+	}
+	return json.Marshal(float64(m))
+}
+
 type jsonNominal struct {
 	Section string   `json:"section"`
 	Formula string   `json:"formula"`
@@ -42,10 +53,10 @@ type jsonNominal struct {
 }
 
 type jsonComputed struct {
-	Factor      float64    `json:"factor"`
-	Uncertainty float64    `json:"uncertainty"`
-	VonMises    float64    `json:"vonMises"`
-	Gross       float64    `json:"gross"`
+	Factor      maybe      `json:"factor"`
+	Uncertainty maybe      `json:"uncertainty"`
+	VonMises    maybe      `json:"vonMises"`
+	Gross       maybe      `json:"gross"`
 	At          jsonPlace  `json:"at"`
 	Status      string     `json:"status"`
 	Ladder      []jsonRung `json:"ladder"`
@@ -77,7 +88,7 @@ type jsonHandbook struct {
 	InRange    bool           `json:"inRange"`
 	Accuracy   float64        `json:"accuracy"`
 	Source     string         `json:"source"`
-	Difference float64        `json:"difference"`
+	Difference maybe          `json:"difference"`
 	Verdict    verify.Verdict `json:"verdict"`
 	Warnings   []string       `json:"warnings"`
 }
@@ -86,13 +97,13 @@ type jsonClaim struct {
 	Factor     float64        `json:"factor"`
 	Source     string         `json:"source"`
 	Tolerance  float64        `json:"tolerance"`
-	Difference float64        `json:"difference"`
+	Difference maybe          `json:"difference"`
 	Verdict    verify.Verdict `json:"verdict"`
 }
 
 type jsonCheck struct {
 	Name   string  `json:"name"`
-	Value  float64 `json:"value"`
+	Value  maybe   `json:"value"`
 	Limit  float64 `json:"limit"`
 	Passed bool    `json:"passed"`
 }
@@ -123,8 +134,8 @@ func jsonOf(f *verify.Finding) jsonFinding {
 		Load:    f.Load.Name,
 		Nominal: jsonNominal{f.Load.Nominal.Section, f.Load.Nominal.Formula, f.Load.Nominal.Notes},
 		Computed: jsonComputed{
-			Factor: c.Factor.Value, Uncertainty: c.Factor.Uncertainty,
-			VonMises: c.VonMises.Value, Gross: c.Gross,
+			Factor: maybe(c.Factor.Value), Uncertainty: maybe(c.Factor.Uncertainty),
+			VonMises: maybe(c.VonMises.Value), Gross: maybe(c.Gross),
 			At:     jsonPlace{c.Peak.X, c.Peak.Y, c.Peak.ArcDegrees},
 			Status: c.Factor.Status.String(),
 			Ladder: []jsonRung{},
@@ -141,14 +152,14 @@ func jsonOf(f *verify.Finding) jsonFinding {
 	for _, h := range f.Handbook {
 		out.Handbook = append(out.Handbook, jsonHandbook{
 			h.Value.ID, h.Value.Factor, h.Value.InRange, h.Value.Accuracy, h.Value.Source,
-			h.Difference, h.Verdict, append(append([]string{}, h.Value.Outside...), h.Value.Warnings...),
+			maybe(h.Difference), h.Verdict, append(append([]string{}, h.Value.Outside...), h.Value.Warnings...),
 		})
 	}
 	if f.Claim != nil {
-		out.Claim = &jsonClaim{f.Claim.Factor, f.Claim.Claim.From, f.Claim.Tolerance, f.Claim.Difference, f.Claim.Verdict}
+		out.Claim = &jsonClaim{f.Claim.Factor, f.Claim.Claim.From, f.Claim.Tolerance, maybe(f.Claim.Difference), f.Claim.Verdict}
 	}
 	for _, k := range f.Checks {
-		out.Checks = append(out.Checks, jsonCheck{k.Name, k.Value, k.Limit, k.Passed})
+		out.Checks = append(out.Checks, jsonCheck{k.Name, maybe(k.Value), k.Limit, k.Passed})
 	}
 	for _, m := range f.Misreadings {
 		out.Misreadings = append(out.Misreadings, jsonMisreading{m.What, m.Factor})
