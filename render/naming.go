@@ -81,19 +81,6 @@ func nominalText(l *specimen.Load) string {
 	return text
 }
 
-// arcText says what the angle at a peak is counted from.
-func arcText(part *specimen.Part) string {
-	switch part.Name {
-	case "bar-notch", "bar-edge-notch", "shaft-groove":
-		return "from the bottom"
-	case "bar-hole", "bar-ellipse":
-		return "from the net section"
-	case "outline":
-		return "between normal and transverse"
-	}
-	return "up the arc"
-}
-
 func verdictText(v verify.Verdict) string {
 	switch v {
 	case verify.Agrees:

@@ -184,5 +184,5 @@ func peakText(f *verify.Finding, part *specimen.Part) string {
 	if part.Unit != "" {
 		at += "\u00a0" + part.Unit
 	}
-	return "peak on the " + p.Side + " at " + at + ", " + number.Decimal(p.ArcDegrees, 1) + "° " + arcText(part)
+	return "peak on the " + p.Side + " at " + at + ", " + number.Decimal(p.ArcDegrees, 1) + "° " + part.AngleFrom()
 }

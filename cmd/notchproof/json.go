@@ -30,6 +30,7 @@ type jsonFinding struct {
 	Computed    jsonComputed     `json:"computed"`
 	Handbook    []jsonHandbook   `json:"handbook"`
 	Claim       *jsonClaim       `json:"claim,omitempty"`
+	Warnings    []string         `json:"warnings"`
 	Checks      []jsonCheck      `json:"checks"`
 	Verdict     verify.Verdict   `json:"verdict"`
 	Because     []string         `json:"because"`
@@ -141,7 +142,8 @@ func jsonOf(f *verify.Finding) jsonFinding {
 			Ladder: []jsonRung{},
 		},
 		Handbook: []jsonHandbook{}, Checks: []jsonCheck{}, Misreadings: []jsonMisreading{},
-		Verdict: f.Verdict, Because: append([]string{}, f.Because...),
+		Warnings: append([]string{}, f.Warnings...),
+		Verdict:  f.Verdict, Because: append([]string{}, f.Because...),
 	}
 	for _, r := range c.Ladder {
 		out.Computed.Ladder = append(out.Computed.Ladder, jsonRung{r.Order, r.Triangles, r.Unknowns, r.Factor})

@@ -19,7 +19,7 @@ func writeText(w io.Writer, r *verify.Result, s style) error {
 	}
 	fmt.Fprintf(&b, "%s  %s\n", s.bold(r.Part.Name), dimensionText(r.Part))
 	for i := range r.Findings {
-		findingText(&b, &r.Findings[i], r.Part.Unit, s)
+		findingText(&b, &r.Findings[i], r.Part, s)
 	}
 	b.WriteString("\n" + caution)
 	_, err := io.WriteString(w, b.String())
@@ -44,7 +44,8 @@ func dimensionText(p *specimen.Part) string {
 	return strings.Join(append(words, "ν = "+number.Compact(p.Options.Nu, 4)), ", ")
 }
 
-func findingText(b *strings.Builder, f *verify.Finding, unit string, s style) {
+func findingText(b *strings.Builder, f *verify.Finding, part *specimen.Part, s style) {
+	unit := part.Unit
 	c := &f.Computed
 	n := f.Load.Nominal
 	fmt.Fprintf(b, "\n%s, nominal stress %s (%s)\n", s.bold(string(f.Load.Name)), n.Formula, n.Section)
@@ -62,14 +63,17 @@ func findingText(b *strings.Builder, f *verify.Finding, unit string, s style) {
 		fmt.Fprintf(b, "             von Mises %s; on the gross section %s\n",
 			number.Uncertain(c.VonMises.Value, c.VonMises.Uncertainty), number.Uncertain(c.Gross, c.Gross/c.Factor.Value*c.Factor.Uncertainty))
 	}
-	fmt.Fprintf(b, "             peak at x = %s, y = %s, %.1f° up the arc (%s)\n",
-		number.Length(round(c.Peak.X, 4), unit), number.Length(round(c.Peak.Y, 4), unit), c.Peak.ArcDegrees, c.Peak.Side)
+	fmt.Fprintf(b, "             peak on the %s at x = %s, y = %s, %.1f° %s\n", c.Peak.Side,
+		number.Length(round(c.Peak.X, 4), unit), number.Length(round(c.Peak.Y, 4), unit), c.Peak.ArcDegrees, part.AngleFrom())
 	if k := len(c.Ladder); k > 0 {
 		last := c.Ladder[k-1]
 		fmt.Fprintf(b, "             %d rungs to order %d on %s, %s unknowns; %s\n",
 			k, last.Order, number.CountOf(last.Triangles, "triangle", "triangles"), number.Count(last.Unknowns), c.Factor.Status)
 	}
 	othersText(b, c, unit)
+	for _, warning := range f.Warnings {
+		fmt.Fprintf(b, "  %s %s\n", s.weak("warning"), warning)
+	}
 	if f.Claim != nil {
 		from := f.Claim.Claim.From
 		if from != "" {
