@@ -17,9 +17,11 @@ func partsCommand() *command {
 		short: "list the families of parts, or show one with its dimensions",
 		long: `Without arguments lists the families with their dimensions and loads. With a
 family explains its dimensions and what is published on it; with -o draws a
-dimensioned sketch, of the dimensions given or of typical ones.
+dimensioned sketch, of the dimensions given or of typical ones. --as-file prints
+the part as a part file with its outline, to start one of your own from.
 
   notchproof parts shaft-shoulder -o sketch.png
+  notchproof parts shaft-shoulder D=72mm d=48mm r=3mm --as-file > shaft.json
 `,
 		run: runParts,
 	}
@@ -28,12 +30,16 @@ dimensioned sketch, of the dimensions given or of typical ones.
 func runParts(c *call) (int, error) {
 	var q questions
 	file := c.flags.StringP("output", "o", "", "write a dimensioned sketch to this PNG file")
+	asFile := c.flags.Bool("as-file", false, "print the part as a part file")
 	q.partFlags(c.flags)
 	args, err := c.parse()
 	if err != nil {
 		return 0, err
 	}
 	if len(args) == 0 {
+		if *asFile {
+			return 0, &inputError{text: "no family to write", hint: "name one, as in: parts shaft-shoulder --as-file"}
+		}
 		if *file != "" {
 			return 0, &inputError{text: "no family to sketch", hint: "name one, as in: parts shaft-shoulder -o sketch.png"}
 		}
@@ -59,6 +65,9 @@ func runParts(c *call) (int, error) {
 	if err := checkOutput(*file, ".png"); err != nil {
 		return 0, err
 	}
+	if *asFile {
+		return exitAgrees, printAsFile(c.stdout, part)
+	}
 	if err := describe(c.stdout, family, part, len(args) > 1); err != nil {
 		return 0, err
 	}
@@ -71,6 +80,14 @@ func runParts(c *call) (int, error) {
 	}
 	fmt.Fprintf(c.stdout, "\nsketch written to %s\n", *file)
 	return exitAgrees, nil
+}
+
+func printAsFile(w io.Writer, part *specimen.Part) error {
+	text, err := part.AsFile()
+	if err == nil {
+		_, err = w.Write(text)
+	}
+	return err
 }
 
 func listFamilies(w io.Writer) error {
