@@ -75,6 +75,10 @@ func drawingFault(key, value, reason, hint string) error {
 	return &InputError{What: key, Value: value, Reason: reason, Hint: hint}
 }
 
+// mostSides bounds the work that an outline takes before it is meshed, which
+// goes with the square of their number.
+const mostSides = 2000
+
 // A sheet holds the loops of a drawing, side by side with what the drawing
 // says of each side. The outer loop is the first.
 type sheet [][]drawnSide
@@ -107,6 +111,13 @@ func (o *Drawing) sheet() (sheet, error) {
 	}
 	if o.Kind == scf.Shaft && o.Mirror {
 		return nil, drawingFault("mirror", "true", "a shaft is drawn as a half already", "leave it out")
+	}
+	count := 0
+	for _, loop := range loops {
+		count += len(loop)
+	}
+	if count > mostSides {
+		return nil, drawingFault("outline", "", fmt.Sprintf("%d sides, more than %d", count, mostSides), "draw it with fewer, longer curves")
 	}
 	named, wanted := maps.Clone(o.Names), make(map[string]bool)
 	for _, n := range o.Notch {
@@ -151,6 +162,16 @@ func (o *Drawing) sheet() (sheet, error) {
 		}
 	}
 	return s.joined(), nil
+}
+
+// nameAsDrawn tells whether a name is of the kind that sides and holes have
+// before they are named: L1, A2, C3, hole 4.
+func nameAsDrawn(name string) bool {
+	digits := strings.TrimPrefix(name, "hole ")
+	if digits == name && name != "" && strings.IndexByte("LAC", name[0]) >= 0 {
+		digits = name[1:]
+	}
+	return digits != name && digits != "" && strings.Trim(digits, "0123456789") == ""
 }
 
 func unknownSide(key, name string, known []string) error {

@@ -59,7 +59,7 @@ func findEnd(r *outline.Region, side float64) (int, error) {
 
 // plainStretch follows the two sides that meet an end as far as they run along
 // the axis and nothing else comes beside them. Where they do not run along it
-// the stretch has no length.
+// the stretch has next to no length.
 func plainStretch(r *outline.Region, end int, side float64) Plain {
 	n := len(r.Outer)
 	l := r.Outer[end].Curve.(outline.Line)
@@ -68,7 +68,8 @@ func plainStretch(r *outline.Region, end int, side float64) Plain {
 	if side > 0 {
 		name = "right end"
 	}
-	plain := Plain{Name: name, From: l.A.X, To: l.A.X, Low: math.Min(l.A.Y, l.B.Y), High: math.Max(l.A.Y, l.B.Y), End: end}
+	// A stretch of next to no length still tells which way its end faces.
+	plain := Plain{Name: name, From: l.A.X - float64(side*slack(r)), To: l.A.X, Low: math.Min(l.A.Y, l.B.Y), High: math.Max(l.A.Y, l.B.Y), End: end}
 	if !alongAxis(r.Outer[before].Curve) || !alongAxis(r.Outer[after].Curve) {
 		return plain
 	}
@@ -84,7 +85,7 @@ func plainStretch(r *outline.Region, end int, side float64) Plain {
 	for _, i := range []int{before, after} {
 		limit = math.Min(limit, r2.Norm(r2.Sub(r.Outer[i].Curve.At(1), r.Outer[i].Curve.At(0))))
 	}
-	plain.From = plain.To - float64(side*math.Max(0, limit))
+	plain.From = plain.To - float64(side*math.Max(slack(r), limit))
 	return plain
 }
 

@@ -156,6 +156,7 @@ func hostileFiles() []struct{ name, file, place, key, reason string } {
 		{"notch empty", shapeOf(bar + `, "notch": []`), "1:101", "shape.notch", "no sides"},
 		{"notch on an end", shapeOf(bar + `, "notch": ["L2"]`), "1:101", "shape.notch", "no notch"},
 		{"name of nothing", shapeOf(bar + `, "names": {"A9": "x"}`), "1:101", "shape.names", "no such side"},
+		{"name as drawn", shapeOf(bar + `, "names": {"A4": "L3"}`), "1:108", "shape.names.A4", "name of the kind"},
 		{"nominal", shapeOf(bar + `, "nominal": {"y": 3}`), "1:104", "key in shape.nominal", "no such key"},
 		{"nominal of two kinds", shapeOf(bar + `, "nominal": {"x": 3, "from": [0, 0], "to": [0, 1]}`), "1:103", "shape.nominal", "not one section"},
 		{"nominal off the part", shapeOf(bar + `, "nominal": {"x": 300}`), "1:103", "shape.nominal", "no material"},
@@ -198,6 +199,15 @@ func TestHostileFiles(t *testing.T) {
 		var input *InputError
 		if !errors.As(err, &input) || input.Hint == "" && fault.What != "file" && !strings.Contains(text, "hole is not") {
 			t.Errorf("%s: %q: no hint", h.name, text)
+		}
+	}
+}
+
+func TestNameAsDrawn(t *testing.T) {
+	for name, want := range map[string]bool{"L1": true, "A25": true, "C3": true, "hole 12": true,
+		"": false, "L": false, "A4b": false, "M1": false, "hole": false, "hole ": false, "fillet": false, "l1": false, "L 1": false} {
+		if nameAsDrawn(name) != want {
+			t.Errorf("%q: %t", name, !want)
 		}
 	}
 }

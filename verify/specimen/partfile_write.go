@@ -97,7 +97,7 @@ func (p *Part) kind() scf.Kind {
 func (p *Part) namesAsWritten() (names map[string]string, notch []string) {
 	names = make(map[string]string)
 	take := func(i int, drawn, name string) {
-		if name != "" && name != drawn {
+		if name != "" && !nameAsDrawn(name) {
 			names[drawn] = name
 		}
 		if slices.Contains(p.Notch, i) && !slices.Contains(notch, drawn) {

@@ -4,8 +4,6 @@ import (
 	"errors"
 	"unicode/utf8"
 
-	"gonum.org/v1/gonum/spatial/r2"
-
 	"notchproof/mesh/outline"
 	"notchproof/scf"
 )
@@ -15,106 +13,6 @@ var (
 	outlineKeys = []string{"model", "unit", "outline", "holes", "names", "notch", "nominal", "mirror", "forceLine"}
 	nominalKeys = []string{"x", "from", "to", "fibre"}
 )
-
-// family draws a family with its dimensions.
-func (d *document) family(n *node, o scf.Options) (*Part, error) {
-	name, err := d.text(n.member("family"))
-	if err != nil {
-		return nil, err
-	}
-	family, ok := scf.Lookup(name)
-	if !ok {
-		var names []string
-		for _, f := range scf.Families() {
-			names = append(names, f.Name)
-		}
-		hint := "notchproof parts lists the families"
-		if near := Nearest(name, names, len(name)/2); near != "" {
-			hint = "did you mean " + near + "? " + hint
-		}
-		return nil, d.refuse(n.member("family"), "no such family of parts", hint)
-	}
-	keys := []string{"family", "forceLine"}
-	for _, dim := range family.Dimensions {
-		keys = append(keys, dim.Name)
-	}
-	if err := d.object(n, keys...); err != nil {
-		return nil, err
-	}
-	dims, unit, err := d.dimensions(n, family)
-	if err != nil {
-		return nil, err
-	}
-	p, err := New(family, dims, unit, o)
-	return p, d.dimensionFault(n, err)
-}
-
-// dimensions reads a family's dimensions in one unit.
-func (d *document) dimensions(n *node, family *scf.Family) (scf.Dims, string, error) {
-	dims := make(scf.Dims)
-	var lengths []Dimension
-	for _, dim := range family.Dimensions {
-		v := n.member(dim.Name)
-		if v == nil {
-			continue
-		}
-		if dim.Angle {
-			a, err := d.angle(v)
-			if err != nil {
-				return nil, "", err
-			}
-			dims[dim.Name] = a
-			continue
-		}
-		l, err := d.length(v)
-		if err != nil {
-			return nil, "", err
-		}
-		lengths = append(lengths, Dimension{dim.Name, l})
-	}
-	values, unit, err := Common(lengths)
-	if err != nil {
-		return nil, "", d.under(n, err)
-	}
-	for i, l := range lengths {
-		dims[l.Name] = values[i]
-	}
-	return dims, unit, nil
-}
-
-// dimensionFault places a fault that a family found in its dimensions.
-func (d *document) dimensionFault(n *node, err error) error {
-	var fault *scf.DimensionError
-	if err == nil || !errors.As(err, &fault) {
-		return d.placed(n, err)
-	}
-	if v := n.member(fault.Name); v != nil {
-		return d.refuse(v, fault.Reason, fault.Hint)
-	}
-	return d.fail(n.at, InputError{What: n.path + "." + fault.Name, Reason: fault.Reason, Hint: fault.Hint})
-}
-
-// under places a fault whose What names a member, or a member of a member.
-func (d *document) under(n *node, err error) error {
-	var fault *InputError
-	if err == nil || !errors.As(err, &fault) {
-		return d.placed(n, err)
-	}
-	at := n
-	for _, m := range n.members {
-		if m.name == fault.What {
-			at = m.value
-		}
-		for _, inner := range m.value.members {
-			if m.name+"."+inner.name == fault.What {
-				at = inner.value
-			}
-		}
-	}
-	placed := *fault
-	placed.What = n.path + "." + fault.What
-	return d.fail(at.at, placed)
-}
 
 // outline draws an outline of the user's own.
 func (d *document) outline(n *node, o scf.Options) (*Part, error) {
@@ -236,6 +134,9 @@ func (d *document) names(n *node) (map[string]string, error) {
 		if s == "" {
 			return nil, d.refuse(m.value, "empty name", "give it a name or leave it out")
 		}
+		if nameAsDrawn(s) {
+			return nil, d.refuse(m.value, "name of the kind that sides have as drawn", "call it by what it is, such as fillet")
+		}
 		names[m.name] = s
 	}
 	return names, nil
@@ -256,56 +157,4 @@ func (d *document) notch(n *node) ([]string, error) {
 		err = d.refuse(n, "no sides", hint)
 	}
 	return sides, err
-}
-
-// nominal reads which section the nominal stress is taken on.
-func (d *document) nominal(n *node, own *Drawing) error {
-	if err := d.object(n, nominalKeys...); err != nil {
-		return err
-	}
-	read := func(v *node) (float64, error) {
-		l, err := d.length(v)
-		if err != nil {
-			return 0, err
-		}
-		if l.Unit != "" && own.Unit == "" {
-			return 0, d.refuse(v, "the outline's unit has no name", "write plain numbers, or give the shape its unit")
-		}
-		if l.Unit == "" {
-			return l.Value, nil
-		}
-		return l.In(own.Unit), nil
-	}
-	x, from, to, fibre := n.member("x"), n.member("from"), n.member("to"), n.member("fibre")
-	if (x != nil) == (from != nil) || (from != nil) != (to != nil) {
-		return d.refuse(n, "not one section", `give {"x": …}, or {"from": [x, y], "to": [x, y]}`)
-	}
-	section := &Section{}
-	points := []*r2.Vec{&section.From, &section.To}
-	for i, v := range []*node{from, to} {
-		if v == nil {
-			continue
-		}
-		if v.kind != isList || len(v.items) != 2 {
-			return d.refuse(v, "not a point", "write [x, y]")
-		}
-		for k, c := range []*float64{&points[i].X, &points[i].Y} {
-			var err error
-			if *c, err = read(v.items[k]); err != nil {
-				return err
-			}
-		}
-	}
-	var err error
-	if x != nil {
-		section.Across = true
-		section.From.X, err = read(x)
-	}
-	if fibre != nil && err == nil {
-		var y float64
-		y, err = read(fibre)
-		section.Fibre = &y
-	}
-	own.Nominal = section
-	return err
 }
