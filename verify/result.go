@@ -68,6 +68,8 @@ type Check struct {
 	Limit  float64
 	Above  bool // the value must be above the limit, not below it
 	Passed bool
+
+	discretisation bool // a finer rung may mend it
 }
 
 func below(name string, value, limit float64) Check {
