@@ -10,6 +10,7 @@ import (
 
 	"notchproof/scf"
 	"notchproof/verify"
+	"notchproof/verify/specimen"
 )
 
 // questions are the flags that the commands share.
@@ -117,20 +118,7 @@ func (q *questions) claimed() (*verify.Claim, error) {
 	if err != nil || tolerance < 0 || tolerance > 0.5 {
 		return nil, &inputError{text: "--claim-tolerance " + quoted(q.claimTolerance) + ": not a tolerance", hint: "give a share of the claim, as in 3% or 0.03"}
 	}
-	return &verify.Claim{Factor: factor, LastDigit: lastDigit(q.claim), Reading: tolerance, From: q.claimFrom}, nil
-}
-
-// lastDigit is one unit of the last digit of a number as it was written.
-func lastDigit(text string) float64 {
-	mantissa, exponent := strings.ToLower(text), 0
-	if m, e, ok := strings.Cut(mantissa, "e"); ok {
-		mantissa = m
-		exponent, _ = strconv.Atoi(e)
-	}
-	if _, decimals, ok := strings.Cut(mantissa, "."); ok {
-		exponent -= len(decimals)
-	}
-	return math.Pow10(exponent)
+	return &verify.Claim{Factor: factor, LastDigit: specimen.LastDigit(q.claim), Reading: tolerance, From: q.claimFrom}, nil
 }
 
 // plainNumber reads a plain finite decimal number.

@@ -9,6 +9,8 @@ import (
 	"path/filepath"
 	"strings"
 	"testing"
+
+	"notchproof/verify/specimen"
 )
 
 // program runs the command line as a user types it, words parted by spaces.
@@ -228,7 +230,7 @@ func keys(v any) (list []string) {
 // TestLastDigit: one unit of the last digit as the number was written.
 func TestLastDigit(t *testing.T) {
 	for text, want := range map[string]float64{"1.85": 0.01, "2": 1, "2.0": 0.1, "1.850": 0.001, "18e-1": 0.1, "1.85e1": 0.1} {
-		if got := lastDigit(text); math.Abs(got/want-1) > 1e-12 {
+		if got := specimen.LastDigit(text); math.Abs(got/want-1) > 1e-12 {
 			t.Errorf("%s: %g, want %g", text, got, want)
 		}
 	}
