@@ -154,7 +154,7 @@ func TestCheckSays(t *testing.T) {
 		{"shaft-shoulder", Dims{"D": 1e308, "d": 40, "r": 2}, "D=1e+308: larger than 1e+15"},
 		{"shaft-shoulder", Dims{"D": 40, "d": 60, "r": 2}, "d=60: not smaller than D = 40"},
 		{"shaft-shoulder", Dims{"D": 40, "d": 40, "r": 2}, "d=40: not smaller than D = 40"},
-		{"shaft-shoulder", Dims{"D": 1e6, "d": 40, "r": 2}, "d=40: D/d = 25000 is above 10000"},
+		{"shaft-shoulder", Dims{"D": 1e6, "d": 40, "r": 2}, "d=40: D/d = 25000 is above 300"},
 		{"shaft-shoulder", Dims{"D": 40.00001, "d": 40, "r": 2}, "d=40: D/d − 1 = 2.5e-07 is below 1e-06"},
 		{"shaft-shoulder", Dims{"D": 60, "d": 40, "r": 1e-6}, "r=1e-06: r/D = 1.66667e-08 is below 1e-06"},
 		{"shaft-shoulder", Dims{"D": 60, "d": 40, "r": 1e6}, "r=1e+06: radius 1e+06 is more than 100 times D = 60"},

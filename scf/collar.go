@@ -13,6 +13,10 @@ func collarDimensions(size string) []Dimension {
 	}
 }
 
+// thinnestDisc is the least thickness of a collar over its height: bending
+// stiffness goes with the third power, and what is thinner is lost in rounding.
+const thinnestDisc = 1e-3
+
 func checkCollar(dims Dims) error {
 	s, L := stepOf(dims), dims["L"]
 	if err := checkStep(s.D, s.d, s.r); err != nil {
@@ -20,6 +24,12 @@ func checkCollar(dims Dims) error {
 	}
 	if err := notBelow("L", L, "L/D", L, s.D); err != nil {
 		return err
+	}
+	if L < thinnestDisc*s.h() {
+		return &DimensionError{Name: "L", Value: L,
+			Reason: "L/h = " + short(L/s.h()) + " of the height h = (D−d)/2 is below " + short(thinnestDisc),
+			Hint:   "a thinner disc cannot be solved",
+		}
 	}
 	if err := notLonger("L", L, "length", L, "D", s.D); err != nil {
 		return err

@@ -7,7 +7,7 @@ import "math"
 // to show in the factor, and no tool makes it.
 const (
 	leastRatio  = 1e-6 // of a radius, step, ligament or length to the part's width
-	largestStep = 1e4  // D/d
+	largestStep = 300  // D/d; heavy parts on a thread: rounding takes over in bending
 	longestRun  = 100  // of a fillet, notch or groove along the axis, in part widths
 )
 
@@ -66,7 +66,7 @@ func checkStep(D, d, r float64) error {
 	case D/d > largestStep:
 		return &DimensionError{Name: "d", Value: d,
 			Reason: "D/d = " + short(D/d) + " is above " + short(largestStep),
-			Hint:   "such a step cannot be meshed; its factor is that of an endless shoulder",
+			Hint:   "such a step cannot be solved; its factor is that of an endless one",
 		}
 	case D-d < leastRatio*d:
 		return &DimensionError{Name: "d", Value: d,
