@@ -64,7 +64,7 @@ func related(rng *rand.Rand, dims scf.Dims, big float64) float64 {
 
 // Whatever a family accepts is drawn as a sound outline that can be meshed.
 func TestAcceptedDimensionsAreDrawn(t *testing.T) {
-	const trials = 300
+	const trials = 1500
 	for _, family := range scf.Families() {
 		t.Run(family.Name, func(t *testing.T) {
 			rng := rand.New(rand.NewPCG(1, 2))
@@ -86,7 +86,7 @@ func TestAcceptedDimensionsAreDrawn(t *testing.T) {
 				}
 				checkPart(t, p)
 				if accepted%8 == 0 {
-					if _, err := mesh.Generate(p.Region, mesh.Sizing{}); err != nil {
+					if _, err := mesh.Generate(p.Region, graded(p)); err != nil {
 						t.Errorf("%v: %v", dims, err)
 					}
 				}
@@ -96,6 +96,14 @@ func TestAcceptedDimensionsAreDrawn(t *testing.T) {
 			}
 		})
 	}
+}
+
+// graded asks for what a solve asks for at least: a few elements on every arc.
+func graded(p *Part) (s mesh.Sizing) {
+	for _, side := range p.Notch {
+		s.Sides = append(s.Sides, mesh.SideWish{Side: side, PerQuarter: 6})
+	}
+	return s
 }
 
 // checkPart holds a part's description against its outline.
