@@ -106,3 +106,15 @@ func TestBadPartFiles(t *testing.T) {
 		t.Errorf("status %d, %q", status, errs)
 	}
 }
+
+// A picture judges by the file's claim for the load that it shows.
+func TestPictureKnowsTheClaim(t *testing.T) {
+	path := write(t, "part.json", strings.Replace(smallPart, `"1.53"`, `"1.1"`, 1))
+	out := filepath.Join(t.TempDir(), "part.png")
+	if status, _, errs := called("picture", path, "-o", out, "--width", "400"); status != exitDisagrees {
+		t.Errorf("status %d, %s", status, errs)
+	}
+	if status, _, errs := called("picture", path, "-o", out, "--width", "400", "--load", "bending"); status != exitAgrees {
+		t.Errorf("status %d, %s", status, errs)
+	}
+}

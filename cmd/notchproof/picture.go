@@ -5,7 +5,6 @@ import (
 	"io"
 
 	"notchproof/render"
-	"notchproof/scf"
 	"notchproof/verify"
 )
 
@@ -49,17 +48,13 @@ func runPicture(c *call) (int, error) {
 	if err := checkOutput(*file, ".png"); err != nil {
 		return 0, err
 	}
-	part, load, err := q.one(args)
-	if err != nil {
-		return 0, err
-	}
-	options, err := q.verify([]scf.Load{load.Name})
+	job, load, err := q.one(args)
 	if err != nil {
 		return 0, err
 	}
 	bar := c.progress()
-	options.Progress = bar.tell
-	result, err := verify.Run(c.ctx, part, []scf.Load{load.Name}, options)
+	job.options.Progress = bar.tell
+	result, err := verify.Run(c.ctx, job.part, job.loads, job.options)
 	if err == nil {
 		bar.tell("drawing")
 		err = draw(*file, result, render.PictureOptions{Width: *width, Mesh: *mesh})
@@ -68,7 +63,7 @@ func runPicture(c *call) (int, error) {
 	if err != nil {
 		return 0, err
 	}
-	fmt.Fprintf(c.stdout, "%s, %s: picture written to %s\n", part.Name, load.Name, *file)
+	fmt.Fprintf(c.stdout, "%s, %s: picture written to %s\n", job.part.Name, load.Name, *file)
 	return statusOf(result), nil
 }
 

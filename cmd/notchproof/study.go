@@ -45,7 +45,7 @@ func runStudy(c *call) (int, error) {
 	if err != nil {
 		return 0, err
 	}
-	part, load, err := q.one(args)
+	job, load, err := q.one(args)
 	if err != nil {
 		return 0, err
 	}
@@ -57,7 +57,7 @@ func runStudy(c *call) (int, error) {
 		return 0, err
 	}
 	bar := c.progress()
-	s, err := climb(c.ctx, part, load, verify.StudyOptions{Order: *order, Rungs: *rungs, Progress: bar.tell})
+	s, err := climb(c.ctx, job.part, load, verify.StudyOptions{Order: *order, Rungs: *rungs, Progress: bar.tell})
 	bar.clear()
 	if err != nil {
 		return 0, err
@@ -82,8 +82,8 @@ func runStudy(c *call) (int, error) {
 }
 
 // one reads a part and the one load that a study or picture is about: the one
-// that is named, else the first that the part carries.
-func (q *questions) one(args []string) (*specimen.Part, *specimen.Load, error) {
+// that is named, else the first of those asked for.
+func (q *questions) one(args []string) (*job, *specimen.Load, error) {
 	if len(q.load) > 1 {
 		return nil, nil, &inputError{text: "--load " + strings.Join(q.load, ",") + ": more than one", hint: "name the one load that is wanted"}
 	}
@@ -91,12 +91,9 @@ func (q *questions) one(args []string) (*specimen.Part, *specimen.Load, error) {
 	if err != nil {
 		return nil, nil, err
 	}
-	name := job.part.Loads[0].Name
-	if len(job.loads) > 0 {
-		name = job.loads[0]
-	}
-	load, _ := job.part.Load(name)
-	return job.part, load, nil
+	job.loads = job.loads[:1]
+	load, _ := job.part.Load(job.loads[0])
+	return job, load, nil
 }
 
 // A climber makes one kind of study.
