@@ -124,3 +124,19 @@ func TestDeepHyperbolicNotches(t *testing.T) {
 		}
 	}
 }
+
+// A bore as thin as a needle takes nothing from a groove far away: it lowers the
+// nominal section's area by (0.2/26)² and its moments by the square of that. The
+// supports of a shaft without an axis are tried by this, against those with.
+func TestNeedleBore(t *testing.T) {
+	const rest = ` H 180 V 30 H 4 A 4 4 0 0 0 -4 30 H -180 Z"}}`
+	solid := factors(t, readPart(t, `{"shape": {"model": "shaft", "outline": "M -180 0`+rest), Options{Target: 1e-5})
+	bored := factors(t, readPart(t, `{"shape": {"model": "shaft", "outline": "M -180 0.2`+rest), Options{Target: 1e-5})
+	for load, s := range solid {
+		b := bored[load]
+		const hole = 0.2 * 0.2 / (26 * 26) * 2
+		if !(math.Abs(b.Value/s.Value-1) <= hole+(b.Uncertainty+s.Uncertainty)/s.Value) {
+			t.Errorf("%s: bored %v, solid %v", load, b, s)
+		}
+	}
+}

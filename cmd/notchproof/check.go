@@ -18,6 +18,12 @@ checks the demonstration part.
 
   notchproof check shaft-shoulder D=72mm d=48mm r=3mm --load bending \
       --claim 1.85 --claim-from "chart, by eye"
+  notchproof check seat.json
+
+A part file is JSON: title, shape (a family with its dimensions, or an outline
+of your own as path data), loads, material and claims. To start one, let
+"notchproof parts shaft-shoulder D=72mm d=48mm r=3mm --as-file" print it. What
+the flags say goes before what the file says.
 
 Exit status: 0 agrees or nothing to compare with, 1 disagrees, 2 bad input,
 3 undecided, 130 interrupted.

@@ -66,6 +66,9 @@ func (d *document) claim(n *node, loads []scf.Load) (c Claim, err error) {
 		if c.Tolerance, err = d.share(tolerance, hint); err != nil {
 			return c, err
 		}
+		if c.Tolerance == 0 {
+			return c, d.refuse(tolerance, "a factor without any tolerance", "leave it out for 3%, or give a small one")
+		}
 		if c.Tolerance < 0 || c.Tolerance > 0.5 {
 			return c, d.refuse(tolerance, "not a tolerance", hint)
 		}

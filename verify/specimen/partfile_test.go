@@ -177,6 +177,7 @@ func hostileFiles() []struct{ name, file, place, key, reason string } {
 		{"claim of zero", `{"claims": [{"load": "bending", "factor": 0}], ` + shapeOf(bar)[1:], "1:43", "claims[1].factor", "not a stress concentration factor"},
 		{"claim for a load not asked", `{"loads": ["tension"], "claims": [{"load": "bending", "factor": 2}], ` + shapeOf(bar)[1:], "1:44", "claims[1].load", "no such load here"},
 		{"two claims", `{"claims": [{"load": "bending", "factor": 2}, {"load": "bending", "factor": 3}], ` + shapeOf(bar)[1:], "1:47", "claims[2]", "second claim"},
+		{"no tolerance", `{"claims": [{"load": "bending", "factor": 2, "tolerance": "0%"}], ` + shapeOf(bar)[1:], "1:59", "claims[1].tolerance", "without any tolerance"},
 		{"tolerance", `{"claims": [{"load": "bending", "factor": 2, "tolerance": 3}], ` + shapeOf(bar)[1:], "1:59", "claims[1].tolerance", "not a tolerance"},
 	}
 }
