@@ -13,7 +13,7 @@ import (
 
 // tight is the relative uncertainty asked of the ladders of these tests: the
 // identities below hold in truth, so the tighter the more they say.
-const tight = 1e-6
+const tight = 1e-5
 
 // found computes the factor of a family's part tightly.
 func found(t *testing.T, name string, load scf.Load, dims scf.Dims, o scf.Options) *verify.Computed {
