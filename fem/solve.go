@@ -87,7 +87,13 @@ func (p *Problem) Solve(ctx context.Context, w *Workspace, workers int) ([]*Solu
 	if err != nil {
 		return nil, p.explain(err, &num)
 	}
-	return p.solveCases(factor, &num, assemblers[0]), nil
+	solutions := p.solveCases(factor, &num, assemblers[0])
+	for i, s := range solutions {
+		if size := norm(s.Values); math.IsNaN(size) || math.IsInf(size, 0) {
+			return nil, fmt.Errorf("load case %d: a load or prescribed displacement is not a finite number", i+1)
+		}
+	}
+	return solutions, nil
 }
 
 func (p *Problem) solveCases(factor *sparse.Factor, num *numbering, a *assembler) []*Solution {

@@ -43,7 +43,9 @@ const maxNodes = lagrange.MaxCount
 
 // newTables chooses the rules. On a straight triangle the gradients are
 // polynomials of degree p−1; on a bent one the Jacobian adds to that, and its
-// inverse is no polynomial at all, so that four more degrees are spent there.
+// inverse is no polynomial at all, so that four more degrees are spent there. A constant
+// stress is integrated exactly on any bent triangle of a body of revolution from
+// degree 3p−2 on: (p−1) of the gradient, (p−1) of the Jacobian's cofactor, p of y.
 // In bodies of revolution the terms divided by y are no polynomials where a
 // triangle touches the axis with one corner; on straight triangles three
 // degrees more are for those.
@@ -56,7 +58,7 @@ func newTables(t *lagrange.Triangle, revolved bool) tables {
 	straight := newTable(t, rule)
 	return tables{
 		straight: straight,
-		bent:     newTable(t, cubature.Triangle(2*t.Order+2)),
+		bent:     newTable(t, cubature.Triangle(max(2*t.Order+2, 3*t.Order-2))),
 		affine:   newAffineTable(straight, t.Count, revolved, rule.Points),
 	}
 }

@@ -21,41 +21,29 @@ func NeuberPlaneTension(A float64) float64 {
 //
 //	Kt = 4 A √A / {3 [√A + (A − 1) atan √A]}
 func NeuberPlaneBending(A float64) float64 {
-	return 4 / (3 * neuberBracket(A, +1))
+	return 4 / (3 * neuberBracket(A))
 }
 
-// NeuberPlaneShear is the largest stress over the mean shear stress of an
-// in-plane shear force; 3/2 · … at A = 0, the parabola of a smooth bar:
+// neuberBracket is [√A + (A − 1) atan √A] / (A √A).
 //
-//	Kt = A √A / [(A + 1) atan √A − √A]
-func NeuberPlaneShear(A float64) float64 {
-	return 1 / neuberBracket(A, -1)
-}
-
-// neuberBracket is sign [√A + (A − sign) atan √A …] / (A √A) for both formulas
-// above, which is
-//
-//	sign +1:  [√A + (A − 1) atan √A] / (A √A)
-//	sign −1:  [(A + 1) atan √A − √A] / (A √A)
-//
-// As written both lose all digits towards A = 0, where terms of the size √A
+// As written it loses all digits towards A = 0, where terms of the size √A
 // leave A √A. There the series of the arctangent is multiplied out:
 //
-//	Σ (−A)^n [1/(2n+1) + sign/(2n+3)]
+//	Σ (−A)^n [1/(2n+1) + 1/(2n+3)]
 //
 // Below A = 0.1 its 18 terms leave less than 0.1^18; above, the closed form
 // has lost one to two digits of sixteen at most.
-func neuberBracket(A, sign float64) float64 {
+func neuberBracket(A float64) float64 {
 	if A < 0.1 {
 		sum := 0.0
 		for n := 17; n >= 0; n-- {
 			odd := float64(2*n + 1)
-			sum = 1/odd + sign/(odd+2) - A*sum
+			sum = 1/odd + 1/(odd+2) - A*sum
 		}
 		return sum
 	}
 	z := math.Sqrt(A)
-	return (sign*z + (A-sign)*math.Atan(z)) / (A * z)
+	return (z + (A-1)*math.Atan(z)) / (A * z)
 }
 
 // NeuberRoundTension is the factor on P / (π a²) for Poisson's ratio nu.

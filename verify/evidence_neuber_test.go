@@ -93,8 +93,8 @@ func neubers() []neuber {
 
 // neuberPlaneShear is the largest stress on the surface over the mean shear of a
 // force across the net section without a moment there: it sits on either side
-// of the root, where the stress is zero. scf.NeuberPlaneShear has √A in the
-// place of √(A+1), which is not this stress.
+// of the root, where the stress is zero. The form with √A in the place of √(A+1)
+// that is in circulation is not this stress.
 func neuberPlaneShear(A, _ float64) float64 {
 	z := math.Sqrt(A)
 	return A * math.Sqrt(A+1) / ((A+1)*math.Atan(z) - z)

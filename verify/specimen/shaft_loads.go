@@ -26,14 +26,15 @@ func (p *Part) addShaftLoads(names []scf.Load, nominal func(scf.Load) scf.Nomina
 		switch name {
 		case scf.Tension:
 			l.Model = fem.Axisymmetric{}
-			l.Pins = []Pin{{r2.Vec{X: a.To, Y: a.Low}, 0}}
+			l.Pins = []Pin{{r2.Vec{X: a.To, Y: a.High}, 0}}
 			l.Resultant.Axial = load / (2 * math.Pi)
 			l.endTractions(p, far, 0)
 		case scf.Bending:
 			// What is left to a body whose axis conditions hold is a shift across
-			// and a turn: the deflection is held at both ends.
+			// and a turn: the deflection is held at both ends, at the outer radius, where
+			// the rounding of a support spreads over the most material.
 			l.Model = fem.Bending{}
-			l.Pins = []Pin{{r2.Vec{X: a.To, Y: a.Low}, 1}, {r2.Vec{X: b.To, Y: b.Low}, 1}}
+			l.Pins = []Pin{{r2.Vec{X: a.To, Y: a.High}, 1}, {r2.Vec{X: b.To, Y: b.High}, 1}}
 			l.Resultant.Moment = load / math.Pi
 			l.endTractions(p, far, 0)
 		case scf.Torsion:
