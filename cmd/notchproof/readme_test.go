@@ -1,0 +1,42 @@
+package main
+
+import (
+	"bytes"
+	"context"
+	"os"
+	"regexp"
+	"strings"
+	"testing"
+)
+
+// TestReadmeShowsWhatTheProgramPrints runs the README's first example and holds
+// the output that stands under it against what is printed.
+func TestReadmeShowsWhatTheProgramPrints(t *testing.T) {
+	text, err := os.ReadFile("../../README.md")
+	if err != nil {
+		t.Fatal(err)
+	}
+	block := regexp.MustCompile("(?s)\\$ notchproof (check [^\n]*--claim-from \"chart, by eye\")[^\n]*\n(.*?)\n```").FindStringSubmatch(string(text))
+	if block == nil {
+		t.Fatal("the example is not in the README")
+	}
+	before, _, _ := strings.Cut(block[1], ` "chart, by eye"`)
+	args := append(strings.Fields(before), "chart, by eye")
+	var out, errs bytes.Buffer
+	if status := run(context.Background(), args, &out, &errs); status != exitDisagrees || errs.Len() > 0 {
+		t.Fatalf("exit status %d, %s", status, errs.String())
+	}
+	want, got := strings.Split(block[2], "\n"), strings.Split(strings.TrimRight(out.String(), "\n"), "\n")
+	for i := range max(len(want), len(got)) {
+		w, g := "", ""
+		if i < len(want) {
+			w = want[i]
+		}
+		if i < len(got) {
+			g = got[i]
+		}
+		if w != g {
+			t.Errorf("line %d\nREADME  %s\nprinted %s", i+1, w, g)
+		}
+	}
+}
