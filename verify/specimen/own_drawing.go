@@ -44,6 +44,9 @@ func (o *Drawing) Part() (*Part, error) {
 	if o.Kind != scf.Bar && o.Kind != scf.Shaft {
 		panic("specimen: drawing that is neither bar nor shaft")
 	}
+	if len(o.Loops) == 0 {
+		panic("specimen: drawing without an outline")
+	}
 	sheet, err := o.sheet()
 	if err != nil {
 		return nil, err

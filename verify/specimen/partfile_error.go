@@ -59,5 +59,9 @@ func (d *document) fail(at int, fault InputError) *FileError {
 
 // refuse makes the error about a value.
 func (d *document) refuse(n *node, reason, hint string) *FileError {
-	return d.fail(n.at, InputError{What: n.path, Value: n.shown(), Reason: reason, Hint: hint})
+	what := n.path
+	if what == "" {
+		what = "file"
+	}
+	return d.fail(n.at, InputError{What: what, Value: n.shown(), Reason: reason, Hint: hint})
 }

@@ -105,7 +105,7 @@ func hostileFiles() []struct{ name, file, place, key, reason string } {
 		{"zero byte", "{\"title\": \"a\x00b\"}", "1:13", "file", "not text"},
 		{"not UTF-8", "{\"title\": \"a\xffb\"}", "1:13", "file", "not text"},
 		{"UTF-16", "\xff\xfe{\x00}\x00", "1:1", "file", "not text"},
-		{"not an object", `["shape"]`, "1:1", "", "not an object"},
+		{"not an object", `["shape"]`, "1:1", "file", "not an object"},
 		{"trailing garbage", good + " x", "15:3", "file", "not JSON"},
 		{"two objects", `{"shape": 1} {}`, "1:14", "file", "not JSON"},
 		{"trailing comma", `{"shape": {},}`, "1:14", "file", "not JSON"},
