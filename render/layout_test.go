@@ -50,7 +50,7 @@ func TestSketchLayout(t *testing.T) {
 	}
 }
 
-// Every dimension that was given stands on the sketch.
+// Every dimension that was given stands on the sketch, with its name.
 func TestSketchShowsEveryDimension(t *testing.T) {
 	for _, c := range proportions {
 		part := newPart(t, c.family, c.dims)
@@ -61,7 +61,7 @@ func TestSketchShowsEveryDimension(t *testing.T) {
 				continue
 			}
 			want++
-			text, found := lettered(p, part, r2.Vec{}, r2.Vec{}), false
+			text, found := p.Dim+": "+lettered(p, part, r2.Vec{}, r2.Vec{}), false
 			for _, l := range s.texts {
 				found = found || l.Text == legible(text)
 			}

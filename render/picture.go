@@ -116,7 +116,7 @@ func (p *plate) draw() {
 	field := p.paint(main)
 	e := extentOf(p.part)
 	p.quills(main, p.needles(main, peak, 0.5*(e.high-e.low)), p.u(mainQuill)/p.top, p.u(mainStep))
-	p.annotate(main, p.part, left, right)
+	p.annotate(main, p.part, left, right, false)
 	p.magnified(main, close, "A")
 	p.lines(main, field, 2)
 	p.breaks(main, p.part, left, right)

@@ -112,8 +112,9 @@ func radiusBelow(name string) func(g geometry) (a, b r2.Vec) {
 	}
 }
 
-// annotate draws all dimensions of a part in a view.
-func (s *sheet) annotate(v *view, part *specimen.Part, left, right float64) {
+// annotate draws all dimensions of a part in a view; named puts before each the
+// name that it goes by on the command line.
+func (s *sheet) annotate(v *view, part *specimen.Part, left, right float64, named bool) {
 	g := geometry{part.Dims, part, left, right, extentOf(part)}
 	material := v.loops(part)
 	rows := 0
@@ -123,6 +124,9 @@ func (s *sheet) annotate(v *view, part *specimen.Part, left, right float64) {
 		}
 		a, b := p.At(g)
 		text := lettered(p, part, a, b)
+		if named && p.Dim != "" {
+			text = p.Dim + ": " + text
+		}
 		switch p.Kind {
 		case acrossLeft:
 			s.across(v, a, b, v.bounds().X0-s.u(dimensionOff), text)

@@ -33,7 +33,7 @@ func sketch(part *specimen.Part, o SketchOptions) *sheet {
 	if part.Half {
 		s.symmetry(v, 18)
 	}
-	s.annotate(v, part, left, right)
+	s.annotate(v, part, left, right, true)
 	base := s.u(height - 62)
 	name := s.text(point{s.u(50), base}, 0, 0.5, part.Name, head, ink)
 	unit := s.text(point{s.u(1550), base}, 1, 0.5, unitText(part.Unit), normal, grey)
