@@ -2,9 +2,7 @@ package specimen
 
 import (
 	"fmt"
-	"maps"
 	"slices"
-	"strings"
 
 	"gonum.org/v1/gonum/spatial/r2"
 
@@ -70,7 +68,7 @@ func (o *Drawing) Part() (*Part, error) {
 		return nil, err
 	}
 	p.Joints = findJoints(p.Region, p.Notch)
-	p.Watch = p.watched()
+	p.Watch = p.offNotch()
 	return p, o.load(p)
 }
 
@@ -109,81 +107,37 @@ func (s sheet) region() *outline.Region {
 // sheet lays out the loops, sets the names and marks the notch.
 func (o *Drawing) sheet() (sheet, error) {
 	loops := slices.Concat(o.Loops, o.Holes)
-	if o.Kind == scf.Shaft && len(loops) > 1 {
-		return nil, drawingFault("outline", "", "a shaft with a hole in its section", "a bore is drawn by leaving the axis out of the outline; a ring-shaped cavity cannot be checked")
-	}
-	if o.Kind == scf.Shaft && o.Mirror {
-		return nil, drawingFault("mirror", "true", "a shaft is drawn as a half already", "leave it out")
-	}
 	count := 0
 	for _, loop := range loops {
 		count += len(loop)
 	}
-	if count > mostSides {
+	switch {
+	case o.Kind == scf.Shaft && len(loops) > 1:
+		return nil, drawingFault("outline", "", "a shaft with a hole in its section", "a bore is drawn by leaving the axis out of the outline; a ring-shaped cavity cannot be checked")
+	case o.Kind == scf.Shaft && o.Mirror:
+		return nil, drawingFault("mirror", "true", "a shaft is drawn as a half already", "leave it out")
+	case count > mostSides:
 		return nil, drawingFault("outline", "", fmt.Sprintf("%d sides, more than %d", count, mostSides), "draw it with fewer, longer curves")
 	}
-	named, wanted := maps.Clone(o.Names), make(map[string]bool)
-	for _, n := range o.Notch {
-		wanted[n] = false
-	}
+	m := marker{Drawing: o, met: make(map[string]bool)}
 	var s sheet
-	var known []string
 	for k, loop := range loops {
 		if k > 0 && area(loop) > 0 {
 			loop = reversed(loop)
 		}
 		var sides []drawnSide
 		for _, side := range loop {
-			drawn := side.Name
 			if k > 0 {
-				drawn = fmt.Sprintf("hole %d", k)
+				side.Name = fmt.Sprintf("hole %d", k)
 			}
-			known = append(known, drawn)
-			side.Name = drawn
-			if called, ok := o.Names[drawn]; ok {
-				side.Name = called
-				delete(named, drawn)
-			}
-			_, byDrawn := wanted[drawn]
-			_, byName := wanted[side.Name]
-			if byDrawn {
-				wanted[drawn] = true
-			}
-			if byName {
-				wanted[side.Name] = true
-			}
-			sides = append(sides, drawnSide{side, byDrawn || byName})
+			sides = append(sides, m.mark(side))
 		}
 		s = append(s, sides)
 	}
-	for _, name := range slices.Sorted(maps.Keys(named)) {
-		return nil, unknownSide("names", name, known)
-	}
-	for _, name := range o.Notch {
-		if !wanted[name] {
-			return nil, unknownSide("notch", name, known)
-		}
+	if err := m.check(); err != nil {
+		return nil, err
 	}
 	return s.joined(), nil
-}
-
-// nameAsDrawn tells whether a name is of the kind that sides and holes have
-// before they are named: L1, A2, C3, hole 4.
-func nameAsDrawn(name string) bool {
-	digits := strings.TrimPrefix(name, "hole ")
-	if digits == name && name != "" && strings.IndexByte("LAC", name[0]) >= 0 {
-		digits = name[1:]
-	}
-	return digits != name && digits != "" && strings.Trim(digits, "0123456789") == ""
-}
-
-func unknownSide(key, name string, known []string) error {
-	known = slices.Compact(known)
-	hint := "the sides are " + strings.Join(known, ", ")
-	if len(known) > 12 {
-		hint = fmt.Sprintf("the sides are %s, … %s", strings.Join(known[:8], ", "), known[len(known)-1])
-	}
-	return drawingFault(key, name, "no such side", hint)
 }
 
 // area is positive for a loop that runs counter-clockwise.

@@ -71,18 +71,6 @@ func (s sheet) choose(p *Part, given bool) error {
 	return nil
 }
 
-// watched lists the free sides off the notch.
-func (p *Part) watched() []int {
-	var sides []int
-	for i, s := range p.Region.Sides() {
-		free := i != p.Plain[0].End && i != p.Plain[1].End && !(p.Half && onAxis(s.Curve))
-		if free && !slices.Contains(p.Notch, i) {
-			sides = append(sides, i)
-		}
-	}
-	return sides
-}
-
 // notchRange is the stretch of x that the notch takes up.
 func (p *Part) notchRange() (from, to float64) {
 	sides := p.Region.Sides()

@@ -1,6 +1,6 @@
-// Package specimen turns a family with dimensions into the part that is solved:
-// its outline, model, loads, supports, nominal section and the sides where the
-// factor is sought.
+// Package specimen turns a family with dimensions, or a part file with an
+// outline of the user's own, into the part that is solved: its outline, model,
+// loads, supports, nominal section and the sides where the factor is sought.
 //
 // Conventions. x runs along the part, from the middle of a notch, hole or
 // collar or from the face of a shoulder, whose larger section is at x < 0; y = 0
