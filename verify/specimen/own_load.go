@@ -114,7 +114,7 @@ func (s *strength) nominal(load scf.Load) scf.Nominal {
 func (s *strength) units(shaft, bar int) string {
 	power, thickness := shaft, ""
 	if s.Kind == scf.Bar {
-		power, thickness = bar, " t"
+		power, thickness = bar, " · t"
 	}
 	if s.Unit == "" {
 		return thickness
