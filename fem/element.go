@@ -32,7 +32,6 @@ type assembler struct {
 	radius     []float64
 	j11, j12   []float64 // inverse Jacobian by point: ∂ξ/∂x, ∂ξ/∂y
 	j21, j22   []float64 // ∂η/∂x, ∂η/∂y
-	local      []float64
 }
 
 func newAssembler(shape *mesh.Curved, model Model, mat Material, t tables) *assembler {

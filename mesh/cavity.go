@@ -107,6 +107,3 @@ func (t *triangulation) fill(v int32) {
 	t.at[v] = fan[0]
 	t.last = fan[0]
 }
-
-// fan lists the triangles that fill has made.
-func (t *triangulation) fan() []int32 { return t.cavity.tris }

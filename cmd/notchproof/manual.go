@@ -1,6 +1,7 @@
 package main
 
 import (
+	"context"
 	"fmt"
 	"io"
 	"strings"
@@ -49,7 +50,7 @@ func help(args []string, stdout, stderr io.Writer) int {
 	}
 	for _, c := range commands() {
 		if c.name == args[0] {
-			return c.call(nil, []string{"--help"}, stdout, stderr)
+			return c.call(context.Background(), []string{"--help"}, stdout, stderr)
 		}
 	}
 	return fail(stderr, &inputError{

@@ -134,10 +134,9 @@ func (d *document) shape(n *node, nu float64, over Over) (*Part, error) {
 
 // loads lists what is to be checked.
 func (d *document) loads(n *node, p *Part) ([]scf.Load, error) {
-	var carried []string
 	var all []scf.Load
 	for _, l := range p.Loads {
-		carried, all = append(carried, string(l.Name)), append(all, l.Name)
+		all = append(all, l.Name)
 	}
 	if n == nil {
 		return all, nil
