@@ -30,6 +30,25 @@ func (s sheet) arrange(p *Part) error {
 		}
 		p.Plain = append(p.Plain, plainStretch(p.Region, end, side))
 	}
+	return p.checkLength()
+}
+
+// longestPart is how many times longer than its ends are high a part may be. A
+// beam's stiffness in bending falls behind that of its material with the square
+// of this, and rounding with it gains on the supports: beyond a few hundred the
+// checks of a solve no longer pass.
+const longestPart = 200
+
+func (p *Part) checkLength() error {
+	a, b := p.Plain[0], p.Plain[1]
+	size := math.Min(a.High-a.Low, b.High-b.Low)
+	if p.Half {
+		size = 2 * math.Min(a.High, b.High)
+	}
+	if times := (b.To - a.To) / size; times > longestPart {
+		return drawingFault("outline", "", fmt.Sprintf("%.4g times longer than its ends are high, more than %d", times, longestPart),
+			"shorten the plain ends: what is more than three sizes away from the notch changes nothing")
+	}
 	return nil
 }
 

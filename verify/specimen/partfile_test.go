@@ -148,6 +148,7 @@ func hostileFiles() []struct{ name, file, place, key, reason string } {
 		{"slanting end", shapeOf(`"model": "bar", "outline": "M -90 -20 H 90 V 20 H 5 A 5 5 0 0 0 -5 20 H -95 Z"`), "1:39", "shape.outline", "no straight side across the axis at the left end"},
 		{"round end", shapeOf(`"model": "bar", "outline": "M -90 -20 H 90 A 20 20 0 0 1 90 20 H 5 A 5 5 0 0 0 -5 20 H -90 Z"`), "1:39", "shape.outline", "at the right end"},
 		{"forked end", shapeOf(`"model": "bar", "outline": "M -90 -20 H 90 V -5 H 60 V 5 H 90 V 20 H -90 Z"`), "1:39", "shape.outline", "right end at x = 90 in several pieces"},
+		{"long", shapeOf(`"model": "shaft", "outline": "M -1500 0 H 1500 V 5 H 1 A 1 1 0 0 0 -1 5 H -1500 Z"`), "1:41", "shape.outline", "300 times longer"},
 		{"nothing concave", shapeOf(`"model": "bar", "outline": "M -90 -20 H 90 V 20 H -90 Z"`), "1:39", "shape.outline", "nothing concave"},
 		{"below the axis", shapeOf(`"model": "shaft", "outline": "M -90 -2 H 90 V 20 H 5 A 5 5 0 0 0 -5 20 H -90 Z"`), "1:41", "shape.outline", "lies below y = 0"},
 		{"mirror without axis", shapeOf(`"mirror": true, "model": "bar", "outline": "M -90 2 H 90 V 20 H 5 A 5 5 0 0 0 -5 20 H -90 Z"`), "1:22", "shape.mirror", "no straight side on y = 0"},
