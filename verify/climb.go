@@ -3,6 +3,7 @@ package verify
 import (
 	"context"
 	"fmt"
+	"sync"
 
 	"notchproof/fem"
 	"notchproof/verify/extrapolate"
@@ -32,7 +33,7 @@ type climb struct {
 	shapes  *shapes
 	options Options
 	workers int
-	work    fem.Workspace
+	work    [2]fem.Workspace // the second for rungs that are solved side by side
 }
 
 // run climbs until the target is met and the solution is sound, or the stages
@@ -47,12 +48,19 @@ func (c *climb) run(ctx context.Context) (Computed, *shape, error) {
 		}
 		at = s
 		out = Computed{}
-		for order := st.first; order <= st.last; order++ {
-			if err := c.step(ctx, s, order, &out); err != nil {
-				return out, s, err
-			}
+		if err := c.begin(ctx, s, st.first, &out); err != nil {
+			return out, s, err
+		}
+		for order := st.first + enoughRungs; ; order++ {
 			if c.met(out.Factor) && c.sound(s, &out) {
 				return out, s, nil
+			}
+			if order > st.last {
+				break
+			}
+			next := c.solve(ctx, s, order, &c.work[0], c.workers)
+			if err := out.add(next); err != nil {
+				return out, s, err
 			}
 		}
 	}
@@ -76,19 +84,66 @@ func (c *climb) sound(s *shape, out *Computed) bool {
 	return true
 }
 
-// step solves one rung and brings the estimates up to date.
-func (c *climb) step(ctx context.Context, s *shape, order int, out *Computed) error {
-	c.options.tell(fmt.Sprintf("%s: order %d on %d triangles", c.load.Name, order, len(s.mesh.Triangles)))
-	sol, err := solve(ctx, c.part, c.load, s.order(order), &c.work, c.workers)
-	if err != nil {
-		return err
+// enoughRungs is the least number of rungs from which a limit and its
+// uncertainty can be told.
+const enoughRungs = 3
+
+// begin solves the first rungs, which are always needed. The last of them costs
+// about as much as the others together, so two goroutines share them better than
+// they would share each factorisation.
+func (c *climb) begin(ctx context.Context, s *shape, first int, out *Computed) error {
+	var solved [enoughRungs]solvedRung
+	last := enoughRungs - 1
+	var group sync.WaitGroup
+	small, large := 1, 1
+	if c.workers > 1 {
+		large = c.workers - 1
+		group.Go(func() { solved[last] = c.solve(ctx, s, first+last, &c.work[0], large) })
 	}
-	rung, peaks := read(c.part, c.load, sol)
-	rung.PerQuarter = s.grading.perQuarter
-	out.Ladder = append(out.Ladder, rung)
-	out.Last, out.peaks = sol, peaks
-	out.estimate()
-	out.checks = nil // those of the rung before
+	for i := range last {
+		solved[i] = c.solve(ctx, s, first+i, &c.work[1], small)
+	}
+	group.Wait()
+	if c.workers <= 1 {
+		solved[last] = c.solve(ctx, s, first+last, &c.work[1], large)
+	}
+	for _, r := range solved {
+		if err := out.add(r); err != nil {
+			return err
+		}
+	}
+	return nil
+}
+
+// A solvedRung is a rung with what it was read from.
+type solvedRung struct {
+	Rung
+	solution *fem.Solution
+	peaks    []fem.SurfacePoint
+	err      error
+}
+
+// solve solves one rung and reads it.
+func (c *climb) solve(ctx context.Context, s *shape, order int, w *fem.Workspace, workers int) (r solvedRung) {
+	c.options.tell(fmt.Sprintf("%s: order %d on %d triangles", c.load.Name, order, len(s.mesh.Triangles)))
+	r.solution, r.err = solve(ctx, c.part, c.load, s.order(order), w, workers)
+	if r.err != nil {
+		return r
+	}
+	r.Rung, r.peaks = read(c.part, c.load, r.solution)
+	r.PerQuarter = s.grading.perQuarter
+	return r
+}
+
+// add puts a rung on the ladder and brings the estimates up to date.
+func (c *Computed) add(r solvedRung) error {
+	if r.err != nil {
+		return r.err
+	}
+	c.Ladder = append(c.Ladder, r.Rung)
+	c.Last, c.peaks = r.solution, r.peaks
+	c.estimate()
+	c.checks = nil // those of the rung before
 	return nil
 }
 

@@ -1,11 +1,12 @@
 package sparse
 
 // A Workspace keeps the memory of factorisations for the next one: at the
-// usual sizes the first touch of fresh memory takes a tenth of the time.
+// usual sizes the first touch of fresh memory takes as long as the arithmetic.
 // The zero value is ready. A workspace serves one factorisation at a time, and
 // any plans one after the other; a Factor is good until its workspace is used
 // for the next.
 type Workspace struct {
+	block   []float64 // all that follows is cut from it
 	factor  []float64
 	shared  []float64 // Schur complements that pass between goroutines
 	hands   []hand
@@ -21,28 +22,35 @@ type hand struct {
 	panel    panel
 }
 
+// smallestBlock is the least memory asked for, in numbers: 16 MB. Pages are
+// only taken when they are touched, so a small factorisation does not pay for
+// it, and a ladder of growing ones finds the first pages in place.
+const smallestBlock = 1 << 21
+
 // prepare makes room for a factorisation of p.
 func (w *Workspace) prepare(p *Plan, workers, shared int) {
 	w.version++
-	w.factor = grown(w.factor, p.factorLen)
-	w.shared = grown(w.shared, shared)
-	w.judges = grown(w.judges, len(p.fronts))
+	each := p.stackLen + p.listed*p.listed + p.largest + edge
+	if need := p.factorLen + shared + workers*each; cap(w.block) < need {
+		w.block = make([]float64, max(need, smallestBlock))
+		adviseLargePages(w.block)
+	}
+	rest := w.block
+	cut := func(n int) []float64 {
+		s := rest[:n:n]
+		rest = rest[n:]
+		return s
+	}
+	w.factor, w.shared = cut(p.factorLen), cut(shared)
+	if cap(w.judges) < len(p.fronts) {
+		w.judges = make([]judge, len(p.fronts))
+	}
+	w.judges = w.judges[:len(p.fronts)]
 	if len(w.hands) < workers {
 		w.hands = append(w.hands, make([]hand, workers-len(w.hands))...)
 	}
 	for i := range w.hands[:workers] {
 		h := &w.hands[i]
-		h.stack = grown(h.stack, p.stackLen)
-		h.matrix = grown(h.matrix, p.listed*p.listed)
-		h.diagonal = grown(h.diagonal, p.largest+edge)
+		h.stack, h.matrix, h.diagonal = cut(p.stackLen), cut(p.listed*p.listed), cut(p.largest+edge)
 	}
-}
-
-// grown returns a slice of length n, s itself where it is long enough. Old
-// contents stay.
-func grown[T any](s []T, n int) []T {
-	if cap(s) < n {
-		return make([]T, n)
-	}
-	return s[:n]
 }

@@ -1,0 +1,6 @@
+//go:build !linux
+
+package sparse
+
+// adviseLargePages does nothing where there is no such advice.
+func adviseLargePages([]float64) {}
