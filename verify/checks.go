@@ -16,7 +16,7 @@ const (
 	forceLimit    = 1e-3 // resultant across the net section, relative
 	farLimit      = 1e-3 // far stress, relative to its largest
 	leftoverLimit = 2e-2 // traction left on the free surface at the peak, relative to the peak
-	solveLimit    = 1e-8 // unbalanced nodal forces and support forces, relative
+	solveLimit    = 1e-8 // unbalanced nodal forces and support forces, relative; see roundingLimit
 	plainLimit    = 1.5  // length of a plain end in units of its size
 	angleLimit    = 20.0 // degrees
 	jacobianLimit = 0.05 // smallest Jacobian of a bent triangle over that of the straight one
@@ -44,12 +44,20 @@ func (c *climb) checks(s *shape, out *Computed) []Check {
 	}
 	return append(list,
 		below("observed contraction of the ladder", out.Factor.Order, 1),
-		below("unbalanced nodal forces", balance.Residual, solveLimit),
-		below("support forces", largestReaction(balance), solveLimit),
+		below("unbalanced nodal forces", balance.Residual, c.roundingLimit()),
+		below("support forces", largestReaction(balance), c.roundingLimit()),
 		above("smallest angle of the mesh in degrees", s.mesh.Quality().SmallestAngle, angleLimit),
 		above("smallest Jacobian of the bent triangles", jacobian, jacobianLimit),
 	)
 }
+
+// roundingLimit bounds what rounding may leave of the balance of nodal forces. A
+// missing support or an unbalanced load leaves a good part of the whole; rounding
+// leaves 1e-11, and more where heavy ends turn about a thin neck, since strains
+// are then small differences of large displacements. It enters the factor with
+// about its own size, so a hundredth of the uncertainty that is asked for does
+// not matter.
+func (c *climb) roundingLimit() float64 { return math.Max(solveLimit, c.options.target()/100) }
 
 // plainSize is the width or diameter of a plain stretch.
 func plainSize(p *specimen.Part, plain specimen.Plain) float64 {

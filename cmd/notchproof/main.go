@@ -10,9 +10,10 @@ import (
 // The program is run; main only connects it to the process.
 func main() {
 	// A run lasts a fraction of a second; collecting rubbish at every few
-	// megabytes would take a good part of it.
-	debug.SetGCPercent(800)
-	debug.SetMemoryLimit(2 << 30)
+	// megabytes would take a good part of it. Studies, which may be large, go
+	// back to the ordinary way.
+	debug.SetGCPercent(-1)
+	debug.SetMemoryLimit(1 << 30)
 	ctx, stop := signal.NotifyContext(context.Background(), os.Interrupt)
 	defer stop()
 	os.Exit(run(ctx, os.Args[1:], os.Stdout, os.Stderr))

@@ -5,6 +5,7 @@ import (
 	"fmt"
 	"io"
 	"math"
+	"runtime/debug"
 	"strings"
 
 	"notchproof/render"
@@ -56,6 +57,8 @@ func runStudy(c *call) (int, error) {
 	if err := checkOutput(*file, ".png"); err != nil {
 		return 0, err
 	}
+	debug.SetGCPercent(100)
+	debug.SetMemoryLimit(math.MaxInt64)
 	bar := c.progress()
 	s, err := climb(c.ctx, job.part, load, verify.StudyOptions{Order: *order, Rungs: *rungs, Progress: bar.tell})
 	bar.clear()

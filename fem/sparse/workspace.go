@@ -22,10 +22,10 @@ type hand struct {
 	panel    panel
 }
 
-// smallestBlock is the least memory asked for, in numbers: 16 MB. Pages are
+// smallestBlock is the least memory asked for, in numbers: 8 MB. Pages are
 // only taken when they are touched, so a small factorisation does not pay for
 // it, and a ladder of growing ones finds the first pages in place.
-const smallestBlock = 1 << 21
+const smallestBlock = 1 << 20
 
 // prepare makes room for a factorisation of p.
 func (w *Workspace) prepare(p *Plan, workers, shared int) {
