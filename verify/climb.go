@@ -21,7 +21,7 @@ type stage struct {
 // as a rule; the later stages are for shapes or targets that ask for more.
 func stages() []stage {
 	return []stage{
-		{grading{perQuarter: 6, growth: 0.5, joint: 0.2}, 2, 8},
+		{grading{perQuarter: 6, growth: 0.6, joint: 0.2}, 2, 8},
 		{grading{perQuarter: 12, growth: 0.35, joint: 0.05}, 4, 8},
 	}
 }

@@ -28,9 +28,8 @@ import (
 //   - What is known to be wrong now: the witness at the place. The stress
 //     stated and the traction left over come from the same gradients.
 //
-// The sum carries Roache's factor of safety for an order observed on three or
-// more rungs, 1.25. That it covers the error in 99 of 100 cases, and how wide it
-// is, is shown by the sweeps in package verify.
+// There are no factors on either. That the sum covers the error in 99 of 100
+// cases, and how wide it is, is shown by the sweeps in package verify.
 //
 // # Status
 //
@@ -75,7 +74,7 @@ func Witnessed(orders []int, values, wide, near []float64) Estimate {
 	e.Order = math.Sqrt(share * differences)
 	before := math.Min(w.share(n-2), weakestShare)
 	envelope := math.Max(t.last(0), t.last(1)*before)
-	e.Uncertainty = safetyObserved*(envelope*e.Order/(1-e.Order)+near[n-1]) + t.level
+	e.Uncertainty = envelope*e.Order/(1-e.Order) + near[n-1] + t.level
 	return e
 }
 
