@@ -4,6 +4,7 @@ import (
 	"bytes"
 	"context"
 	"os"
+	"path/filepath"
 	"regexp"
 	"strings"
 	"testing"
@@ -38,5 +39,26 @@ func TestReadmeShowsWhatTheProgramPrints(t *testing.T) {
 		if w != g {
 			t.Errorf("line %d\nREADME  %s\nprinted %s", i+1, w, g)
 		}
+	}
+}
+
+// TestReadmePartFile checks the part file that the README shows.
+func TestReadmePartFile(t *testing.T) {
+	text, err := os.ReadFile("../../README.md")
+	if err != nil {
+		t.Fatal(err)
+	}
+	block := regexp.MustCompile("(?s)```json\n(.*?)```").FindSubmatch(text)
+	if block == nil {
+		t.Fatal("the part file is not in the README")
+	}
+	file := filepath.Join(t.TempDir(), "a link of its own.json")
+	if err := os.WriteFile(file, block[1], 0o644); err != nil {
+		t.Fatal(err)
+	}
+	var out, errs bytes.Buffer
+	status := run(context.Background(), []string{"check", file}, &out, &errs)
+	if status != exitAgrees || errs.Len() > 0 || !strings.Contains(out.String(), "claim      1.8") {
+		t.Errorf("exit status %d\n%s%s", status, out.String(), errs.String())
 	}
 }
