@@ -81,11 +81,21 @@ func (f *Finding) overall() Verdict {
 		return f.Handbook[best].Verdict
 	}
 	if len(f.Handbook) > 0 {
-		f.because("no handbook value covers these proportions")
+		f.because("%s", f.nothingInRange())
 		return OutOfRange
 	}
 	f.because("there is no published factor for this shape and load")
 	return NothingToCompare
+}
+
+// nothingInRange says why none of the published values may judge.
+func (f *Finding) nothingInRange() string {
+	for _, h := range f.Handbook {
+		if !h.Value.Hint {
+			return "no handbook value covers these proportions"
+		}
+	}
+	return "there is no published factor for this shape and load, only hints from neighbouring shapes"
 }
 
 // explain says in words what a comparison rests on.
