@@ -120,7 +120,11 @@ func comparisonText(c verify.Comparison, s style) string {
 }
 
 func handbookText(b *strings.Builder, h verify.HandbookComparison, s style) {
-	fmt.Fprintf(b, "  handbook   %s ± %s  %s\n", comparisonText(h.Comparison, s), number.Percent(h.Value.Accuracy, 0), h.Value.ID)
+	what := "handbook"
+	if h.Value.Hint {
+		what = "hint    "
+	}
+	fmt.Fprintf(b, "  %s   %s ± %s  %s\n", what, comparisonText(h.Comparison, s), number.Percent(h.Value.Accuracy, 0), h.Value.ID)
 	fmt.Fprintf(b, "             %s\n", h.Value.Source)
 	for _, o := range h.Value.Outside {
 		fmt.Fprintf(b, "             out of range: %s\n", o)
