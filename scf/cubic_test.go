@@ -6,7 +6,7 @@ import (
 )
 
 // cubicCheck is one published cubic with what it must show of itself. The
-// checks catch the sign errors that circulate in transcriptions.
+// checks catch the sign errors that circulate in copies.
 type cubicCheck struct {
 	name string
 	fit  cubicCase

@@ -34,7 +34,7 @@ type Sureness int
 const (
 	Unchecked Sureness = iota // from memory, no independent check: not used for a Value
 	Memory                    // from memory, passes the numeric self-tests of this package
-	Sure                      // confirmed in a transcription, passes the self-tests
+	Sure                      // confirmed against a second copy, passes the self-tests
 )
 
 func (s Sureness) String() string {
