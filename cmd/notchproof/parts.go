@@ -16,7 +16,7 @@ func partsCommand() *command {
 		args:  "[FAMILY [dimension=value ...]] [flags]",
 		short: "list the families of parts, or show one with its dimensions",
 		long: `Without arguments lists the families with their dimensions and loads. With a
-family explains its dimensions and what is published on it; with -o draws a
+family explains its dimensions, sketches it and says what is published; -o draws a
 dimensioned sketch, of the dimensions given or of typical ones. --as-file prints
 the part as a part file with its outline, to start one of your own from.
 
@@ -112,6 +112,7 @@ func describe(w io.Writer, family *scf.Family, part *specimen.Part, given bool) 
 	} else {
 		fmt.Fprintf(&b, "\nwith typical proportions, %s\n", dimensionText(part))
 	}
+	b.WriteString("\n" + render.SketchText(part) + "\n")
 	for i := range part.Loads {
 		l := &part.Loads[i]
 		fmt.Fprintf(&b, "  %s: nominal stress %s (%s)\n", l.Name, l.Nominal.Formula, l.Nominal.Section)

@@ -7,11 +7,16 @@ import (
 	"gonum.org/v1/gonum/spatial/r2"
 )
 
+// flattest is the radius, in chords, beyond which a small arc is a line: it
+// bulges by chord/(8 radius) of its chord, while its points, reckoned from the
+// centre, are off by some 16 ε radius. At 1/√(128 ε) chords the two are equal.
+const flattest = 5.9e6
+
 // EndpointArc gives the arc of path data: from one point to another on an
 // ellipse with semi-axes rx and ry, the first turned by tilt (radians) from
 // the x axis; large chooses the arc of more than 180°, ccw the one along which
 // the angle grows. Equal radii give an Arc, others an EllipticArc; no radius
-// gives a Line. Radii too small to reach are enlarged to the smallest that do.
+// gives a Line, and so do radii so large that the arc is one but for rounding. Radii too small to reach are enlarged to the smallest that do.
 //
 // Formulas and corrections: W3C, Scalable Vector Graphics 2 (2018), appendix
 // "Implementation Notes", conversion from endpoint to center parameterization
@@ -25,6 +30,9 @@ func EndpointArc(from, to r2.Vec, rx, ry, tilt float64, large, ccw bool) (Curve,
 	}
 	rx, ry = math.Abs(rx), math.Abs(ry)
 	if rx == 0 || ry == 0 {
+		return Line{from, to}, nil
+	}
+	if !large && math.Min(rx, ry) > flattest*r2.Norm(r2.Sub(to, from)) {
 		return Line{from, to}, nil
 	}
 	if rx == ry {
