@@ -19,6 +19,10 @@ const competing = 0.5
 // same: another place has a nominal stress and a remedy of its own.
 func (f *Finding) places(p *specimen.Part) {
 	c := &f.Computed
+	if len(c.peaks) > 0 && !c.Factor.Status.Settled() {
+		c.Peak = peak(f.Load, c.Last, c.peaks[0]) // where it is; its size means nothing
+		return
+	}
 	for i, at := range c.peaks {
 		found := peak(f.Load, c.Last, at)
 		if i == 0 {
@@ -43,11 +47,29 @@ func (f *Finding) places(p *specimen.Part) {
 // meets the notch the stress is the notch's.
 func highest(p *specimen.Part, l *specimen.Load, s *fem.Solution, side int) (fem.SurfacePoint, bool) {
 	for _, at := range s.Maxima([]int{side}, quantity(l)) {
-		if !atJoint(p, at.At) {
+		if !atJoint(p, at.At) && !atSharpCorner(p, s, at) {
 			return at, true
 		}
 	}
 	return fem.SurfacePoint{}, false
+}
+
+// atSharpCorner: there the stress is whatever the mesh makes of it.
+func atSharpCorner(p *specimen.Part, s *fem.Solution, at fem.SurfacePoint) bool {
+	for _, c := range p.Sharp {
+		if r2.Norm(r2.Sub(at.At, c.At)) <= 1e-2*edgeLength(s, at) {
+			return true
+		}
+	}
+	return false
+}
+
+// edgeLength is the length of the chord of the boundary edge that a point lies on.
+func edgeLength(s *fem.Solution, at fem.SurfacePoint) float64 {
+	m := s.Problem.Shape.Mesh
+	e := m.Boundary[at.Edge]
+	corners := m.Triangles[e.Triangle]
+	return r2.Norm(r2.Sub(m.Points[corners[(e.Opposite+1)%3]], m.Points[corners[(e.Opposite+2)%3]]))
 }
 
 func atJoint(p *specimen.Part, at r2.Vec) bool {
@@ -64,8 +86,7 @@ func atJoint(p *specimen.Part, at r2.Vec) bool {
 func peak(l *specimen.Load, s *fem.Solution, at fem.SurfacePoint) Peak {
 	m := s.Problem.Shape.Mesh
 	e := m.Boundary[at.Edge]
-	corners := m.Triangles[e.Triangle]
-	edge := r2.Norm(r2.Sub(m.Points[corners[(e.Opposite+1)%3]], m.Points[corners[(e.Opposite+2)%3]]))
+	edge := edgeLength(s, at)
 	return Peak{
 		X: rounded(at.At.X, resolution*edge), Y: rounded(at.At.Y, resolution*edge),
 		ArcDegrees: math.Atan2(math.Abs(at.Normal.X), math.Abs(at.Normal.Y)) * 180 / math.Pi,

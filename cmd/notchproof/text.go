@@ -97,7 +97,7 @@ func othersText(b *strings.Builder, c *verify.Computed, unit string) {
 			continue // local maxima that compete with nothing
 		}
 		fmt.Fprintf(b, "  also       %s on %s at x = %s, y = %s, %.1f°\n",
-			number.Decimal(p.Factor, 3), p.Side, number.Length(round(p.X, 4), unit), number.Length(round(p.Y, 4), unit), p.ArcDegrees)
+			number.Significant(p.Factor, 3), p.Side, number.Length(round(p.X, 4), unit), number.Length(round(p.Y, 4), unit), p.ArcDegrees)
 	}
 }
 
