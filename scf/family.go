@@ -116,7 +116,11 @@ func (f *Family) Handbook(load Load, dims Dims, opt Options) []Value {
 	if f.handbook == nil {
 		return nil
 	}
-	return f.handbook(load, f.Complete(dims), opt)
+	values := f.handbook(load, f.Complete(dims), opt)
+	for i := range values {
+		values[i].holdAboveOne()
+	}
+	return values
 }
 
 // Hints lists factors of neighbouring shapes, where the shape's own are not

@@ -13,8 +13,11 @@ import (
 func randomShape(rng *rand.Rand, f *Family) Dims {
 	for {
 		dims := Dims{}
-		for name, v := range good()[f.Name] {
-			dims[name] = v * math.Exp(rng.NormFloat64())
+		typical := good()[f.Name]
+		for _, n := range f.Dimensions {
+			if v, ok := typical[n.Name]; ok {
+				dims[n.Name] = v * math.Exp(rng.NormFloat64())
+			}
 		}
 		for _, n := range f.Dimensions {
 			if n.Optional && rng.IntN(2) == 0 {

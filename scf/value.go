@@ -28,6 +28,18 @@ type Value struct {
 // states nothing: a chart gives two, at most three figures. Common practice.
 const fitAccuracy = 0.05
 
+// holdAboveOne takes a value out of range that even its accuracy does not lift
+// to the 1 of a plain part. No notch lowers the largest stress on the net
+// section's nominal one that far, so the fit has left the shapes that it was made
+// from: polynomials in 2h/D do so at very large D/d, which few sources limit.
+func (v *Value) holdAboveOne() {
+	if v.Factor*(1+v.Accuracy) >= 1 {
+		return
+	}
+	v.InRange = false
+	v.Outside = append(v.Outside, "the fit gives "+short(v.Factor)+", less than a part without a notch has")
+}
+
 // Sureness says how well the numbers of a source could be confirmed here.
 type Sureness int
 
