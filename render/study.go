@@ -6,8 +6,6 @@ import (
 	"math"
 
 	"notchproof/render/number"
-	"notchproof/verify"
-	"notchproof/verify/specimen"
 )
 
 // A Study is a ladder of solves to be plotted.
@@ -26,26 +24,6 @@ type StudyPoint struct {
 	Unknowns int     // above zero
 	Factor   float64 // finite
 	Change   float64 // size of the change from the rung before; 0 or NaN: none to show
-}
-
-// LadderStudy makes the study of a finding's own ladder.
-func LadderStudy(f *verify.Finding, part *specimen.Part) Study {
-	s := Study{Title: part.Name + ", " + string(f.Load.Name), Limit: math.NaN(), Uncertainty: math.NaN()}
-	ladder := f.Computed.Ladder
-	for i, r := range ladder {
-		p := StudyPoint{Label: "order " + number.Count(r.Order), Unknowns: r.Unknowns, Factor: r.Factor}
-		if i > 0 {
-			p.Change = math.Abs(r.Factor - ladder[i-1].Factor)
-		}
-		s.Points = append(s.Points, p)
-	}
-	e := f.Computed.Factor
-	s.Note = "ladder: " + e.Status.String()
-	if e.Status.Settled() {
-		s.Limit, s.Uncertainty = e.Value, e.Uncertainty
-		s.Note = "factor " + number.Uncertain(e.Value, e.Uncertainty) + ", " + s.Note
-	}
-	return s
 }
 
 // StudyOptions say how a study is plotted. The zero value is the default.

@@ -141,7 +141,8 @@ func sideText(f *verify.Finding) string {
 		return ""
 	}
 	return fmt.Sprintf("von Mises %s   gross section %s   ladder %s",
-		number.Decimal(c.VonMises.Value, 3), number.Decimal(c.Gross, 3), c.Factor.Status)
+		number.Uncertain(c.VonMises.Value, c.VonMises.Uncertainty),
+		number.Uncertain(c.Gross, c.Gross/c.Factor.Value*c.Factor.Uncertainty), c.Factor.Status)
 }
 
 // comparisonTexts has one line for the claim and one for each handbook value.

@@ -7,6 +7,7 @@ import (
 
 	"notchproof/fem"
 	"notchproof/scf"
+	"notchproof/verify/extrapolate"
 	"notchproof/verify/specimen"
 )
 
@@ -43,7 +44,7 @@ func (c *climb) checks(s *shape, out *Computed) []Check {
 		list = append(list, above("length of the plain "+plain.Name+" in sizes", length, plainLimit))
 	}
 	return append(list,
-		below("observed contraction of the ladder", out.Factor.Order, 1),
+		below("share of the error left by one order more", contraction(out.Factor), extrapolate.WeakestShare),
 		below("unbalanced nodal forces", balance.Residual, c.roundingLimit()),
 		below("support forces", largestReaction(balance), c.roundingLimit()),
 		above("smallest angle of the mesh in degrees", s.mesh.Quality().SmallestAngle, angleLimit),
@@ -58,6 +59,14 @@ func (c *climb) checks(s *shape, out *Computed) []Check {
 // about its own size, so a hundredth of the uncertainty that is asked for does
 // not matter.
 func (c *climb) roundingLimit() float64 { return math.Max(solveLimit, c.options.target()/100) }
+
+// contraction is the observed one; a ladder without a value has none.
+func contraction(e Estimate) float64 {
+	if math.IsNaN(e.Value) {
+		return math.Inf(1)
+	}
+	return e.Order
+}
 
 // plainSize is the width or diameter of a plain stretch.
 func plainSize(p *specimen.Part, plain specimen.Plain) float64 {

@@ -96,7 +96,7 @@ func othersText(b *strings.Builder, c *verify.Computed, unit string) {
 		if p.Factor < 0.5*c.Peak.Factor {
 			continue // local maxima that compete with nothing
 		}
-		fmt.Fprintf(b, "  also       %s on %s at x = %s, y = %s, %.1f°\n",
+		fmt.Fprintf(b, "  also       about %s on %s at x = %s, y = %s, %.1f°\n",
 			number.Significant(p.Factor, 3), p.Side, number.Length(round(p.X, 4), unit), number.Length(round(p.Y, 4), unit), p.ArcDegrees)
 	}
 }

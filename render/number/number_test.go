@@ -6,7 +6,6 @@ import (
 	"math/rand/v2"
 	"strings"
 	"testing"
-	"time"
 )
 
 var nan, inf = math.NaN(), math.Inf(1)
@@ -170,17 +169,5 @@ func TestLength(t *testing.T) {
 		{0, "mm", "0_mm"}, {nan, "mm", "–_mm"}, {inf, "", "∞"}, {1e-12, "m", "1.000000×10⁻¹²_m"},
 	} {
 		equal(t, "Length", Length(c.x, c.unit), c.want)
-	}
-}
-
-func TestDuration(t *testing.T) {
-	for d, want := range map[time.Duration]string{
-		0: "0_ns", 999: "999_ns", 1000: "1_µs", 840400: "840_µs", 999600: "1_ms", 12300000: "12_ms",
-		999700 * time.Microsecond: "1.0_s", 1340 * time.Millisecond: "1.3_s", 9940 * time.Millisecond: "9.9_s", 9960 * time.Millisecond: "10_s",
-		42300 * time.Millisecond: "42_s", 59600 * time.Millisecond: "1_min_00_s", 125 * time.Second: "2_min_05_s",
-		3599600 * time.Millisecond: "1_h_00_min", 3720 * time.Second: "1_h_02_min", -1340 * time.Millisecond: "~1.3_s",
-		math.MinInt64: "~2562047_h_47_min",
-	} {
-		equal(t, "Duration", Duration(d), want)
 	}
 }

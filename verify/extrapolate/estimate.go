@@ -34,7 +34,7 @@ func (s Status) Settled() bool { return s >= Monotone && s <= Converged }
 type Estimate struct {
 	Value       float64
 	Uncertainty float64 // half width, absolute
-	Order       float64 // Sizes: observed order; Orders: share of the error left after one order more; 0: not observed
+	Order       float64 // Sizes: observed order; Witnessed: share of the error left after one order more; 0: not observed
 	Status      Status
 	Notes       []string // short, lower case, for people
 }

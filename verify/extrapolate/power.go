@@ -2,21 +2,6 @@ package extrapolate
 
 import "math"
 
-// powerTail is the sum of all differences to come, in units of the last one,
-// when the error falls as order^-k: with e(p) = C p^-k,
-//
-//	e(p_n) / (e(p_n-1) - e(p_n)) = 1/((p_n/p_n-1)^k - 1).
-//
-// Of a geometric and a power law through the same two differences the power
-// law always has the larger tail, for its contraction weakens with p; for fast
-// contraction the two agree. k counts at least 1; the tail is not below that of
-// the fastest contraction believed, fastest/(1-fastest).
-func (t *trail) powerTail(k float64) float64 {
-	n := len(t.p)
-	tail := 1 / math.Expm1(math.Max(1, k)*math.Log(t.p[n-1]/t.p[n-2]))
-	return math.Max(tail, fastest/(1-fastest))
-}
-
 // powerThrough returns k such that C p^-k takes the differences d1 and d2
 // between three successive orders.
 func powerThrough(p []float64, d1, d2 float64) float64 {

@@ -5,13 +5,9 @@ import (
 	"slices"
 )
 
-// window is how many last differences are looked at: three contractions, the
-// least that can both set a law and confirm it twice. Older ones belong to
-// orders too low to have seen the notch.
+// window is how many last differences are looked at. Older ones belong to orders
+// too low to have seen the notch.
 const window = 4
-
-// lawSlack is how far contractions may differ and still follow one law.
-const lawSlack = 1.02
 
 // fastest is the smallest share of the error that one more rung is believed to leave.
 const fastest = 0.1
@@ -70,9 +66,9 @@ func (t *trail) recent(n int) float64 {
 	return m
 }
 
-func (t *trail) mixed() bool { return !t.same && !t.alternating || t.stalled }
-
-// diverges: see Orders. Differences of n^-1 sum to ln n, those of n^-(k+1) with
+// diverges tells that the differences have no sum: they keep their sign and do
+// not shrink as fast as 1/n (a sharp corner: order^s), or alternate and grow.
+// Differences of n^-1 sum to ln n, those of n^-(k+1) with
 // k > 0 to something finite, so the exponent from the older to the newer half of
 // the window decides, each half standing for its larger difference (odd and even
 // orders may differ). What has come down tenfold before is scatter, and growth at
@@ -109,91 +105,6 @@ func (t *trail) weakest() float64 {
 	return t.leastPower()
 }
 
-// bar returns the half width before rounding, and the name of the rule.
-func (t *trail) bar() (float64, string) {
-	switch {
-	case len(t.d) == 2:
-		tail := t.last(0)
-		if t.same {
-			tail *= math.Max(1, t.powerTail(t.leastPower()))
-		}
-		return safetyTrusted * math.Max(tail, fastest*t.last(1)), "one contraction seen, none confirmed"
-	case t.lawful() && (t.same || t.alternating):
-		return safetyObserved * t.lawfulTail(), "differences follow one law"
-	case t.same && !t.stalled:
-		return safetyTrusted * t.steadyTail(), "differences shrink by no single law"
-	case t.alternating && !t.stalled && t.holding():
-		return safetyTrusted * t.alternatingTail(), "differences alternate"
-	}
-	third := t.last(2)
-	if !t.stalled {
-		third *= t.envelopeShare()
-	}
-	return safetyTrusted * math.Max(t.recent(2), third), "differences wander"
-}
-
-// lawful: at least two contractions that agree, as a constant or as a power.
-func (t *trail) lawful() bool {
-	return !t.stalled && (agree(t.rates) || t.same && agree(t.powers))
-}
-
-func agree(x []float64) bool {
-	if len(x) < 2 {
-		return false
-	}
-	for i := 1; i < len(x); i++ {
-		if !(x[i] < x[i-1]*lawSlack && x[i] > x[i-1]/lawSlack) {
-			return false
-		}
-	}
-	return true
-}
-
-func (t *trail) lawfulTail() float64 {
-	if !agree(t.rates) {
-		return t.last(0) * t.powerTail(t.leastPower())
-	}
-	q := t.slowest()
-	tail := t.last(0) * q / (1 - q)
-	if t.alternating {
-		tail = math.Min(tail, t.last(0)/safetyObserved) // Leibniz: d is a bound as it stands
-	}
-	return tail
-}
-
-func (t *trail) steadyTail() float64 {
-	k := t.leastPower()
-	if n := len(t.powers); n > 1 && t.powers[n-1] < t.powers[n-2] {
-		now := t.powers[n-1]
-		k = math.Min(k, now*math.Max(0, now/t.powers[n-2]))
-	}
-	return math.Max(t.last(0), t.last(1)*t.slowest()) * t.powerTail(k)
-}
-
-// holding: the last contraction is no weaker than the one before it.
-func (t *trail) holding() bool {
-	n := len(t.rates)
-	return n < 2 || t.rates[n-1] >= t.rates[n-2]/lawSlack
-}
-
-func (t *trail) alternatingTail() float64 {
-	q := t.envelopeShare()
-	envelope := math.Max(t.last(0), math.Max(t.last(1)*q, t.last(2)*q*q))
-	if q >= 0.5 { // q/(1-q) would exceed 1
-		return envelope
-	}
-	return envelope * q / (1 - q)
-}
-
-// slowest is the larger of the last two contractions, not below fastest.
-func (t *trail) slowest() float64 {
-	q := fastest
-	for i := max(0, len(t.rates)-2); i < len(t.rates); i++ {
-		q = math.Max(q, math.Exp(-t.rates[i]))
-	}
-	return q
-}
-
 // leastPower is the smaller of the last two exponents.
 func (t *trail) leastPower() float64 {
 	k := math.Inf(1)
@@ -203,23 +114,13 @@ func (t *trail) leastPower() float64 {
 	return k
 }
 
-// envelopeShare is the contraction a rung of the larger of two neighbouring
-// differences, which one accidentally small difference cannot fake; in fastest..1.
-func (t *trail) envelopeShare() float64 {
-	var q float64
-	switch {
-	case len(t.d) == 2:
-		q = t.last(0) / t.last(1)
-	case len(t.d) == 3:
-		q = math.Max(t.recent(2)/math.Max(t.last(1), t.last(2)), math.Sqrt(t.last(0)/t.last(2)))
-	default:
-		q = math.Sqrt(math.Max(t.recent(2)/math.Max(t.last(2), t.last(3)), t.last(0)/t.last(2)))
+func checkOrders(orders []int, values []float64) {
+	if len(orders) != len(values) {
+		panic("extrapolate: orders and values differ in number")
 	}
-	return math.Min(math.Max(q, fastest), 1)
-}
-
-// share is the contraction a unit of order, as it is reported.
-func (t *trail) share() float64 {
-	n := len(t.p)
-	return math.Pow(t.envelopeShare(), 1/(t.p[n-1]-t.p[n-2]))
+	for i, p := range orders {
+		if p < 1 || i > 0 && p <= orders[i-1] {
+			panic("extrapolate: orders must grow from at least 1")
+		}
+	}
 }

@@ -34,8 +34,8 @@ import (
 // # Status
 //
 // At least three rungs; the witness must have shrunk over the last two steps
-// by more than a fifth (no credible tail otherwise: Undecided, or Diverging
-// where Orders says so of four rungs or more).
+// by more than a fifth (no credible tail otherwise: Undecided). Four rungs or more
+// whose differences have no sum are Diverging and have no value.
 //
 // It panics when the lengths differ or the orders do not grow from at least 1.
 func Witnessed(orders []int, values, wide, near []float64) Estimate {
@@ -60,27 +60,31 @@ func Witnessed(orders []int, values, wide, near []float64) Estimate {
 		e.Status, e.Uncertainty = Converged, near[n-1]+2*t.level
 		return e
 	}
-	share := w.share(n - 1)
-	differences := math.Min(math.Max(t.last(0)/t.last(1), fastest), weakestShare)
+	seen := w.share(n - 1)
+	share := math.Min(seen, WeakestShare)
+	differences := math.Min(math.Max(t.last(0)/t.last(1), fastest), WeakestShare)
 	e.Status = Monotone
 	if !t.same {
 		e.Status = Oscillatory
 	}
-	if share >= weakestShare {
+	if seen >= WeakestShare {
 		e.Status = Undecided
 		e.Notes = append(e.Notes, "the traction left on the free surface does not shrink")
-		share = weakestShare
 	}
-	e.Order = math.Sqrt(share * differences)
-	before := math.Min(w.share(n-2), weakestShare)
+	q := math.Sqrt(share * differences)
+	if e.Order = q; e.Status == Undecided {
+		e.Order = seen
+	}
+	before := math.Min(w.share(n-2), WeakestShare)
 	envelope := math.Max(t.last(0), t.last(1)*before)
-	e.Uncertainty = envelope*e.Order/(1-e.Order) + near[n-1] + t.level
+	e.Uncertainty = envelope*q/(1-q) + near[n-1] + t.level
 	return e
 }
 
-// weakestShare is the largest contraction whose tail is summed: the sum is then
+// WeakestShare is the largest share left by one order more whose tail is summed;
+// a ladder whose witness leaves more is undecided. The sum is then
 // four times the last difference, about as far as three rungs can be trusted.
-const weakestShare = 0.8
+const WeakestShare = 0.8
 
 // A witness is what was measured beside the values.
 type witness struct {

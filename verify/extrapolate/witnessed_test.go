@@ -117,3 +117,33 @@ func TestWitnessedScales(t *testing.T) {
 		t.Errorf("%+v, scaled %+v", one, many)
 	}
 }
+
+// TestWitnessedSeesGrowth: values that grow like a power of the order or its
+// logarithm, as at a sharp corner, are called diverging from four rungs on;
+// values that converge, however slowly, are not.
+func TestWitnessedSeesGrowth(t *testing.T) {
+	for _, row := range []struct {
+		name  string
+		value func(p float64) float64
+		grows bool
+	}{
+		{"order^0.1", func(p float64) float64 { return math.Pow(p, 0.1) }, true},
+		{"order^0.9", func(p float64) float64 { return math.Pow(p, 0.9) }, true},
+		{"logarithm", math.Log, true},
+		{"1/order", func(p float64) float64 { return 2 - 1/p }, false},
+		{"1/order^3", func(p float64) float64 { return 2 - 1/(p*p*p) }, false},
+		{"geometric", func(p float64) float64 { return 2 - math.Pow(0.7, p) }, false},
+	} {
+		for n := 4; n <= 7; n++ {
+			var orders []int
+			var values, witness []float64
+			for i := range n {
+				p := float64(i + 2)
+				orders, values, witness = append(orders, i+2), append(values, row.value(p)), append(witness, math.Pow(0.5, p))
+			}
+			if e := Witnessed(orders, values, witness, witness); (e.Status == Diverging) != row.grows {
+				t.Errorf("%s, %d rungs: %s", row.name, n, e.Status)
+			}
+		}
+	}
+}
