@@ -9,6 +9,7 @@ import (
 	"unicode/utf8"
 
 	"notchproof/scf"
+	"notchproof/verify/quantity"
 	"notchproof/verify/specimen"
 )
 
@@ -41,6 +42,10 @@ func hintOf(err error) string {
 	var input *specimen.InputError
 	if errors.As(err, &input) {
 		return input.Hint
+	}
+	var amount *quantity.Error
+	if errors.As(err, &amount) {
+		return amount.Hint
 	}
 	return ""
 }

@@ -24,11 +24,12 @@ var allowed = map[string]string{
 	"fem":                "mesh mesh/outline mesh/lagrange fem/cubature fem/sparse",
 	"scf":                "",
 	"verify/extrapolate": "",
-	"verify/specimen":    "mesh/outline fem scf",
+	"verify/quantity":    "",
+	"verify/specimen":    "mesh/outline fem scf verify/quantity",
 	"verify":             "mesh mesh/outline fem scf verify/extrapolate verify/specimen",
 	"render/number":      "",
 	"render":             "mesh mesh/outline mesh/lagrange fem scf verify verify/specimen render/number",
-	"cmd/notchproof":     "scf verify verify/specimen render render/number",
+	"cmd/notchproof":     "scf verify verify/specimen verify/quantity render render/number",
 }
 
 // TestImportsFollowTheFloorPlan names the file and the arrow that broke it.

@@ -158,6 +158,12 @@ func TestCount(t *testing.T) {
 	equal(t, "CountOf", CountOf(12345, "triangle", "triangles"), "12'345_triangles")
 }
 
+func TestQuantity(t *testing.T) {
+	equal(t, "Quantity", Quantity(12.3456, 4, "kN"), "12.35_kN")
+	equal(t, "Quantity", Quantity(-450, 4, "N·m"), "~450_N·m")
+	equal(t, "Quantity", Quantity(nan, 4, "MPa"), "–_MPa")
+}
+
 func TestLength(t *testing.T) {
 	for _, c := range []struct {
 		x    float64
