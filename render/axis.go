@@ -29,12 +29,13 @@ type mark struct {
 }
 
 // marks gives round values: on a logarithmic axis the powers of ten, with
-// multiples of each where there are few of them; on a straight one about six.
-func (a axis) marks() []mark {
+// multiples of each where there are few of them; on a straight one about as
+// many as are wished for.
+func (a axis) marks(wish int) []mark {
 	if a.log {
 		return a.powers()
 	}
-	step := roundStep((a.high - a.low) / 6)
+	step := roundStep((a.high - a.low) / float64(max(3, min(wish, 8))))
 	decimals := max(0, -int(math.Floor(math.Log10(step)+1e-9)))
 	if m := step * math.Pow(10, float64(decimals)); math.Abs(m-math.Round(m)) > 1e-6 {
 		decimals++ // steps of 2.5

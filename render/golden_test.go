@@ -100,15 +100,15 @@ func TestGoldenPicture(t *testing.T) {
 
 func TestGoldenSketch(t *testing.T) {
 	part := newPart(t, "bar-shoulder", scf.Dims{"D": 60, "d": 40, "r": 5, "c": 4})
-	golden(t, "bar_shoulder_sketch", Sketch(part, SketchOptions{Width: 480}))
+	golden(t, "bar_shoulder_sketch", SketchFigure(part).Image(FigureOptions{Pixels: 480}))
 }
 
 func TestGoldenStudy(t *testing.T) {
-	im, err := StudyPlot(geometric(), StudyOptions{Width: 480})
+	f, err := StudyFigure(geometric())
 	if err != nil {
 		t.Fatal(err)
 	}
-	golden(t, "study", im)
+	golden(t, "study", f.Image(FigureOptions{Pixels: 480}))
 }
 
 // A comparison that would pass anything is none: a line moved by two pixels,

@@ -29,6 +29,18 @@ func checkLayout(t *testing.T, s *sheet) {
 	}
 }
 
+// checkFigure holds a figure against the rules on wide and on narrow paper, in
+// pixels and as SVG.
+func checkFigure(t *testing.T, f *Figure) {
+	t.Helper()
+	for _, o := range []FigureOptions{{Pixels: 800}, {Millimetres: 160, Pixels: 800}, {Millimetres: 80, Pixels: 945}} {
+		checkLayout(t, f.sheet(o))
+		s, _ := f.vector(o)
+		checkLayout(t, s)
+		checkSVG(t, f.SVG(o))
+	}
+}
+
 func TestPictureLayout(t *testing.T) {
 	for _, c := range proportions {
 		t.Run(c.name, func(t *testing.T) {
@@ -45,7 +57,7 @@ func TestPictureLayout(t *testing.T) {
 func TestSketchLayout(t *testing.T) {
 	for _, c := range proportions {
 		t.Run(c.name, func(t *testing.T) {
-			checkLayout(t, sketch(newPart(t, c.family, c.dims), SketchOptions{Width: 800}))
+			checkLayout(t, SketchFigure(newPart(t, c.family, c.dims)).sheet(FigureOptions{Pixels: 800}))
 		})
 	}
 }
@@ -54,7 +66,7 @@ func TestSketchLayout(t *testing.T) {
 func TestSketchShowsEveryDimension(t *testing.T) {
 	for _, c := range proportions {
 		part := newPart(t, c.family, c.dims)
-		s := sketch(part, SketchOptions{Width: 800})
+		s := SketchFigure(part).sheet(FigureOptions{Pixels: 800})
 		want := 0
 		for _, p := range placementsOf(part) {
 			if p.Skip != nil && p.Skip(part.Dims) {

@@ -34,7 +34,7 @@ func TestOwnOutlines(t *testing.T) {
 				t.Fatal(err)
 			}
 			checkLayout(t, s)
-			checkLayout(t, sketch(part, SketchOptions{Width: 800}))
+			checkLayout(t, SketchFigure(part).sheet(FigureOptions{Pixels: 800}))
 			for _, want := range c.sizes {
 				found := false
 				for _, l := range s.texts {

@@ -9,61 +9,60 @@ type panel struct {
 	x, y  axis
 }
 
-// newPanel rules a frame with both scales and the grid behind.
-func (s *sheet) newPanel(frame box, x, y axis, title, below string) *panel {
-	x.from, x.to = frame.X0, frame.X1
-	y.from, y.to = frame.Y1, frame.Y0
-	p := &panel{s, frame, x, y}
-	s.text(point{frame.X0, frame.Y0 - s.u(14)}, 0, 1, title, strong, ink)
-	s.text(point{frame.X1, frame.Y1 + s.u(36)}, 1, 0, below, small, grey)
-	for _, m := range y.marks() {
-		at := y.at(m.value)
-		s.pen(pale, hairline)
-		s.line(point{frame.X0, at}, point{frame.X1, at})
-		s.text(point{frame.X0 - s.u(9), at}, 1, 0.5, m.text, small, ink)
+// markApart is the least distance between marks of an axis, in units.
+const markApart = 44
+
+// newPanel rules a frame inside a cell with both scales and the grid behind.
+// Right is the room to keep free on its right side, in pixels.
+func (s *sheet) newPanel(cell box, d Diagram, right float64) *panel {
+	p := &panel{sheet: s}
+	p.x, p.y = d.scales()
+	p.frame = box{cell.X0, cell.Y0 + s.u(diagramHead), cell.X1 - right, cell.Y1 - s.u(diagramFoot)}
+	ys := p.y.marks(int(p.frame.height() / s.u(markApart)))
+	left := 0.0
+	for _, m := range ys {
+		left = math.Max(left, s.measure(m.text, small))
 	}
-	last := math.Inf(-1)
-	for _, m := range x.marks() {
-		at := x.at(m.value)
-		s.pen(pale, hairline)
-		s.line(point{at, frame.Y0}, point{at, frame.Y1})
-		if b := s.place(point{at, frame.Y1 + s.u(8)}, 0.5, 0, m.text, small); b.X0 > last+s.u(8) {
-			last = s.text(point{at, frame.Y1 + s.u(8)}, 0.5, 0, m.text, small, ink).X1
-		}
+	p.frame.X0 += left + s.u(12)
+	p.x.from, p.x.to = p.frame.X0, p.frame.X1
+	p.y.from, p.y.to = p.frame.Y1, p.frame.Y0
+	xs := p.apart(p.x.marks(max(3, int(p.frame.width()/s.u(2*markApart)))))
+	p.rule(xs, ys)
+	s.text(point{cell.X0, p.frame.Y0 - s.u(12)}, 0, 1, s.fit(d.Y.text(), strong, cell.width()), strong, ink)
+	for _, m := range ys {
+		s.text(point{p.frame.X0 - s.u(9), p.y.at(m.value)}, 1, 0.5, m.text, small, ink)
 	}
-	s.rectangle(frame, narrow, ink)
+	for _, m := range xs {
+		s.text(point{p.x.at(m.value), p.frame.Y1 + s.u(9)}, 0.5, 0, m.text, small, ink)
+	}
+	s.text(point{p.frame.X1, p.frame.Y1 + s.u(37)}, 1, 0, s.fit(d.X.text(), small, p.frame.width()), small, ink)
 	return p
 }
 
-func (p *panel) position(x, y float64) point { return point{p.x.at(x), p.y.at(y)} }
-
-// curve joins points by straight lines and marks each by a dot.
-func (p *panel) curve(ps []point) {
-	p.pen(ink, 1.8)
-	p.polyline(ps)
-	p.dc.Stroke()
-	length := lengthOf(ps)
-	for d := 0.0; d < length; d += p.u(6) { // lettering keeps off the line
-		q := pointAlong(ps, d)
-		p.take(box{q.X, q.Y, q.X, q.Y}.grown(p.u(3)))
+// rule draws the grid and the frame.
+func (p *panel) rule(xs, ys []mark) {
+	p.pen(pale, hairline)
+	for _, m := range ys {
+		p.line(point{p.frame.X0, p.y.at(m.value)}, point{p.frame.X1, p.y.at(m.value)})
 	}
-	for _, q := range ps {
-		p.dc.DrawCircle(q.X, q.Y, p.u(5))
-		p.dc.SetColor(paper)
-		p.dc.FillPreserve()
-		p.pen(ink, 1.8)
-		p.dc.Stroke()
-		p.take(box{q.X, q.Y, q.X, q.Y}.grown(p.u(7)))
+	for _, m := range xs {
+		p.line(point{p.x.at(m.value), p.frame.Y0}, point{p.x.at(m.value), p.frame.Y1})
 	}
+	p.rectangle(p.frame, narrow, ink)
 }
 
-// name letters a point where there is room beside it.
-func (p *panel) name(q point, text string) {
-	for _, d := range [8][4]float64{{0, -11, 0.5, 1}, {9, -9, 0, 1}, {13, 0, 0, 0.5}, {0, 11, 0.5, 0}, {9, 9, 0, 0}, {-13, 0, 1, 0.5}, {-9, 9, 1, 0}, {-9, -9, 1, 1}} {
-		at := q.plus(p.u(d[0]), p.u(d[1]))
-		if b := p.sheet.place(at, d[2], d[3], text, small); p.free(b) && p.frame.holds(b) {
-			p.text(at, d[2], d[3], text, small, ink)
-			return
+// apart leaves out the marks of the x axis whose lettering would touch that of
+// the one before.
+func (p *panel) apart(marks []mark) []mark {
+	var kept []mark
+	last := math.Inf(-1)
+	for _, m := range marks {
+		half := p.measure(m.text, small) / 2
+		if at := p.x.at(m.value); at-half > last+p.u(10) && at+half < p.sheet.frame.X1-p.u(4) {
+			kept, last = append(kept, m), at+half
 		}
 	}
+	return kept
 }
+
+func (p *panel) position(x, y float64) point { return point{p.x.at(x), p.y.at(y)} }

@@ -3,7 +3,6 @@ package render
 import (
 	"image"
 	"image/color"
-	"image/draw"
 	"math"
 
 	"github.com/fogleman/gg"
@@ -33,9 +32,10 @@ const (
 
 // A sheet is the paper being drawn on, with a record of the places taken.
 type sheet struct {
-	dc    *gg.Context
-	im    *image.RGBA
-	scale float64 // pixels per unit
+	dc    plotter
+	im    *image.RGBA // what dc draws on; nil where that is not made of pixels
+	scale float64     // pixels per unit
+	paper box         // all of it
 	frame box
 	faces map[lettering]font.Face
 	taken []box   // places that lettering keeps clear of
@@ -65,14 +65,10 @@ func newSheet(width int, height float64) *sheet {
 	}
 	width = max(width, leastWidth)
 	scale := float64(width) / defaultWidth
-	im := image.NewRGBA(image.Rect(0, 0, width, int(math.Round(height*scale))))
-	draw.Draw(im, im.Bounds(), image.NewUniform(paper), image.Point{}, draw.Src)
-	s := &sheet{
-		dc: gg.NewContextForRGBA(im), im: im, scale: scale,
-		faces: make(map[lettering]font.Face),
-	}
-	size := im.Bounds().Size()
-	s.frame = box{0, 0, float64(size.X), float64(size.Y)}.grown(-s.u(frameMargin))
+	im := blank(width, int(math.Round(height*scale)))
+	s := newSheetOn(pixels{gg.NewContextForRGBA(im)}, scale, sizeOf(im))
+	s.im = im
+	s.frame = s.paper.grown(-s.u(frameMargin))
 	s.rectangle(s.frame, wide, ink)
 	return s
 }

@@ -136,15 +136,14 @@ func coverage(area image.Rectangle, polygons ...[]point) *image.Alpha {
 // within makes strokes appear inside a view's window only, until the clip is
 // reset.
 func (s *sheet) within(v *view) {
-	if err := s.dc.SetMask(coverage(s.im.Bounds(), v.window)); err != nil {
-		panic("render: mask of another size than the sheet")
-	}
+	s.polyline(v.window)
+	s.dc.ClosePath()
+	s.dc.Clip()
 }
 
 // edges strokes the boundary of the part in a view.
 func (s *sheet) edges(v *view, part *specimen.Part, width float64, c color.Color) {
 	s.pen(c, width)
-	s.dc.SetLineJoinRound()
 	for _, line := range v.edges(part) {
 		s.polyline(line)
 	}

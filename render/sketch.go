@@ -1,24 +1,22 @@
 package render
 
-import (
-	"image"
+import "notchproof/verify/specimen"
 
-	"notchproof/verify/specimen"
-)
-
-// SketchOptions say how a sketch is drawn. The zero value is the default.
-type SketchOptions struct {
-	Width int // pixels; 0: 1600
-}
-
-// Sketch draws a part with its dimensions and without stresses, so that a
+// SketchFigure draws a part with its dimensions and without stresses, so that a
 // reader sees what the dimensions of a family mean. Lengths stand as they are
 // in the part's unit.
-func Sketch(part *specimen.Part, o SketchOptions) image.Image { return sketch(part, o).im }
+func SketchFigure(part *specimen.Part) *Figure {
+	return &Figure{
+		title:       "Sketch: " + titleText(part),
+		description: dimensionText(part),
+		height:      func(float64) float64 { return sketchHeight },
+		draw:        func(s *sheet) { s.sketch(part) },
+	}
+}
 
-func sketch(part *specimen.Part, o SketchOptions) *sheet {
-	const height = 760
-	s := newSheet(o.Width, height)
+const sketchHeight = 760
+
+func (s *sheet) sketch(part *specimen.Part) {
 	v, left, right := mainView(part, s.area(150, 90, 1450, 610), s.scale)
 	s.within(v)
 	s.dc.SetColor(hatch)
@@ -34,12 +32,11 @@ func sketch(part *specimen.Part, o SketchOptions) *sheet {
 		s.symmetry(v, 18)
 	}
 	s.annotate(v, part, left, right, true)
-	base := s.u(height - 62)
+	base := s.u(sketchHeight - 62)
 	name := s.text(point{s.u(50), base}, 0, 0.5, part.Name, head, ink)
 	unit := s.text(point{s.u(1550), base}, 1, 0.5, unitText(part.Unit), normal, grey)
 	title := s.fit(titleText(part), normal, unit.X0-name.X1-s.u(40))
 	s.text(point{name.X1 + s.u(18), base + s.u(2)}, 0, 0.5, title, normal, grey)
-	return s
 }
 
 // area gives a rectangle of the sheet from units.

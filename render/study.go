@@ -2,7 +2,6 @@ package render
 
 import (
 	"errors"
-	"image"
 	"math"
 
 	"notchproof/render/number"
@@ -11,11 +10,14 @@ import (
 // A Study is a ladder of solves to be plotted.
 type Study struct {
 	Title  string // what was solved: "shaft-shoulder, bending"
-	Note   string // one line below: what the study says
+	Note   string // below: the dimensions, and what the study says
 	Points []StudyPoint
 	// Limit is the value that the ladder tends to, Uncertainty how far it may be
 	// off; NaN when there is none.
 	Limit, Uncertainty float64
+	// Order is the power of the element size with which the error is expected to
+	// fall; 0: none is, as when the order climbs.
+	Order float64
 }
 
 // A StudyPoint is one rung.
@@ -24,28 +26,15 @@ type StudyPoint struct {
 	Unknowns int     // above zero
 	Factor   float64 // finite
 	Change   float64 // size of the change from the rung before; 0 or NaN: none to show
+	Traction float64 // left on the free surface at the peak; 0 or NaN: none to show
 }
 
-// StudyOptions say how a study is plotted. The zero value is the default.
-type StudyOptions struct {
-	Width int // pixels; 0: 1600
-}
-
-// StudyPlot plots a convergence study: the factor against the number of
+// StudyFigure plots a convergence study: the factor against the number of
 // unknowns with its limit and the band of its uncertainty, and the size of the
-// changes on logarithmic scales, on which an algebraic order is a straight line
-// and a geometric one bends down.
-func StudyPlot(study Study, o StudyOptions) (image.Image, error) {
-	s, err := studyPlot(study, o)
-	if err != nil {
-		return nil, err
-	}
-	return s.im, nil
-}
-
-const studyHeight = 720
-
-func studyPlot(study Study, o StudyOptions) (*sheet, error) {
+// changes and of the traction that is left on logarithmic scales, on which an
+// algebraic order is a straight line and a geometric one bends down. It fails on
+// a study without rungs and on rungs without unknowns or factor.
+func StudyFigure(study Study) (*Figure, error) {
 	if len(study.Points) == 0 {
 		return nil, errors.New("study plot: no rungs")
 	}
@@ -54,96 +43,70 @@ func studyPlot(study Study, o StudyOptions) (*sheet, error) {
 			return nil, errors.New("study plot: rung " + p.Label + " has no unknowns or no factor")
 		}
 	}
-	s := newSheet(o.Width, studyHeight)
-	s.text(point{s.u(56), s.u(66)}, 0, 0.5, s.fit(study.Title, head, s.u(900)), head, ink)
-	s.text(point{s.u(56), s.u(studyHeight - 58)}, 0, 0.5, s.fit(study.Note, normal, s.u(1300)), normal, ink)
-	s.text(point{s.u(1544), s.u(studyHeight - 58)}, 1, 0.5, "notchproof", strong, ink)
-	s.values(s.area(150, 140, 790, 570), study)
-	s.changes(s.area(930, 140, 1540, 570), study)
-	return s, nil
+	plot := Plot{Title: study.Title, Note: study.Note, Diagrams: []Diagram{study.factors()}}
+	if d := study.errors(); len(d.Curves) > 0 {
+		plot.Diagrams = append(plot.Diagrams, d)
+	}
+	return Chart(plot)
 }
 
-// unknowns is the axis of both panels.
-func (study Study) unknowns() axis {
+// unknowns is the axis of both diagrams.
+func (study Study) unknowns() Axis {
 	low, high := math.Inf(1), 0.0
 	for _, p := range study.Points {
 		low, high = math.Min(low, float64(p.Unknowns)), math.Max(high, float64(p.Unknowns))
 	}
-	low, high = around(low, high, 0.12, true)
-	return axis{low: low, high: high, log: true}
+	low, high = around(low, high, 0.14, true)
+	return Axis{Label: "unknowns", Log: true, Low: low, High: high}
 }
 
-// values draws the panel of the factor.
-func (s *sheet) values(frame box, study Study) {
-	low, high := math.Inf(1), math.Inf(-1)
+func (study Study) factors() Diagram {
+	d := Diagram{X: study.unknowns(), Y: Axis{Label: "factor"}}
+	c := Curve{Marked: true}
 	for _, p := range study.Points {
-		low, high = math.Min(low, p.Factor), math.Max(high, p.Factor)
+		c.Points = append(c.Points, CurvePoint{X: float64(p.Unknowns), Y: p.Factor, Label: p.Label})
 	}
-	limited := !math.IsNaN(study.Limit) && !math.IsInf(study.Limit, 0) && study.Uncertainty >= 0 && !math.IsInf(study.Uncertainty, 0)
-	if limited {
-		low, high = math.Min(low, study.Limit-study.Uncertainty), math.Max(high, study.Limit+study.Uncertainty)
+	d.Curves = []Curve{c}
+	if !math.IsNaN(study.Limit) && !math.IsInf(study.Limit, 0) && study.Uncertainty >= 0 && !math.IsInf(study.Uncertainty, 0) {
+		d.Levels = []Level{{number.Uncertain(study.Limit, study.Uncertainty), study.Limit, study.Uncertainty}}
 	}
-	low, high = around(low, high, 0.14, false)
-	p := s.newPanel(frame, study.unknowns(), axis{low: low, high: high}, "factor", "unknowns")
-	if limited {
-		p.band(study)
-	}
-	var ps []point
-	for _, q := range study.Points {
-		ps = append(ps, p.position(float64(q.Unknowns), q.Factor))
-	}
-	p.curve(ps)
-	for i, q := range study.Points {
-		p.name(ps[i], q.Label)
-	}
+	return d
 }
 
-// band draws the limit and its uncertainty.
-func (p *panel) band(study Study) {
-	top, bottom := p.y.at(study.Limit+study.Uncertainty), p.y.at(study.Limit-study.Uncertainty)
-	p.dc.SetColor(tone(0.12))
-	p.dc.DrawRectangle(p.frame.X0, top, p.frame.width(), math.Max(bottom-top, 1))
-	p.dc.Fill()
-	y := p.y.at(study.Limit)
-	p.pen(accent, narrow)
-	p.dashed()
-	p.line(point{p.frame.X0, y}, point{p.frame.X1, y})
-	p.dc.SetDash()
-	text := number.Uncertain(study.Limit, study.Uncertainty)
-	at := point{p.frame.X0 + p.u(10), math.Min(top, y) - p.u(4)}
-	if b := p.sheet.place(at, 0, 1, text, small); b.Y0 < p.frame.Y0 {
-		at.Y = math.Max(bottom, y) + p.u(4) + b.height()
-	}
-	p.text(at, 0, 1, text, small, accent)
-	p.take(box{p.frame.X0, y - 1, p.frame.X1, y + 1})
-}
-
-// changes draws the panel of the differences between rungs.
-func (s *sheet) changes(frame box, study Study) {
-	low, high := math.Inf(1), 0.0
-	var shown []StudyPoint
+// errors is the diagram of what is known of the error of each rung.
+func (study Study) errors() Diagram {
+	d := Diagram{X: study.unknowns(), Y: Axis{Label: "error of the factor", Log: true}}
+	changes, traction := Curve{Label: "change from the rung before", Marked: true}, Curve{Label: "traction left at the peak", Marked: true}
 	for _, p := range study.Points {
-		if p.Change > 0 && !math.IsInf(p.Change, 0) {
-			shown = append(shown, p)
-			low, high = math.Min(low, p.Change), math.Max(high, p.Change)
+		x := float64(p.Unknowns)
+		if d.Y.shows(p.Change) {
+			changes.Points = append(changes.Points, CurvePoint{X: x, Y: p.Change})
+		}
+		if d.Y.shows(p.Traction) {
+			traction.Points = append(traction.Points, CurvePoint{X: x, Y: p.Traction})
 		}
 	}
-	const title = "change from the rung before"
-	if len(shown) == 0 {
-		s.rectangle(frame, narrow, ink)
-		s.text(point{frame.X0, frame.Y0 - s.u(14)}, 0, 1, title, strong, ink)
-		x, y := frame.middle()
-		s.text(point{x, y}, 0.5, 0.5, "none", normal, grey)
-		return
+	for _, c := range []Curve{changes, traction} {
+		if len(c.Points) > 0 {
+			d.Curves = append(d.Curves, c)
+		}
 	}
-	low, high = around(low, high, 0.14, true)
-	p := s.newPanel(frame, study.unknowns(), axis{low: low, high: high, log: true}, title, "unknowns")
-	var ps []point
-	for _, q := range shown {
-		ps = append(ps, p.position(float64(q.Unknowns), q.Change))
+	if slope, ok := study.slope(changes.Points); ok {
+		d.Curves = append(d.Curves, slope)
 	}
-	p.curve(ps)
-	for i, q := range shown {
-		p.name(ps[i], q.Label)
+	return d
+}
+
+// slope is the line of the expected order through the last change. In the plane
+// the number of unknowns goes with the inverse square of the element size.
+func (study Study) slope(changes []CurvePoint) (Curve, bool) {
+	n := len(changes)
+	if n < 2 || study.Order <= 0 {
+		return Curve{}, false
 	}
+	first, last := changes[0], changes[n-1]
+	const above = 1.6 // clear of the curve itself
+	start := CurvePoint{X: first.X, Y: above * last.Y * math.Pow(last.X/first.X, study.Order/2)}
+	return Curve{Label: "order " + number.Compact(study.Order, 3), Line: Dashed,
+		Points: []CurvePoint{start, {X: last.X, Y: above * last.Y}}}, true
 }

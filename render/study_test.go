@@ -22,20 +22,20 @@ func TestStudyLayout(t *testing.T) {
 	nan := math.NaN()
 	studies := map[string]Study{
 		"geometric": geometric(),
-		"one rung":  {Title: "t", Note: "n", Points: []StudyPoint{{"order 3", 100, 2, 0}}, Limit: nan, Uncertainty: nan},
-		"equal":     {Title: "t", Note: "n", Points: []StudyPoint{{"a", 100, 2, 0}, {"b", 200, 2, 0}}, Limit: 2, Uncertainty: 0},
-		"no limit": {Title: "t", Note: "diverges", Points: []StudyPoint{{"a", 100, 2, 0}, {"b", 200, 3, 1}, {"c", 500000, 9, 6}},
+		"one rung":  {Title: "t", Note: "n", Points: []StudyPoint{{Label: "order 3", Unknowns: 100, Factor: 2}}, Limit: nan, Uncertainty: nan},
+		"equal":     {Title: "t", Note: "n", Points: []StudyPoint{{Label: "a", Unknowns: 100, Factor: 2, Change: 0}, {Label: "b", Unknowns: 200, Factor: 2, Change: 0}}, Limit: 2, Uncertainty: 0},
+		"no limit": {Title: "t", Note: "diverges", Points: []StudyPoint{{Label: "a", Unknowns: 100, Factor: 2, Change: 0}, {Label: "b", Unknowns: 200, Factor: 3, Change: 1}, {Label: "c", Unknowns: 500000, Factor: 9, Change: 6}},
 			Limit: nan, Uncertainty: math.Inf(1)},
 		"crowded": {Title: "t", Note: "n", Limit: 3, Uncertainty: 1e-12, Points: []StudyPoint{
-			{"order 3", 100, 3.1, nan}, {"order 4", 101, 3.0001, 0.1}, {"order 5", 102, 3.00000001, 1e-4}, {"order 6", 103, 3, 1e-11}}},
+			{Label: "order 3", Unknowns: 100, Factor: 3.1, Change: nan}, {Label: "order 4", Unknowns: 101, Factor: 3.0001, Change: 0.1}, {Label: "order 5", Unknowns: 102, Factor: 3.00000001, Change: 1e-4}, {Label: "order 6", Unknowns: 103, Factor: 3, Change: 1e-11}}},
 	}
 	for name, study := range studies {
 		t.Run(name, func(t *testing.T) {
-			s, err := studyPlot(study, StudyOptions{})
+			f, err := StudyFigure(study)
 			if err != nil {
 				t.Fatal(err)
 			}
-			checkLayout(t, s)
+			checkFigure(t, f)
 		})
 	}
 }
@@ -43,11 +43,11 @@ func TestStudyLayout(t *testing.T) {
 func TestStudyRefusesNonsense(t *testing.T) {
 	for _, study := range []Study{
 		{},
-		{Points: []StudyPoint{{"a", 0, 2, 0}}},
-		{Points: []StudyPoint{{"a", 10, math.NaN(), 0}}},
-		{Points: []StudyPoint{{"a", 10, math.Inf(1), 0}}},
+		{Points: []StudyPoint{{Label: "a", Unknowns: 0, Factor: 2, Change: 0}}},
+		{Points: []StudyPoint{{Label: "a", Unknowns: 10, Factor: math.NaN(), Change: 0}}},
+		{Points: []StudyPoint{{Label: "a", Unknowns: 10, Factor: math.Inf(1), Change: 0}}},
 	} {
-		if _, err := StudyPlot(study, StudyOptions{}); err == nil {
+		if _, err := StudyFigure(study); err == nil {
 			t.Errorf("%v was plotted", study.Points)
 		}
 	}
@@ -64,7 +64,7 @@ func TestAxis(t *testing.T) {
 	}
 	for _, c := range []struct{ low, high float64 }{{1.9, 2.1}, {0, 1}, {1.97567, 1.97581}, {-5, 1234}, {1e-9, 3e-9}} {
 		b := axis{low: c.low, high: c.high, from: 0, to: 1}
-		marks := b.marks()
+		marks := b.marks(6)
 		if len(marks) < 3 || len(marks) > 9 {
 			t.Errorf("%v: %d marks", c, len(marks))
 		}

@@ -42,9 +42,8 @@ func (s *sheet) place(p point, ax, ay float64, text string, l lettering) box {
 func (s *sheet) text(p point, ax, ay float64, text string, l lettering, c color.Color) box {
 	text = legible(text)
 	b := s.place(p, ax, ay, text, l)
-	s.dc.SetFontFace(s.face(l))
 	s.dc.SetColor(c)
-	s.dc.DrawString(text, b.X0, b.Y0+baseline*b.height())
+	s.dc.letter(text, point{b.X0, b.Y0 + baseline*b.height()}, b.width(), l, s.face(l))
 	s.texts = append(s.texts, label{text, l, b})
 	s.take(b)
 	return b

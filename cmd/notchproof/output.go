@@ -5,17 +5,23 @@ import (
 	"io"
 	"os"
 	"path/filepath"
+	"slices"
 	"strings"
 )
 
 // checkOutput refuses, before any work is done, a name that could not be
-// written. An empty name asks for no file.
-func checkOutput(name, extension string) error {
+// written. An empty name asks for no file. The extensions are those of the
+// formats that there are.
+func checkOutput(name string, extensions ...string) error {
 	if name == "" {
 		return nil
 	}
-	if !strings.EqualFold(filepath.Ext(name), extension) {
-		return &inputError{text: "-o " + quoted(name) + ": not a name that ends in " + extension, hint: "the file is written in that format alone"}
+	if !slices.ContainsFunc(extensions, func(e string) bool { return strings.EqualFold(filepath.Ext(name), e) }) {
+		hint := "the file is written in that format alone"
+		if len(extensions) > 1 {
+			hint = "the ending of the name chooses the format"
+		}
+		return &inputError{text: "-o " + quoted(name) + ": not a name that ends in " + strings.Join(extensions, " or "), hint: hint}
 	}
 	info, err := os.Stat(filepath.Dir(name))
 	if err != nil || !info.IsDir() {

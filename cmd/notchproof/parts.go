@@ -29,7 +29,7 @@ the part as a part file with its outline, to start one of your own from.
 
 func runParts(c *call) (int, error) {
 	var q questions
-	file := c.flags.StringP("output", "o", "", "write a dimensioned sketch to this PNG file")
+	file := c.flags.StringP("output", "o", "", "write a dimensioned sketch to this .png or .svg file")
 	asFile := c.flags.Bool("as-file", false, "print the part as a part file")
 	q.partFlags(c.flags)
 	args, err := c.parse()
@@ -62,7 +62,7 @@ func runParts(c *call) (int, error) {
 	if err != nil {
 		return 0, err
 	}
-	if err := checkOutput(*file, ".png"); err != nil {
+	if err := checkOutput(*file, figureFormats...); err != nil {
 		return 0, err
 	}
 	if *asFile {
@@ -74,8 +74,7 @@ func runParts(c *call) (int, error) {
 	if *file == "" {
 		return exitAgrees, nil
 	}
-	im := render.Sketch(part, render.SketchOptions{})
-	if err := writeFile(*file, func(w io.Writer) error { return render.WritePNG(w, im) }); err != nil {
+	if err := writeFigure(*file, render.SketchFigure(part), render.FigureOptions{}); err != nil {
 		return 0, err
 	}
 	fmt.Fprintf(c.stdout, "\nsketch written to %s\n", *file)

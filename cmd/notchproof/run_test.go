@@ -38,6 +38,8 @@ func TestExitStatuses(t *testing.T) {
 		{"check bar-shoulder D=60mm d=40mm r=4mm --load tension --target 1e-9", exitAgrees, "uncertainty"},
 		{"study bar-shoulder D=60mm d=40mm r=4mm --order 3 --rungs 3", exitAgrees, "grid convergence index"},
 		{"study bar-shoulder D=60mm d=40mm r=4mm --by order -o " + filepath.Join(dir, "é_ü.png"), exitAgrees, "plot written"},
+		{"study bar-shoulder D=60mm d=40mm r=4mm --order 3 --rungs 3 -o " + filepath.Join(dir, "s.svg"), exitAgrees, "plot written"},
+		{"parts shaft-groove -o " + filepath.Join(dir, "p.SVG"), exitAgrees, "sketch written"},
 		{"picture bar-shoulder D=60mm d=40mm r=4mm --width 400 -o " + filepath.Join(dir, "p.png"), exitAgrees, "picture written"},
 		{"parts", exitAgrees, "shaft-shoulder"},
 		{"parts bar-shoulder", exitAgrees, "typical proportions"},

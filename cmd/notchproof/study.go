@@ -39,7 +39,7 @@ func runStudy(c *call) (int, error) {
 	by := c.flags.String("by", "size", "what is refined: size or order")
 	order := c.flags.Int("order", 0, "order of the elements in a study by size, 1 to 8 (default 2)")
 	rungs := c.flags.Int("rungs", 0, "number of meshes in a study by size, 3 to 6 (default 4)")
-	file := c.flags.StringP("output", "o", "", "write the plot to this PNG file")
+	file := c.flags.StringP("output", "o", "", "write the plot to this .png or .svg file")
 	q.loadFlag(c.flags)
 	q.partFlags(c.flags)
 	args, err := c.parse()
@@ -54,7 +54,7 @@ func runStudy(c *call) (int, error) {
 	if err != nil {
 		return 0, err
 	}
-	if err := checkOutput(*file, ".png"); err != nil {
+	if err := checkOutput(*file, figureFormats...); err != nil {
 		return 0, err
 	}
 	debug.SetGCPercent(100)
@@ -69,11 +69,11 @@ func runStudy(c *call) (int, error) {
 		return 0, err
 	}
 	if *file != "" {
-		im, err := render.StudyPlot(plotOf(s), render.StudyOptions{})
+		figure, err := render.StudyFigure(plotOf(s))
 		if err != nil {
 			return 0, err
 		}
-		if err := writeFile(*file, func(w io.Writer) error { return render.WritePNG(w, im) }); err != nil {
+		if err := writeFigure(*file, figure, render.FigureOptions{}); err != nil {
 			return 0, err
 		}
 		fmt.Fprintf(c.stdout, "\nplot written to %s\n", *file)
@@ -163,12 +163,15 @@ func plotOf(s *verify.Study) render.Study {
 			p.Limit = s.Sizes.Limit
 		}
 	}
+	if s.Sizes != nil {
+		p.Order = float64(s.Rows[0].Order) // surface stresses of elements of order p converge with h^p
+	}
 	for _, r := range s.Rows {
 		label := fmt.Sprintf("order %d", r.Order)
 		if s.Sizes != nil {
 			label = fmt.Sprintf("%.3g per 90°", r.PerQuarter)
 		}
-		p.Points = append(p.Points, render.StudyPoint{Label: label, Unknowns: r.Unknowns, Factor: r.Factor, Change: math.Abs(r.Change)})
+		p.Points = append(p.Points, render.StudyPoint{Label: label, Unknowns: r.Unknowns, Factor: r.Factor, Change: math.Abs(r.Change), Traction: r.Leftover})
 	}
 	return p
 }
