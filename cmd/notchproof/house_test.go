@@ -29,7 +29,8 @@ var allowed = map[string]string{
 	"verify":             "mesh mesh/outline fem scf verify/extrapolate verify/specimen",
 	"render/number":      "",
 	"render":             "mesh mesh/outline mesh/lagrange fem scf verify verify/specimen render/number",
-	"cmd/notchproof":     "scf verify verify/specimen verify/quantity render render/number",
+	"verify/sizing":      "scf verify verify/specimen",
+	"cmd/notchproof":     "scf verify verify/sizing verify/specimen verify/quantity render render/number",
 }
 
 // TestImportsFollowTheFloorPlan names the file and the arrow that broke it.

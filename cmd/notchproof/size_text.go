@@ -1,0 +1,121 @@
+package main
+
+import (
+	"fmt"
+	"io"
+	"strings"
+
+	"notchproof/render/number"
+	"notchproof/scf"
+	"notchproof/verify/sizing"
+	"notchproof/verify/specimen"
+)
+
+// writeSizeText prints the answer for people.
+func writeSizeText(w io.Writer, s *sizeQuestion, st style) error {
+	var b strings.Builder
+	if s.shape.title != "" {
+		fmt.Fprintf(&b, "%s\n", s.shape.title)
+	}
+	fmt.Fprintf(&b, "%s  %s\n", st.bold(s.shape.family.Name), s.others())
+	s.questionText(&b, st)
+	s.answerText(&b, st)
+	s.searchText(&b, st)
+	b.WriteString("\n" + caution)
+	_, err := io.WriteString(w, b.String())
+	return err
+}
+
+func (s *sizeQuestion) questionText(b *strings.Builder, st style) {
+	fmt.Fprintf(b, "\n%s", st.bold(string(s.load)))
+	if p := s.part(s.answer.At.At); p != nil {
+		l, _ := p.Load(s.load)
+		fmt.Fprintf(b, ", nominal stress %s (%s)", l.Nominal.Formula, l.Nominal.Section)
+	}
+	which := "smallest"
+	if s.answer.Outcome == sizing.Met && !s.answer.Falling {
+		which = "largest"
+	}
+	fmt.Fprintf(b, "\n  asked      the %s %s with %s ≤ %s\n", which, s.dimension, s.symbol(), number.Compact(s.question.Limit, 6))
+}
+
+func (s *sizeQuestion) symbol() string {
+	if s.load == scf.Torsion {
+		return "Kts"
+	}
+	return "Kt"
+}
+
+// length writes a value of the dimension.
+func (s *sizeQuestion) length(x float64) string {
+	if s.unit() == "°" {
+		return number.Compact(x, 6) + "°"
+	}
+	return number.Length(round(x, 6), s.unit())
+}
+
+// known writes a value of the dimension with its bar.
+func (s *sizeQuestion) known(x, bar float64) string {
+	text := number.Uncertain(x, bar)
+	if u := s.unit(); u == "°" {
+		return "(" + text + ")°"
+	} else if u != "" {
+		text += "\u00a0" + u
+	}
+	return text
+}
+
+func (s *sizeQuestion) at(x sizing.Sample) string {
+	return fmt.Sprintf("%s = %s", s.symbol(), number.Uncertain(x.Factor, x.FactorBar))
+}
+
+func (s *sizeQuestion) answerText(b *strings.Builder, st style) {
+	a := s.answer
+	switch a.Outcome {
+	case sizing.Met:
+		fmt.Fprintf(b, "  answer     %s, where %s\n", st.bold(s.dimension+" = "+s.known(a.At.At, a.Bar)), s.at(a.At))
+		s.roundedText(b)
+	case sizing.Throughout:
+		fmt.Fprintf(b, "  answer     %s\n             at %s = %s %s\n", st.bold("every "+s.dimension+" that was looked at meets it"), s.dimension, s.length(a.At.At), s.at(a.At))
+	case sizing.Beyond:
+		fmt.Fprintf(b, "  answer     %s\n             the best is %s = %s with %s\n", st.bad("no "+s.dimension+" meets it"), s.dimension, s.length(a.At.At), s.at(a.At))
+	default:
+		fmt.Fprintf(b, "  answer     %s\n             at %s = %s: %s\n", st.weak("undecided"), s.dimension, s.length(a.At.At), oneLine(a.At.Why))
+	}
+	if a.Outcome != sizing.Undecided && a.At.Why != "" {
+		fmt.Fprintf(b, "  %s %s\n", st.weak("warning"), oneLine(a.At.Why))
+	}
+}
+
+func (s *sizeQuestion) roundedText(b *strings.Builder) {
+	r := s.answer.Rounded
+	if r == nil {
+		b.WriteString("  rounded    no drawing step nearby meets it with its bar\n")
+		return
+	}
+	way := "up"
+	if !s.answer.Falling {
+		way = "down"
+	}
+	fmt.Fprintf(b, "  rounded    %s to %s = %s, where %s\n", way, s.dimension, s.length(r.At), s.at(*r))
+}
+
+func (s *sizeQuestion) searchText(b *strings.Builder, st style) {
+	a := s.answer
+	if len(a.Keeps) > 1 || len(a.Keeps) == 1 && a.Keeps[0].From > a.Searched.From && a.Keeps[0].To < a.Searched.To {
+		var stretches []string
+		for _, k := range a.Keeps {
+			stretches = append(stretches, fmt.Sprintf("%s to %s", s.length(round(k.From, 3)), s.length(round(k.To, 3))))
+		}
+		fmt.Fprintf(b, "  also       what meets it lies, roughly, from %s\n", strings.Join(stretches, " and from "))
+	}
+	fmt.Fprintf(b, "  searched   %s from %s to %s at %s\n", s.dimension, s.length(round(a.Searched.From, 3)), s.length(round(a.Searched.To, 3)), number.CountOf(len(a.Scanned), "place", "places"))
+	for _, x := range a.Skipped {
+		fmt.Fprintf(b, "  %s at %s = %s nothing could be judged: %s\n", st.weak("warning"), s.dimension, s.length(x.At), oneLine(x.Why))
+	}
+}
+
+// givenText writes the dimensions as given, in the order of the family's list.
+func givenText(s *shape) string {
+	return dimensionText(&specimen.Part{Family: s.family, Given: s.dims, Unit: s.unit, Options: s.options})
+}

@@ -1,0 +1,143 @@
+package sizing
+
+import (
+	"context"
+	"math"
+
+	"notchproof/scf"
+)
+
+// An Outcome says how a question ends. The zero value answers nothing.
+type Outcome int
+
+const (
+	Undecided  Outcome = iota // the solution at the answer could not be judged
+	Met                       // at Value the measure is at the limit
+	Throughout                // every value that was looked at keeps the limit
+	Beyond                    // none does; the answer is the best there is
+)
+
+func (o Outcome) String() string {
+	switch o {
+	case Met:
+		return "met"
+	case Throughout:
+		return "met throughout"
+	case Beyond:
+		return "not met"
+	}
+	return "undecided"
+}
+
+// An Answer is the value of the dimension that meets the limit, with what it
+// rests on.
+type Answer struct {
+	Outcome  Outcome
+	Drawable Interval // what can be drawn
+	Searched Interval // what was looked at
+	// At is the answer: of Met the value at the limit, of Throughout the lowest
+	// value, of Beyond the best one.
+	At Sample
+	// Bar is how well At.At is known: bar and remainder of the measure over its slope.
+	Bar float64
+	// Falling tells that larger values keep the limit, so that At is the smallest
+	// that does; else smaller ones do and At is the largest.
+	Falling bool
+	// Keeps are the stretches that keep the limit, rising, as the scan shows them:
+	// ends other than At are interpolated, or those of the search.
+	Keeps []Interval
+	// Rounded is At taken to the next drawing step on the safe side, nil where
+	// none keeps the limit.
+	Rounded *Sample
+	Scanned []Sample // what the search rests on, by rising value
+	Skipped []Sample // places of the scan that could not be judged
+}
+
+// Find answers the question. Its error is a *scf.DimensionError where the other
+// dimensions make no shape, and the context's when interrupted.
+func (q *Question) Find(ctx context.Context) (*Answer, error) {
+	if !(q.Limit > 0) || math.IsInf(q.Limit, 0) {
+		panic("sizing: limit that is not a positive number")
+	}
+	kind, err := q.kind()
+	if err != nil {
+		return nil, err
+	}
+	in, err := q.drawable()
+	if err != nil {
+		return nil, err
+	}
+	s, c, err := q.survey(ctx, kind, in)
+	if err != nil {
+		return nil, err
+	}
+	a := &Answer{Drawable: in, Skipped: s.undecided}
+	if len(s.nodes) == 0 {
+		a.At = s.undecided[0]
+		return a, nil
+	}
+	a.Searched = Interval{s.nodes[0].At, s.nodes[len(s.nodes)-1].At}
+	before, falling := s.crossing()
+	switch {
+	case before >= 0:
+		err = q.settle(ctx, kind, a, s, c, before, falling)
+	case s.nodes[0].f <= 0:
+		err = q.finish(ctx, a, s.nodes[0].At, Throughout)
+	default:
+		err = q.least(ctx, a, s, c)
+	}
+	for _, n := range s.nodes {
+		a.Scanned = append(a.Scanned, n.Sample)
+	}
+	return a, err
+}
+
+// finish solves the answer as well as was asked for.
+func (q *Question) finish(ctx context.Context, a *Answer, x float64, o Outcome) (err error) {
+	a.At, err = q.sample(ctx, x, Effort{Target: q.target(), Workers: q.workers()})
+	if err == nil && a.At.Decided {
+		a.Outcome = o
+	}
+	return err
+}
+
+// settle finds the value in the bracket and rounds it.
+func (q *Question) settle(ctx context.Context, kind scf.Dimension, a *Answer, s *scan, c coordinate, before int, falling bool) error {
+	left, right, beyond := s.ends(before)
+	end, trail, err := q.refine(ctx, c, left, right, beyond)
+	a.At, a.Falling = end.Sample, falling
+	if err != nil || !end.Decided {
+		return err
+	}
+	others := append(trail[:len(trail)-1:len(trail)-1], s.nodes...)
+	slope := math.Abs(steepness(end, others)) * end.Value / c.stretch(end.At)
+	a.Outcome, a.Bar = Met, (end.Uncertainty+math.Abs(end.Value-q.Limit))/slope
+	a.Rounded, err = q.round(ctx, kind, a)
+	s.nodes = append(s.nodes, trail...)
+	s.add(q, c)
+	a.Keeps = s.keeps(c)
+	return err
+}
+
+// least finds the lowest measure there is, where none keeps the limit: by
+// thirds of the bracket around the lowest point of the scan, until the change is
+// below the bar of a scan.
+func (q *Question) least(ctx context.Context, a *Answer, s *scan, c coordinate) error {
+	i := s.best()
+	for range 8 {
+		if i == 0 || i == len(s.nodes)-1 {
+			break // at the end of what can be drawn
+		}
+		low, old := s.nodes[i], s.nodes[i].f
+		more, err := q.samples(ctx, []float64{c.back((s.nodes[i-1].u + low.u) / 2), c.back((low.u + s.nodes[i+1].u) / 2)}, scanTarget)
+		if err != nil {
+			return err
+		}
+		s.add(q, c, more...)
+		i = s.best()
+		if flat := math.Max(s.nodes[i-1].f, s.nodes[i+1].f) - s.nodes[i].f; old-s.nodes[i].f < 1e-3 && flat < 1e-3 {
+			break
+		}
+	}
+	return q.finish(ctx, a, s.nodes[i].At, Beyond)
+}
