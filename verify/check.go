@@ -82,7 +82,9 @@ func (c *climb) finding(ctx context.Context) (Finding, error) {
 		f.Checks = c.checks(s, &computed)
 	}
 	f.judge(c.part, c.options)
-	return f, nil
+	own := c.options
+	own.Workers = c.workers
+	return f, f.readMesh(ctx, c.part, own)
 }
 
 // shapes are the meshes of a part, one a stage, made once for all loads.

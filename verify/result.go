@@ -18,7 +18,10 @@ type Finding struct {
 	Computed Computed
 	Handbook []HandbookComparison
 	Claim    *ClaimComparison // nil: none was made
-	Checks   []Check
+	// MeshClaim is what the mesh that the claim came from gives; nil where it
+	// came from none, or where there is no factor to judge by.
+	MeshClaim *MeshReading
+	Checks    []Check
 	// Verdict is the claim's where there is one, else that of the handbook
 	// value in range with the best accuracy.
 	Verdict     Verdict
@@ -83,9 +86,10 @@ func above(name string, value, limit float64) Check {
 // A Claim is the user's own factor.
 type Claim struct {
 	Factor    float64
-	LastDigit float64 // one unit of its last digit, as it was written
-	Reading   float64 // relative tolerance of the reading; 0: 3 %
-	From      string  // where it came from
+	LastDigit float64           // one unit of its last digit, as it was written
+	Reading   float64           // relative tolerance of the reading; 0: 3 %
+	From      string            // where it came from
+	Mesh      *specimen.Density // of the finite element mesh it came from; nil: not from one
 }
 
 // ClaimComparison holds the claim against the computed factor.

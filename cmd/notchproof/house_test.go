@@ -26,11 +26,12 @@ var allowed = map[string]string{
 	"verify/extrapolate": "",
 	"verify/quantity":    "",
 	"verify/specimen":    "mesh/outline fem scf verify/quantity",
-	"verify":             "mesh mesh/outline fem scf verify/extrapolate verify/specimen",
+	"verify/usermesh":    "mesh fem verify/specimen",
+	"verify":             "mesh mesh/outline fem scf verify/extrapolate verify/specimen verify/usermesh",
 	"render/number":      "",
 	"render":             "mesh mesh/outline mesh/lagrange fem scf verify verify/specimen render/number",
 	"verify/sizing":      "scf verify verify/specimen",
-	"cmd/notchproof":     "scf verify verify/sizing verify/specimen verify/quantity render render/number",
+	"cmd/notchproof":     "scf verify verify/sizing verify/specimen verify/quantity render render/number verify/usermesh",
 }
 
 // TestImportsFollowTheFloorPlan names the file and the arrow that broke it.

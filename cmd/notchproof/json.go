@@ -30,6 +30,7 @@ type jsonFinding struct {
 	Computed    jsonComputed     `json:"computed"`
 	Handbook    []jsonHandbook   `json:"handbook"`
 	Claim       *jsonClaim       `json:"claim,omitempty"`
+	ClaimMesh   *jsonClaimMesh   `json:"claimMesh,omitempty"`
 	Warnings    []string         `json:"warnings"`
 	Checks      []jsonCheck      `json:"checks"`
 	Verdict     verify.Verdict   `json:"verdict"`
@@ -159,6 +160,9 @@ func jsonOf(f *verify.Finding) jsonFinding {
 	}
 	if f.Claim != nil {
 		out.Claim = &jsonClaim{f.Claim.Factor, f.Claim.Claim.From, f.Claim.Tolerance, maybe(f.Claim.Difference), f.Claim.Verdict}
+	}
+	if f.MeshClaim != nil {
+		out.ClaimMesh = claimMeshOf(f.MeshClaim)
 	}
 	for _, k := range f.Checks {
 		out.Checks = append(out.Checks, jsonCheck{k.Name, maybe(k.Value), k.Limit, k.Passed})

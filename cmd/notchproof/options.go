@@ -23,6 +23,7 @@ type questions struct {
 	claim          string
 	claimFrom      string
 	claimTolerance string
+	claimMesh      string
 
 	flags *pflag.FlagSet // those of the part, to tell what was given
 }
@@ -44,6 +45,7 @@ func (q *questions) targetFlag(f *pflag.FlagSet) {
 func (q *questions) claimFlags(f *pflag.FlagSet) {
 	f.StringVar(&q.claim, "claim", "", "your own factor, judged by the computed one")
 	f.StringVar(&q.claimFrom, "claim-from", "", "where that factor came from")
+	f.StringVar(&q.claimMesh, "claim-mesh", "", "the finite element mesh that it came from, as in order=2,arc=6: order 1 or 2, elements per 90° of the root")
 	f.StringVar(&q.claimTolerance, "claim-tolerance", "3%", "reading tolerance of that factor")
 }
 
@@ -99,6 +101,9 @@ func (q *questions) verify(loads []scf.Load) (verify.Options, error) {
 		if q.claimFrom != "" {
 			return o, &inputError{text: "--claim-from without --claim", hint: "give the factor itself with --claim"}
 		}
+		if q.claimMesh != "" {
+			return o, &inputError{text: "--claim-mesh without --claim", hint: "give the factor itself with --claim"}
+		}
 		return o, nil
 	}
 	if len(loads) != 1 {
@@ -118,7 +123,13 @@ func (q *questions) claimed() (*verify.Claim, error) {
 	if err != nil || tolerance < 0 || tolerance > 0.5 {
 		return nil, &inputError{text: "--claim-tolerance " + quoted(q.claimTolerance) + ": not a tolerance", hint: "give a share of the claim, as in 3% or 0.03"}
 	}
-	return &verify.Claim{Factor: factor, LastDigit: specimen.LastDigit(q.claim), Reading: tolerance, From: q.claimFrom}, nil
+	claim := &verify.Claim{Factor: factor, LastDigit: specimen.LastDigit(q.claim), Reading: tolerance, From: q.claimFrom}
+	if q.claimMesh == "" {
+		return claim, nil
+	}
+	density, err := specimen.ParseDensity(q.claimMesh)
+	claim.Mesh = &density
+	return claim, named(err, "--claim-mesh")
 }
 
 // plainNumber reads a plain finite decimal number.

@@ -56,7 +56,7 @@ func fileJob(path string, q *questions) (*job, error) {
 	}
 	for _, c := range file.Claims {
 		if options.Claims[c.Load] == nil {
-			options.Claims[c.Load] = &verify.Claim{Factor: c.Factor, LastDigit: c.LastDigit, Reading: c.Tolerance, From: c.From}
+			options.Claims[c.Load] = &verify.Claim{Factor: c.Factor, LastDigit: c.LastDigit, Reading: c.Tolerance, From: c.From, Mesh: c.Mesh}
 		}
 	}
 	return &job{file.Part, loads, options}, nil

@@ -61,11 +61,19 @@ func runStudy(c *call) (int, error) {
 	debug.SetMemoryLimit(math.MaxInt64)
 	bar := c.progress()
 	s, err := climb(c.ctx, job.part, load, verify.StudyOptions{Order: *order, Rungs: *rungs, Progress: bar.tell})
+	if err != nil {
+		bar.clear()
+		return 0, err
+	}
+	own, err := meshGuidance(c.ctx, job, load, bar.tell)
 	bar.clear()
 	if err != nil {
 		return 0, err
 	}
 	if err := writeStudy(c.stdout, s, c.style()); err != nil {
+		return 0, err
+	}
+	if _, err := io.WriteString(c.stdout, own); err != nil {
 		return 0, err
 	}
 	if *file != "" {

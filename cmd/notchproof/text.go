@@ -81,6 +81,9 @@ func findingText(b *strings.Builder, f *verify.Finding, part *specimen.Part, s s
 		}
 		fmt.Fprintf(b, "  claim      %s%s\n", comparisonText(f.Claim.Comparison, s), from)
 	}
+	if f.MeshClaim != nil {
+		meshClaimText(b, f, s)
+	}
 	for _, h := range f.Handbook {
 		handbookText(b, h, s)
 	}

@@ -23,6 +23,7 @@ type Claim struct {
 	LastDigit float64 // one unit of its last digit, as it was written
 	Tolerance float64 // of the reading, relative; 0: the default
 	From      string
+	Mesh      *Density // of the finite element mesh it came from; nil: not from one
 }
 
 // Material is what the part is made of. What is not given is zero.
@@ -43,7 +44,7 @@ type Over struct {
 var (
 	fileKeys     = []string{"title", "shape", "loads", "material", "claims"}
 	materialKeys = []string{"name", "nu", "E", "yield"}
-	claimKeys    = []string{"load", "factor", "from", "tolerance"}
+	claimKeys    = []string{"load", "factor", "from", "tolerance", "mesh"}
 )
 
 // ReadPart reads a part file:
@@ -53,7 +54,8 @@ var (
 //	  "shape": {"family": "shaft-shoulder", "D": "72mm", "d": "48mm", "r": "3mm"},
 //	  "loads": ["bending"],
 //	  "material": {"name": "…", "nu": 0.3, "E": "210 GPa", "yield": "355 MPa"},
-//	  "claims": [{"load": "bending", "factor": 1.85, "from": "chart", "tolerance": "3%"}]
+//	  "claims": [{"load": "bending", "factor": 1.85, "from": "chart", "tolerance": "3%",
+//	              "mesh": {"order": 2, "arc": 6}}]
 //	}
 //
 // Only the shape must be there. It is a family with its dimensions, as above,

@@ -73,7 +73,10 @@ func (d *document) claim(n *node, loads []scf.Load) (c Claim, err error) {
 			return c, d.refuse(tolerance, "not a tolerance", hint)
 		}
 	}
-	return c, nil
+	if mesh := n.member("mesh"); mesh != nil {
+		c.Mesh, err = d.density(mesh)
+	}
+	return c, err
 }
 
 // material reads what the part is made of.

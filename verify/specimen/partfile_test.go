@@ -5,6 +5,7 @@ import (
 	"math"
 	"os"
 	"path/filepath"
+	"reflect"
 	"strings"
 	"testing"
 	"unicode"
@@ -26,7 +27,7 @@ const good = `{
   "loads": ["torsion", "bending"],
   "material": {"name": "steel", "nu": 0.29, "E": "206 GPa", "yield": "51ksi"},
   "claims": [
-    {"load": "bending", "factor": "2.10", "from": "chart", "tolerance": "5%"},
+    {"load": "bending", "factor": "2.10", "from": "chart", "tolerance": "5%", "mesh": {"order": 2, "arc": "6"}},
     {"load": "torsion", "factor": 1.5}
   ]
 }`
@@ -47,8 +48,8 @@ func TestReadPart(t *testing.T) {
 	if f.Material.Name != m.Name || f.Material.Nu != m.Nu || f.Material.E != m.E || math.Abs(f.Material.Yield/m.Yield-1) > 1e-14 {
 		t.Errorf("material %+v, want %+v", f.Material, m)
 	}
-	want := []Claim{{scf.Bending, 2.1, 0.01, 0.05, "chart"}, {scf.Torsion, 1.5, 0.1, 0, ""}}
-	if len(f.Claims) != 2 || f.Claims[0] != want[0] || f.Claims[1] != want[1] {
+	want := []Claim{{scf.Bending, 2.1, 0.01, 0.05, "chart", &Density{2, 6}}, {scf.Torsion, 1.5, 0.1, 0, "", nil}}
+	if !reflect.DeepEqual(f.Claims, want) {
 		t.Errorf("claims %+v, want %+v", f.Claims, want)
 	}
 	if got, want := p.Loads[1].Nominal.Net, 32/(math.Pi*48*48*48); math.Abs(got/want-1) > 1e-14 {
@@ -99,7 +100,7 @@ func hostileFiles() []struct{ name, file, place, key, reason string } {
 	return []struct{ name, file, place, key, reason string }{
 		{"empty", "", "1:1", "file", "empty"},
 		{"spaces", " \n\t ", "1:1", "file", "empty"},
-		{"truncated", good[:len(good)/2], "7:48", "file", "ends too early"},
+		{"truncated", good[:len(good)/2], "8:2", "file", "ends too early"},
 		{"open quote", `{"title": "x`, "1:13", "file", "ends too early"},
 		{"binary", "\x7fELF\x02\x01\x01\x00", "1:8", "file", "not text"},
 		{"zero byte", "{\"title\": \"a\x00b\"}", "1:13", "file", "not text"},
@@ -178,6 +179,10 @@ func hostileFiles() []struct{ name, file, place, key, reason string } {
 		{"claim of zero", `{"claims": [{"load": "bending", "factor": 0}], ` + shapeOf(bar)[1:], "1:43", "claims[1].factor", "not a stress concentration factor"},
 		{"claim for a load not asked", `{"loads": ["tension"], "claims": [{"load": "bending", "factor": 2}], ` + shapeOf(bar)[1:], "1:44", "claims[1].load", "no such load here"},
 		{"two claims", `{"claims": [{"load": "bending", "factor": 2}, {"load": "bending", "factor": 3}], ` + shapeOf(bar)[1:], "1:47", "claims[2]", "second claim"},
+		{"mesh without its density", `{"claims": [{"load": "bending", "factor": 2, "mesh": {"order": 2}}], ` + shapeOf(bar)[1:], "1:54", "claims[1].mesh.arc", "missing"},
+		{"mesh of order 3", `{"claims": [{"load": "bending", "factor": 2, "mesh": {"order": 3, "arc": 6}}], ` + shapeOf(bar)[1:], "1:64", "claims[1].mesh.order", "not the order"},
+		{"mesh of no elements", `{"claims": [{"load": "bending", "factor": 2, "mesh": {"order": 2, "arc": 0}}], ` + shapeOf(bar)[1:], "1:74", "claims[1].mesh.arc", "not a number of elements"},
+		{"mesh with a strange key", `{"claims": [{"load": "bending", "factor": 2, "mesh": {"order": 2, "arcs": 6}}], ` + shapeOf(bar)[1:], "1:67", "key in claims[1].mesh", "no such key"},
 		{"no tolerance", `{"claims": [{"load": "bending", "factor": 2, "tolerance": "0%"}], ` + shapeOf(bar)[1:], "1:59", "claims[1].tolerance", "without any tolerance"},
 		{"tolerance", `{"claims": [{"load": "bending", "factor": 2, "tolerance": 3}], ` + shapeOf(bar)[1:], "1:59", "claims[1].tolerance", "not a tolerance"},
 	}
