@@ -37,6 +37,16 @@ func (p SurfacePoint) ShearSize() float64 { return math.Abs(p.Shear) }
 // Surface evaluates the surface stress at s in [0, 1] along boundary edge i,
 // on the drawn plane.
 func (s *Solution) Surface(i int, at float64) SurfacePoint {
+	return s.surface(i, at, s.drawnShearless)
+}
+
+// SurfaceAmplitude is Surface with all three amplitudes: for the bending
+// harmonic Tangential and Hoop go with cosθ around the axis, Shear with sinθ.
+func (s *Solution) SurfaceAmplitude(i int, at float64) SurfacePoint {
+	return s.surface(i, at, false)
+}
+
+func (s *Solution) surface(i int, at float64, shearless bool) SurfacePoint {
 	tr := s.trace
 	edge := &s.Problem.Shape.Mesh.Boundary[i]
 	p, tangent := tr.point(edge, at)
@@ -60,7 +70,7 @@ func (s *Solution) Surface(i int, at float64) SurfacePoint {
 		}
 	}
 	e := s.kin.strains(&grad, u)
-	if s.drawnShearless {
+	if shearless {
 		e[xz], e[yz] = 0, 0
 	}
 	sp := SurfacePoint{At: p, Normal: r2.Vec{X: t.Y, Y: -t.X}, Edge: i, S: at}

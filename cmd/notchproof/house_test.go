@@ -28,10 +28,11 @@ var allowed = map[string]string{
 	"verify/specimen":    "mesh/outline fem scf verify/quantity",
 	"verify/usermesh":    "mesh fem verify/specimen",
 	"verify":             "mesh mesh/outline fem scf verify/extrapolate verify/specimen verify/usermesh",
+	"verify/strength":    "mesh mesh/outline fem scf verify verify/specimen verify/quantity",
 	"render/number":      "",
 	"render":             "mesh mesh/outline mesh/lagrange fem scf verify verify/specimen render/number",
 	"verify/sizing":      "scf verify verify/specimen",
-	"cmd/notchproof":     "scf verify verify/sizing verify/specimen verify/quantity render render/number verify/usermesh",
+	"cmd/notchproof":     "scf verify verify/sizing verify/specimen verify/quantity verify/strength render render/number verify/usermesh",
 }
 
 // TestImportsFollowTheFloorPlan names the file and the arrow that broke it.

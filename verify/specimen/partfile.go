@@ -14,6 +14,7 @@ type File struct {
 	Loads    []scf.Load // to be checked: all that the part carries unless the file names some
 	Claims   []Claim    // at most one a load, in the order of the file
 	Material Material
+	Forces   Forces
 }
 
 // A Claim is a factor that the file's author got from elsewhere.
@@ -26,14 +27,6 @@ type Claim struct {
 	Mesh      *Density // of the finite element mesh it came from; nil: not from one
 }
 
-// Material is what the part is made of. What is not given is zero.
-type Material struct {
-	Name  string
-	Nu    float64 // Poisson's ratio, 0.3 when not given
-	E     float64 // Young's modulus, MPa
-	Yield float64 // yield stress, MPa
-}
-
 // Over is what the command line says over the file's head.
 type Over struct {
 	Nu        *float64 // nil: the file's
@@ -42,8 +35,9 @@ type Over struct {
 
 // The keys of a part file.
 var (
-	fileKeys     = []string{"title", "shape", "loads", "material", "claims"}
-	materialKeys = []string{"name", "nu", "E", "yield"}
+	fileKeys     = []string{"title", "shape", "loads", "material", "claims", "forces", "thickness", "safety"}
+	materialKeys = []string{"name", "nu", "E", "yield", "tensile", "elongation", "brittle", "metal"}
+	forceKeys    = []string{"axial", "bending", "torque"}
 	claimKeys    = []string{"load", "factor", "from", "tolerance", "mesh"}
 )
 
@@ -55,7 +49,9 @@ var (
 //	  "loads": ["bending"],
 //	  "material": {"name": "…", "nu": 0.3, "E": "210 GPa", "yield": "355 MPa"},
 //	  "claims": [{"load": "bending", "factor": 1.85, "from": "chart", "tolerance": "3%",
-//	              "mesh": {"order": 2, "arc": 6}}]
+//	              "mesh": {"order": 2, "arc": 6}}],
+//	  "forces": {"axial": "12 kN", "bending": "300 N·m", "torque": "450 N·m"},
+//	  "thickness": "8 mm", "safety": 1.8
 //	}
 //
 // Only the shape must be there. It is a family with its dimensions, as above,
@@ -66,7 +62,7 @@ var (
 //	 "nominal": {"x": 12.5, "fibre": 20}, "mirror": true, "forceLine": "net"}
 //
 // Lengths are numbers or texts with a unit; moduli and stresses are numbers in
-// MPa or texts in Pa, kPa, MPa, GPa, psi or ksi. A claim's factor may be a text
+// MPa or texts with a unit; forces and moments are texts with a unit. A claim's factor may be a text
 // so that its last digit counts as written. name is the file's name, for
 // errors, which are *FileError throughout.
 func ReadPart(data []byte, name string, over Over) (*File, error) {
@@ -104,8 +100,13 @@ func ReadPart(data []byte, name string, over Over) (*File, error) {
 	if f.Loads, err = d.loads(top.member("loads"), f.Part); err != nil {
 		return nil, err
 	}
-	f.Claims, err = d.claims(top.member("claims"), f.Loads)
-	return f, err
+	if f.Claims, err = d.claims(top.member("claims"), f.Loads); err != nil {
+		return nil, err
+	}
+	if f.Forces, err = d.forces(top); err != nil {
+		return nil, err
+	}
+	return f, nil
 }
 
 const defaultNu = 0.3
