@@ -67,6 +67,7 @@ type job struct {
 	part    *specimen.Part
 	loads   []scf.Load
 	options verify.Options
+	file    *specimen.File // that it was read from; nil: from the command line
 }
 
 // job reads the arguments and flags; without arguments it is the demonstration.
@@ -99,7 +100,7 @@ func (q *questions) job(args []string) (*job, error) {
 		loads = part.Family.Loads
 	}
 	options, err := q.verify(loads)
-	return &job{part, loads, options}, err
+	return &job{part: part, loads: loads, options: options}, err
 }
 
 // statusOf is the exit status that a result comes to: a disagreement is the

@@ -24,5 +24,5 @@ func demonstration(q *questions) (*job, error) {
 		return nil, err
 	}
 	options.Claims = map[scf.Load]*verify.Claim{scf.Torsion: {Factor: 1.36, LastDigit: 0.01, From: "design note of the thruster (invented)"}}
-	return &job{part, []scf.Load{scf.Torsion}, options}, nil
+	return &job{part: part, loads: []scf.Load{scf.Torsion}, options: options}, nil
 }

@@ -59,7 +59,7 @@ func fileJob(path string, q *questions) (*job, error) {
 			options.Claims[c.Load] = &verify.Claim{Factor: c.Factor, LastDigit: c.LastDigit, Reading: c.Tolerance, From: c.From, Mesh: c.Mesh}
 		}
 	}
-	return &job{file.Part, loads, options}, nil
+	return &job{file.Part, loads, options, file}, nil
 }
 
 func readPartFile(path string) ([]byte, error) {

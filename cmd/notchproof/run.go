@@ -31,7 +31,7 @@ type command struct {
 
 // commands lists all verbs in the order of the help text.
 func commands() []*command {
-	return []*command{checkCommand(), studyCommand(), pictureCommand(), partsCommand(), sizeCommand()}
+	return []*command{checkCommand(), studyCommand(), pictureCommand(), partsCommand(), sizeCommand(), strengthCommand()}
 }
 
 // A call is one run of a command.
