@@ -31,7 +31,10 @@ type command struct {
 
 // commands lists all verbs in the order of the help text.
 func commands() []*command {
-	return []*command{checkCommand(), studyCommand(), pictureCommand(), partsCommand(), sizeCommand(), strengthCommand()}
+	return []*command{
+		checkCommand(), studyCommand(), pictureCommand(), partsCommand(),
+		strengthCommand(), sizeCommand(), toleranceCommand(),
+	}
 }
 
 // A call is one run of a command.

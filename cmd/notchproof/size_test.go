@@ -1,0 +1,127 @@
+package main
+
+import (
+	"encoding/json"
+	"math"
+	"os"
+	"path/filepath"
+	"strings"
+	"testing"
+)
+
+// TestSizeAndToleranceStatuses runs both commands to every exit status that a
+// good part can give.
+func TestSizeAndToleranceStatuses(t *testing.T) {
+	dir := t.TempDir()
+	file := filepath.Join(dir, "seat.json")
+	part := `{"title": "seat", "shape": {"family": "shaft-shoulder", "D": "72mm", "d": "48mm", "r": "3mm"}, "loads": ["torsion"]}`
+	if err := os.WriteFile(file, []byte(part), 0o644); err != nil {
+		t.Fatal(err)
+	}
+	for _, row := range []struct {
+		line   string
+		status int
+		out    string
+	}{
+		{"size shaft-shoulder D=72mm d=48mm --kt 1.5 --load torsion", exitAgrees, "where Kts = 1.500"},
+		{"size shaft-shoulder D=72mm d=48mm r=3mm --kt 1 --load torsion", exitNotMet, "no r meets it"},
+		{"size shaft-shoulder D=72mm d=48mm r=3mm --kt 100 --load torsion", exitAgrees, "every r"},
+		{"size " + file + " --kt 1.5", exitAgrees, "seat\n"},
+		{"size shaft-groove D=60 d=50 r=2 --for angle --kt 1.7 --load torsion", exitAgrees, "°"},
+		{"tolerance shaft-shoulder D=72mm d=48mm r=3mm r=±0.2mm --load torsion", exitAgrees, "by r"},
+		{"tolerance " + file + " r=+-0.2mm d=+0.05/-0", exitAgrees, "d +0.05/0"},
+		{"tolerance bar-hole W=60 d=20 e=0 e=+/-3 --load tension", exitAgrees, "no corner"},
+	} {
+		status, out, errs := program(t, row.line)
+		if status != row.status || errs != "" || !strings.Contains(out, row.out) {
+			t.Errorf("%s: exit status %d, want %d with %q\n%s%s", row.line, status, row.status, row.out, out, errs)
+		}
+	}
+}
+
+// TestSizeAndToleranceRefuse: one clear line with the value, a hint, status 2.
+func TestSizeAndToleranceRefuse(t *testing.T) {
+	const size = "size shaft-shoulder D=72mm d=48mm "
+	const good = "tolerance shaft-shoulder D=72mm d=48mm r=3mm "
+	own := "../../testdata/parts/slotted-link.json"
+	for _, row := range []struct{ line, says, hint string }{
+		{"size", "no part", "shaft-shoulder"},
+		{size, "nothing to meet", "--kt"},
+		{size + "--kt 1.8", "which load", "bending"},
+		{size + "--kt 1.8 --load torsion,bending", "which load", "bending"},
+		{size + "--kt two --load torsion", `"two"`, "1.8"},
+		{size + "--kt -1 --load torsion", `"-1"`, "1.8"},
+		{size + "--kt NaN --load torsion", `"NaN"`, "1.8"},
+		{size + "--kt 1.8 --for q --load torsion", `--for "q": no such dimension`, "[ra]"},
+		{size + "--kt 1.8 --for d --load torsion", "r: missing", "[ra]"},
+		{"size bar-hole W=60 --kt 2 --load tension", "which dimension", "--for"},
+		{"size shaft-shoulder D=48mm d=72mm --kt 1.8 --load torsion", "d=72: not smaller", "net"},
+		{"size " + own + " --kt 1.8", "no named dimensions", "family"},
+		{good, "no tolerances", "±"},
+		{good + "r=+0.2", `"r=+0.2": one deviation alone`, "/-0"},
+		{good + "r=±x", `"x"`, ""},
+		{good + "r=±0", "without width", "±0.2"},
+		{good + "r=+0/-0", "without width", "±0.2"},
+		{good + "r=±0.1 r=±0.2", "second tolerance of r", "once"},
+		{good + "q=±0.1", `"q": no such dimension`, "[ra]"},
+		{good + "ra=±0.1", "not given", "ra"},
+		{good + "r=±3mm", "allow r=0mm", "narrow"},
+		{"tolerance shaft-shoulder D=72 d=48 r=3 r=±1mm", "the dimensions have none", "leave"},
+		{"tolerance " + own + " r=±0.1", "no named dimensions", "family"},
+	} {
+		status, out, errs := program(t, row.line)
+		lines := strings.Split(strings.TrimSuffix(errs, "\n"), "\n")
+		if status != exitUsage || out != "" || len(lines) > 2 {
+			t.Errorf("%s: exit status %d\n%s%s", row.line, status, out, errs)
+		}
+		if !strings.Contains(lines[0], row.says) || row.hint != "" && !strings.Contains(lines[len(lines)-1], row.hint) {
+			t.Errorf("%s: want %q and %q in\n%s", row.line, row.says, row.hint, errs)
+		}
+	}
+}
+
+// TestDeviations: every way of writing them.
+func TestDeviations(t *testing.T) {
+	family, _ := familyOf("shaft-groove")
+	s := &shape{family: family, dims: map[string]float64{"D": 60, "d": 50, "r": 2, "angle": 60}, unit: "mm"}
+	for word, want := range map[string][2]float64{
+		"r=±0.2mm": {-0.2, 0.2}, "r=+-0.2mm": {-0.2, 0.2}, "r=+/-0.2": {-0.2, 0.2}, "r=±1/64in": {-0.396875, 0.396875},
+		"r=+0.3/-0": {0, 0.3}, "r=+0.3mm/-0.1mm": {-0.1, 0.3}, "r=+0.3/-0.1mm": {-0.1, 0.3}, "r=-0.1/+0.3": {-0.1, 0.3},
+		"r=+0.3/+0.1": {0.1, 0.3}, "r=-0.1/−0.3mm": {-0.3, -0.1}, "r=+1/64in/-0": {0, 0.396875},
+		"angle=±2": {-2, 2}, "angle=+2deg/-1": {-1, 2},
+	} {
+		d, err := s.deviation(word)
+		if !isDeviation(word) || err != nil || math.Abs(d.Lower-want[0]) > 1e-12 || math.Abs(d.Upper-want[1]) > 1e-12 {
+			t.Errorf("%s: %+v, %v, want %v", word, d, err, want)
+		}
+	}
+	for _, word := range []string{"r=3mm", "e=-3", "r=1/64in", "r", "r=+1/64in", "r=-1-1/4in"} {
+		if isDeviation(word) {
+			t.Errorf("%s is taken for a tolerance", word)
+		}
+	}
+}
+
+// TestSizeJSON holds the names that others read, and the bar against the factor's.
+func TestSizeJSON(t *testing.T) {
+	_, out, _ := program(t, "size shaft-shoulder D=72mm d=48mm --kt 1.5 --load torsion --json")
+	var got struct {
+		Schema                       int
+		Dimension, Unit, Outcome     string
+		Value, Factor, Uncertainty   float64
+		ValueUncertainty             float64
+		Rounded                      struct{ Value, Factor, Uncertainty float64 }
+		Alternatives, Scanned, Keeps []any
+	}
+	if err := json.Unmarshal([]byte(out), &got); err != nil {
+		t.Fatal(err)
+	}
+	if got.Schema != 1 || got.Dimension != "r" || got.Unit != "mm" || got.Outcome != "met" || got.Alternatives == nil ||
+		math.Abs(got.Factor-1.5) > got.Uncertainty || !(got.Rounded.Factor+got.Rounded.Uncertainty <= 1.5) || !(got.Rounded.Value > got.Value+got.ValueUncertainty) {
+		t.Errorf("%+v", got)
+	}
+	_, out, _ = program(t, "size shaft-shoulder D=72mm d=48mm --kt 1 --load torsion --json")
+	if !strings.Contains(out, `"value": null`) || !strings.Contains(out, `"outcome": "notMet"`) || !strings.Contains(out, `"best": {`) {
+		t.Errorf("a value where nothing meets the limit\n%s", out)
+	}
+}
