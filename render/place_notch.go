@@ -39,12 +39,15 @@ func rootRadius() placement {
 			return mirrored(tip), mirrored(center)
 		}
 		return tip, center
-	}}
+	}, Text: radiusText}
 }
 
 // arc gives a point at the parameter t, counted from the left, of the notch's
-// last arc to the right, and that arc's centre.
+// last arc to the right, and that arc's centre; of a sharp notch its corner.
 func (g geometry) arc(t float64) (tip, center r2.Vec) {
+	if corner, from, ok := g.sharp(); ok {
+		return corner, from
+	}
 	best := false
 	for _, i := range g.part.Notch {
 		c := g.part.Region.Sides()[i].Curve

@@ -32,5 +32,5 @@ func filletText(d scf.Dims) string {
 	if ra, r := d["ra"], d["r"]; ra != 0 && ra != r {
 		return "ellipse r " + number.Length(r, "") + ", ra " + number.Length(ra, "")
 	}
-	return "R" + number.Length(d["r"], "")
+	return radiusText(d)
 }

@@ -102,6 +102,9 @@ func centerOf(c outline.Curve) (r2.Vec, bool) {
 // the lower half, which the quills leave free.
 func radiusBelow(name string) func(g geometry) (a, b r2.Vec) {
 	return func(g geometry) (a, b r2.Vec) {
+		if corner, from, ok := g.sharp(); ok {
+			return mirrored(corner), mirrored(from)
+		}
 		arc := g.side(name)
 		tip := arc.At(0.5)
 		center, ok := centerOf(arc)

@@ -24,7 +24,7 @@ func barEdgeNotch() *Family {
 		Dimensions: []Dimension{
 			{Name: "D", Meaning: "width of the bar"},
 			{Name: "d", Meaning: "net width below the notch"},
-			{Name: "r", Meaning: "radius at the notch root"},
+			{Name: "r", Meaning: "radius at the notch root", Sharp: true},
 			angleDimension(),
 		},
 		Loads: []Load{Tension, Bending},

@@ -9,7 +9,7 @@ func barNotch() *Family {
 		Dimensions: []Dimension{
 			{Name: "D", Meaning: "width of the bar"},
 			{Name: "d", Meaning: "net width between the notches"},
-			{Name: "r", Meaning: "radius at the notch root"},
+			{Name: "r", Meaning: "radius at the notch root", Sharp: true},
 			angleDimension(),
 		},
 		Loads: []Load{Tension, Bending},

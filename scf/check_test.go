@@ -149,7 +149,10 @@ func TestCheckSays(t *testing.T) {
 	}{
 		{"shaft-shoulder", Dims{"D": 60, "d": 40}, "r: missing, the fillet radius; of an elliptic fillet the radial semi-axis"},
 		{"shaft-shoulder", Dims{"D": 60, "d": 40, "r": 2, "w": 3, "b": 1}, "b=1: no such dimension"},
-		{"shaft-shoulder", Dims{"D": 60, "d": 40, "r": 0}, "r=0: must be greater than zero"},
+		{"shaft-shoulder", Dims{"D": 60, "d": 40, "r": 0, "ra": 2}, "ra=2: an elliptic fillet without its radial semi-axis r"},
+		{"bar-notch", Dims{"D": 60, "d": 40, "r": 0}, "r=0: parallel flanks without a radius enclose nothing"},
+		{"bar-notch", Dims{"D": 60, "d": 40, "r": 0, "angle": 1e-5}, "angle=1e-05: half width of the notch/D = 1.45444e-08 is below 1e-06"},
+		{"bar-hole", Dims{"W": 60, "d": 0}, "d=0: must be greater than zero"},
 		{"shaft-shoulder", Dims{"D": 60, "d": 40, "r": -2}, "r=-2: must be greater than zero"},
 		{"shaft-shoulder", Dims{"D": 1e308, "d": 40, "r": 2}, "D=1e+308: larger than 1e+15"},
 		{"shaft-shoulder", Dims{"D": 40, "d": 60, "r": 2}, "d=60: not smaller than D = 40"},
@@ -186,6 +189,10 @@ func TestCheckAccepts(t *testing.T) {
 		dims   Dims
 	}{
 		{"shaft-shoulder", Dims{"D": 44, "d": 40, "r": 20}},
+		{"shaft-shoulder", Dims{"D": 44, "d": 40, "r": 0}},
+		{"bar-shoulder", Dims{"D": 44, "d": 40, "r": 0, "c": 2}},
+		{"bar-edge-notch", Dims{"D": 44, "d": 40, "r": 0, "angle": 30}},
+		{"shaft-ring-groove", Dims{"D": 44, "d": 40, "r": 0, "w": 1}},
 		{"bar-shoulder", Dims{"D": 0.5, "d": 0.3, "r": 0.04, "c": 0.06}},
 		{"shaft-shoulder", Dims{"D": 60, "d": 40, "r": 4, "c": 0}},
 		{"shaft-ring-groove", Dims{"D": 0.6, "d": 0.5, "r": 0.05, "w": 0.1}},

@@ -8,7 +8,7 @@ func collarDimensions(size string) []Dimension {
 	return []Dimension{
 		{Name: "D", Meaning: size + " of the collar"},
 		{Name: "d", Meaning: size + " beside the collar"},
-		{Name: "r", Meaning: "fillet radius at both faces, outside L"},
+		{Name: "r", Meaning: "fillet radius at both faces, outside L", Sharp: true},
 		{Name: "L", Meaning: "distance between the collar's faces"},
 	}
 }

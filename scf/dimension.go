@@ -17,6 +17,7 @@ type Dimension struct {
 	Optional bool // absent means Default
 	Angle    bool // degrees, 0 to below 180
 	Zero     bool // may be zero: the feature is then not there
+	Sharp    bool // may be zero: the corner is then sharp, and has no factor
 	Signed   bool // may be negative
 
 	// Default is the value of an optional dimension in the presence of the
@@ -41,10 +42,8 @@ func (n Dimension) check(v float64) error {
 		return fault("not a finite number", "")
 	case n.Angle && (v < 0 || v >= 180):
 		return fault("opening angle outside 0 to 180 degrees", "0 is a notch with parallel flanks")
-	case n.Angle || v == 0 && n.Zero:
+	case n.Angle || v == 0 && (n.Zero || n.Sharp):
 		return nil
-	case v == 0 && n.Name == "r":
-		return fault("must be greater than zero", "a sharp corner has no factor, its stress grows without bound: give the radius it is made with")
 	case v <= 0 && !n.Signed:
 		return fault("must be greater than zero", "")
 	case math.Abs(v) > largestSize:

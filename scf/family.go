@@ -1,5 +1,7 @@
 package scf
 
+import "slices"
+
 // Kind tells bars, flat and of constant thickness, from shafts, round.
 type Kind int
 
@@ -101,6 +103,15 @@ func (f *Family) Complete(dims Dims) Dims {
 	return full
 }
 
+// Sharp tells that the dimensions leave a corner without a radius, of which no
+// handbook has anything to say: its stress has no bound.
+func (f *Family) Sharp(dims Dims) bool {
+	return slices.ContainsFunc(f.Dimensions, func(n Dimension) bool {
+		v, given := dims[n.Name]
+		return n.Sharp && given && v == 0
+	})
+}
+
 // Nominal is the stress that the family's factors are referred to. The
 // dimensions must have passed Check, the load must be one of Loads.
 func (f *Family) Nominal(load Load, dims Dims, opt Options) Nominal {
@@ -116,6 +127,9 @@ func (f *Family) Handbook(load Load, dims Dims, opt Options) []Value {
 	if f.handbook == nil {
 		return nil
 	}
+	if f.Sharp(dims) {
+		return nil
+	}
 	values := f.handbook(load, f.Complete(dims), opt)
 	for i := range values {
 		values[i].holdAboveOne()
@@ -127,7 +141,7 @@ func (f *Family) Handbook(load Load, dims Dims, opt Options) []Value {
 // published. No verdict may rest on them; all have Hint set and InRange unset.
 func (f *Family) Hints(load Load, dims Dims, opt Options) []Value {
 	f.mustCarry(load)
-	if f.hints == nil {
+	if f.hints == nil || f.Sharp(dims) {
 		return nil
 	}
 	return f.hints(load, f.Complete(dims), opt)

@@ -39,7 +39,15 @@ func checkOpening(h, r, angle, D float64) error {
 	if err := notLonger("angle", angle, "half width of the notch", half, "D", D); err != nil {
 		return err
 	}
-	if !hasFlanks(h, r, angle) {
+	switch {
+	case r == 0 && angle == 0:
+		return &DimensionError{Name: "r", Value: r,
+			Reason: "parallel flanks without a radius enclose nothing",
+			Hint:   "give the radius that the notch is made with, or the opening angle of a sharp one",
+		}
+	case r == 0:
+		return notBelow("angle", angle, "half width of the notch/D", half, D)
+	case !hasFlanks(h, r, angle):
 		return nil
 	}
 	if err := notBelow("angle", angle, "root arc/length", r*radians(180-angle), D+2*half); err != nil {

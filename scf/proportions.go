@@ -74,8 +74,11 @@ func checkStep(D, d, r float64) error {
 			Hint:   "such a step cannot be meshed",
 		}
 	}
-	if err := notBelow("r", r, "r/D", r, D); err != nil {
-		return err
+	if r > 0 && r < leastRatio*D {
+		return &DimensionError{Name: "r", Value: r,
+			Reason: "r/D = " + short(r/D) + " is below " + short(leastRatio),
+			Hint:   "a smaller proportion cannot be meshed; r=0 shows how the stress of the sharp corner grows",
+		}
 	}
 	return notLonger("r", r, "radius", r, "D", D)
 }

@@ -9,7 +9,7 @@ func shaftGroove() *Family {
 		Dimensions: []Dimension{
 			{Name: "D", Meaning: "diameter of the shaft"},
 			{Name: "d", Meaning: "diameter at the bottom of the groove"},
-			{Name: "r", Meaning: "radius at the groove's bottom"},
+			{Name: "r", Meaning: "radius at the groove's bottom", Sharp: true},
 			angleDimension(),
 		},
 		Loads: []Load{Tension, Bending, Torsion},

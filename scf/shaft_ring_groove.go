@@ -12,7 +12,7 @@ func shaftRingGroove() *Family {
 		Dimensions: []Dimension{
 			{Name: "D", Meaning: "diameter of the shaft"},
 			{Name: "d", Meaning: "diameter at the bottom of the groove"},
-			{Name: "r", Meaning: "radius of the groove's bottom corners"},
+			{Name: "r", Meaning: "radius of the groove's bottom corners", Sharp: true},
 			{Name: "w", Meaning: "width of the groove at the surface"},
 		},
 		Loads: []Load{Tension, Bending, Torsion},
@@ -47,6 +47,9 @@ func checkRingGroove(dims Dims) error {
 		return err
 	}
 	if err := noSliver("w", w, "floor", w-corners, s.r, s.D, w); err != nil {
+		return err
+	}
+	if err := notBelow("w", w, "w/D", w, s.D); err != nil {
 		return err
 	}
 	return notLonger("w", w, "width", w, "D", s.D)

@@ -6,7 +6,7 @@ func shoulderDimensions(size string) []Dimension {
 	return []Dimension{
 		{Name: "D", Meaning: "larger " + size},
 		{Name: "d", Meaning: "smaller " + size},
-		{Name: "r", Meaning: "fillet radius; of an elliptic fillet the radial semi-axis"},
+		{Name: "r", Meaning: "fillet radius; of an elliptic fillet the radial semi-axis", Sharp: true},
 		{Name: "ra", Meaning: "axial semi-axis of an elliptic fillet", Optional: true,
 			Default: func(dims Dims) float64 { return dims["r"] }},
 		{Name: "c", Meaning: "leg of a 45° chamfer on the corner of the larger size", Optional: true, Zero: true},
@@ -31,8 +31,14 @@ func checkShoulder(dims Dims) error {
 
 // checkEllipticFillet: an ellipse's sharpest curvatures are ra²/r and r²/ra.
 func checkEllipticFillet(s step, ra float64) error {
-	if ra == s.r {
+	switch {
+	case ra == s.r:
 		return nil
+	case s.r == 0:
+		return &DimensionError{Name: "ra", Value: ra,
+			Reason: "an elliptic fillet without its radial semi-axis r",
+			Hint:   "give r too, or leave out ra for a sharp corner",
+		}
 	}
 	if err := notBelow("ra", ra, "ra²/(r D)", ra*(ra/s.r), s.D); err != nil {
 		return err

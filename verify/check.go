@@ -6,10 +6,12 @@ package verify
 import (
 	"context"
 	"fmt"
+	"math"
 	"runtime"
 	"sync"
 
 	"notchproof/scf"
+	"notchproof/verify/extrapolate"
 	"notchproof/verify/specimen"
 )
 
@@ -75,16 +77,31 @@ func (c *climb) finding(ctx context.Context) (Finding, error) {
 	if err != nil {
 		return Finding{}, err
 	}
+	found, err := corners(ctx, c.part, c.load, &c.work[0], c.workers)
+	if err != nil {
+		return Finding{}, err
+	}
+	if endless(found) {
+		computed.without()
+	}
 	computed.Gross = computed.Factor.Value * c.load.Nominal.Net / c.load.Nominal.Gross
-	f := Finding{Load: c.load, Computed: computed}
+	f := Finding{Load: c.load, Computed: computed, Corners: found}
 	f.places(c.part)
 	if f.Checks = computed.checks; f.Checks == nil {
 		f.Checks = c.checks(s, &computed)
 	}
+	f.Checks = append(f.Checks, growthChecks(found)...)
 	f.judge(c.part, c.options)
 	own := c.options
 	own.Workers = c.workers
 	return f, f.readMesh(ctx, c.part, own)
+}
+
+// without leaves a ladder no factor: its stress has no bound, whatever its first
+// rungs look like.
+func (c *Computed) without() {
+	none := Estimate{Value: math.NaN(), Uncertainty: math.Inf(1), Status: extrapolate.Diverging, Notes: []string{"the stress of a sharp corner has no bound"}}
+	c.Factor, c.VonMises = none, none
 }
 
 // shapes are the meshes of a part, one a stage, made once for all loads.

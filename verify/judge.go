@@ -46,7 +46,10 @@ func (f *Finding) consult(p *specimen.Part, settled bool) {
 // settle tells whether the computed factor may judge, and says why not.
 func (f *Finding) settle(p *specimen.Part, o Options) bool {
 	e := f.Computed.Factor
-	settled := f.sharp(p)
+	if !f.sharp(p.Unit) {
+		return false
+	}
+	settled := true
 	if !e.Status.Settled() {
 		f.because("the ladder has not converged: %s", e.Status)
 		settled = false

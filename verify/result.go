@@ -22,6 +22,7 @@ type Finding struct {
 	// came from none, or where there is no factor to judge by.
 	MeshClaim *MeshReading
 	Checks    []Check
+	Corners   []Corner // concave corners without a radius, those of the notch first
 	// Verdict is the claim's where there is one, else that of the handbook
 	// value in range with the best accuracy.
 	Verdict     Verdict

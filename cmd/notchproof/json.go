@@ -31,6 +31,7 @@ type jsonFinding struct {
 	Handbook    []jsonHandbook   `json:"handbook"`
 	Claim       *jsonClaim       `json:"claim,omitempty"`
 	ClaimMesh   *jsonClaimMesh   `json:"claimMesh,omitempty"`
+	Corners     []jsonCorner     `json:"corners,omitempty"`
 	Warnings    []string         `json:"warnings"`
 	Checks      []jsonCheck      `json:"checks"`
 	Verdict     verify.Verdict   `json:"verdict"`
@@ -110,6 +111,18 @@ type jsonCheck struct {
 	Passed bool    `json:"passed"`
 }
 
+// jsonCorner is a sharp corner: exponents of the distance by which its stress goes.
+type jsonCorner struct {
+	X           float64 `json:"x"`
+	Y           float64 `json:"y"`
+	Degrees     float64 `json:"degrees"`
+	OnNotch     bool    `json:"onNotch"`
+	Mode        string  `json:"mode"`
+	Measured    maybe   `json:"measured"`
+	Uncertainty maybe   `json:"uncertainty"`
+	Wedge       maybe   `json:"wedge"`
+}
+
 type jsonMisreading struct {
 	What   string  `json:"what"`
 	Factor float64 `json:"factor"`
@@ -163,6 +176,9 @@ func jsonOf(f *verify.Finding) jsonFinding {
 	}
 	if f.MeshClaim != nil {
 		out.ClaimMesh = claimMeshOf(f.MeshClaim)
+	}
+	for _, k := range f.Corners {
+		out.Corners = append(out.Corners, jsonCorner{k.X, k.Y, k.Degrees, k.OnNotch, k.Mode.String(), maybe(k.Measured), maybe(k.Uncertainty), maybe(k.Wedge)})
 	}
 	for _, k := range f.Checks {
 		out.Checks = append(out.Checks, jsonCheck{k.Name, maybe(k.Value), k.Limit, k.Passed})

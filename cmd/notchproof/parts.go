@@ -123,7 +123,10 @@ func describe(w io.Writer, family *scf.Family, part *specimen.Part, given bool) 
 			}
 			fmt.Fprintf(&b, "    %-22s %7.3f  %s (%s)\n", v.ID, v.Factor, state, v.Range)
 		}
-		if len(values) == 0 {
+		switch {
+		case len(part.Sharp) > 0:
+			b.WriteString("    no factor: the corner has no radius\n")
+		case len(values) == 0:
 			b.WriteString("    nothing published\n")
 		}
 	}

@@ -4,9 +4,11 @@ import (
 	"errors"
 	"math"
 	"math/rand/v2"
+	"slices"
 	"testing"
 
 	"notchproof/mesh"
+	"notchproof/mesh/outline"
 	"notchproof/scf"
 )
 
@@ -128,9 +130,20 @@ func checkPart(t *testing.T, p *Part) {
 	if len(p.Region.CutX(p.Net)) == 0 {
 		t.Errorf("%v: no net section at %g", p.Given, p.Net)
 	}
+	if p.Family.Sharp(p.Given) == (len(p.Sharp) == 0) {
+		t.Errorf("%v: %d sharp corners", p.Given, len(p.Sharp))
+	}
 	for _, side := range p.Notch {
+		if meetsSharp(p, side) {
+			continue
+		}
 		if name := sides[side].Name; name != "fillet" && name != "root" && name != "hole" {
 			t.Errorf("%v: notch on %s", p.Given, name)
 		}
 	}
+}
+
+// meetsSharp tells that a side ends in a corner without a radius.
+func meetsSharp(p *Part, side int) bool {
+	return slices.ContainsFunc(p.Sharp, func(c outline.Corner) bool { return c.Before == side || c.After == side })
 }

@@ -51,8 +51,11 @@ func (f fillet) top(D, d float64) float64 {
 }
 
 // rise draws the fillet from its foot, where the trace is, to its top at the
-// left.
+// left. Without a radius there is nothing to draw.
 func (f fillet) rise(t *trace, x, y float64) int {
+	if f.radial == 0 {
+		return noSide
+	}
 	center := r2.Add(t.at, r2.Vec{Y: f.radial})
 	if f.axial == f.radial {
 		return t.arc("fillet", x, y, center.X, center.Y)
@@ -63,5 +66,8 @@ func (f fillet) rise(t *trace, x, y float64) int {
 // fall draws the mirror image of a circular fillet, from its top, where the
 // trace is, to its foot at the left.
 func (f fillet) fall(t *trace, x, y float64) int {
+	if f.radial == 0 {
+		return noSide
+	}
 	return t.arc("fillet", x, y, x, y+f.radial)
 }

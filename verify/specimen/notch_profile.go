@@ -36,7 +36,10 @@ func (n notchProfile) draw(t *trace, bottom float64) int {
 	if flanks {
 		t.line("right flank", n.rootHalf, bottom+n.rootRise)
 	}
-	root := t.arc("root", -n.rootHalf, t.at.Y, 0, bottom+n.radius)
+	root := noSide
+	if n.radius > 0 {
+		root = t.arc("root", -n.rootHalf, t.at.Y, 0, bottom+n.radius)
+	}
 	if flanks {
 		t.line("left flank", -n.half, surface)
 	}
@@ -45,4 +48,9 @@ func (n notchProfile) draw(t *trace, bottom float64) int {
 
 // net is where the net section is cut for the balance of forces: close to the
 // middle, beside the mesh points that symmetry likes to put there.
-func (n notchProfile) net() float64 { return 0.23 * n.rootHalf }
+func (n notchProfile) net() float64 {
+	if n.radius == 0 {
+		return 0.23 * n.half // a mesh that is graded to a sharp root has its points closer to it
+	}
+	return 0.23 * n.rootHalf
+}

@@ -42,8 +42,7 @@ type Part struct {
 	Opposite bool
 	// Section is where the nominal stress of an outline is taken; nil for families.
 	Section *Section
-	// Sharp are the concave corners of an outline that have no radius and
-	// therefore no factor.
+	// Sharp are the concave corners that have no radius and therefore no factor.
 	Sharp []outline.Corner
 	// Plain are the stretches of constant section at both ends, one at either.
 	Plain []Plain

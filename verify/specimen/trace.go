@@ -2,6 +2,7 @@ package specimen
 
 import (
 	"math"
+	"slices"
 
 	"gonum.org/v1/gonum/spatial/r2"
 
@@ -59,10 +60,23 @@ func cutArc(h, r float64) (run, angle float64) {
 	return math.Sqrt(h * (2*r - h)), angle
 }
 
-// finish completes a part from its outline and notch sides.
+// noSide stands for the index of a root that has no radius and is not drawn.
+const noSide = -1
+
+// finish completes a part from its outline and notch sides. Where these have no
+// radius it is the sides that meet in the sharp corners.
 func finish(p *Part, region *outline.Region, notch ...int) *Part {
-	p.Region, p.Notch = region, notch
-	p.Joints = findJoints(region, notch)
+	p.Region = region
+	p.Sharp = p.sharpCorners()
+	p.Notch = slices.DeleteFunc(notch, func(i int) bool { return i == noSide })
+	if len(p.Notch) == 0 {
+		for _, c := range p.Sharp {
+			p.Notch = append(p.Notch, c.Before, c.After)
+		}
+		slices.Sort(p.Notch)
+		p.Notch = slices.Compact(p.Notch)
+	}
+	p.Joints = findJoints(region, p.Notch)
 	p.Watch = p.offNotch()
 	return p
 }
