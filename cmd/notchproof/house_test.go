@@ -33,7 +33,8 @@ var allowed = map[string]string{
 	"render":             "mesh mesh/outline mesh/lagrange fem scf verify verify/specimen render/number",
 	"verify/sizing":      "scf verify verify/specimen",
 	"verify/tolerance":   "scf verify verify/specimen",
-	"cmd/notchproof":     "scf verify verify/sizing verify/specimen verify/quantity verify/strength render render/number verify/usermesh verify/tolerance",
+	"render/report":      "scf verify verify/specimen verify/usermesh render render/number",
+	"cmd/notchproof":     "render/report scf verify verify/sizing verify/specimen verify/quantity verify/strength render render/number verify/usermesh verify/tolerance",
 }
 
 // TestImportsFollowTheFloorPlan names the file and the arrow that broke it.

@@ -35,11 +35,16 @@ func fileJob(path string, q *questions) (*job, error) {
 	if err != nil {
 		return nil, err
 	}
+	return partFileJob(data, path, q)
+}
+
+// partFileJob reads the text of a part file; name is for errors.
+func partFileJob(data []byte, name string, q *questions) (*job, error) {
 	over, err := q.over()
 	if err != nil {
 		return nil, err
 	}
-	file, err := specimen.ReadPart(data, path, over)
+	file, err := specimen.ReadPart(data, name, over)
 	if err != nil {
 		return nil, err
 	}
