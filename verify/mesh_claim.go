@@ -4,6 +4,7 @@ import (
 	"context"
 	"fmt"
 	"math"
+	"strings"
 
 	"notchproof/fem"
 	"notchproof/mesh"
@@ -63,32 +64,46 @@ func (f *Finding) readMesh(ctx context.Context, p *specimen.Part, o Options) err
 		Guidance:           guidance,
 	}
 	if f.Verdict == Disagrees {
-		f.because("%s", f.MeshClaim.explanation())
+		f.because("%s", f.MeshClaim.explanation(f.Claim))
 	}
 	return nil
 }
 
 // explanation says whether the mesh is why the claim disagrees.
-func (m *MeshReading) explanation() string {
-	nodes := gives(m.Nodes, m.DifferenceNodes) + " averaged at the nodes"
-	interior := gives(m.Interior, m.DifferenceInterior) + " at the " + m.Points()
+func (m *MeshReading) explanation(c *ClaimComparison) string {
+	nodes := m.off(m.Nodes, m.DifferenceNodes) + " averaged at the nodes"
+	interior := m.off(m.Interior, m.DifferenceInterior) + " at the " + m.Points()
 	switch m.Matches {
 	case usermesh.None:
-		return fmt.Sprintf("the mesh does not explain it: %v gives %s and %s; look at loads, supports, dimensions and the nominal stress", m.Density, nodes, interior)
+		return fmt.Sprintf("the mesh does not explain it: %v comes out %s and %s%s", m.Density, nodes, interior, m.elsewhere(c.Difference))
 	case usermesh.Interior:
 		nodes = interior
 	}
-	return fmt.Sprintf("the mesh explains it: %v gives %s, and the claim lies within that; %s", m.Density, nodes, m.remedy())
+	return fmt.Sprintf("the mesh explains it: %v comes out %s, and so does the claim; %s", m.Density, nodes, m.remedy())
 }
 
-// gives writes a reading with its scatter and its distance from the converged
-// factor.
-func gives(s usermesh.Span, difference float64) string {
-	side := "above"
+// off writes how far a reading lies from the converged factor, with its scatter,
+// in percent.
+func (m *MeshReading) off(s usermesh.Span, difference float64) string {
+	side := "high"
 	if difference < 0 {
-		side = "below"
+		side = "low"
 	}
-	return fmt.Sprintf("%.4g to %.4g (%.1f %% %s the converged factor)", s.Value-s.Scatter, s.Value+s.Scatter, 100*math.Abs(difference), side)
+	scatter := s.Scatter / s.Value * (1 + difference)
+	return fmt.Sprintf("%.1f ± %.1f %% %s", 100*math.Abs(difference), 100*scatter, side)
+}
+
+// elsewhere says which density of the same order does give a claim at the nodes,
+// where one of those tried for guidance is too low for it and the next too high.
+func (m *MeshReading) elsewhere(difference float64) string {
+	trials := m.Guidance.Trials
+	for i := 1; i < len(trials); i++ {
+		a, b := trials[i-1], trials[i]
+		if a.Density.Order == m.Density.Order && b.Density.Order == a.Density.Order && (a.Error-difference)*(b.Error-difference) <= 0 {
+			return fmt.Sprintf("; between %g and %g elements per 90° would give the claim at the nodes", a.Density.Arc, b.Density.Arc)
+		}
+	}
+	return ", and no density of that order gives the claim at the nodes: look at loads, supports, dimensions and the nominal stress"
 }
 
 // Points names the interior points at which the order is read.
@@ -102,8 +117,7 @@ func (m *MeshReading) Points() string {
 // remedy says what would do at the middle level.
 func (m *MeshReading) remedy() string {
 	level := usermesh.Levels()[1]
-	text := fmt.Sprintf("for %g %% at the nodes", 100*level)
-	sep := " "
+	var words []string
 	for _, n := range m.Guidance.Needed {
 		if n.Level != level {
 			continue
@@ -112,8 +126,7 @@ func (m *MeshReading) remedy() string {
 		if n.Arc == 0 {
 			many = fmt.Sprintf("more than %g", n.MoreThan)
 		}
-		text += fmt.Sprintf("%sorder %d needs %s", sep, n.Order, many)
-		sep = ", "
+		words = append(words, fmt.Sprintf("order %d needs %s", n.Order, many))
 	}
-	return text + " elements per 90°"
+	return fmt.Sprintf("to stay within %g %% at the nodes %s elements per 90°", 100*level, strings.Join(words, ", "))
 }

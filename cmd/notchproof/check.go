@@ -20,6 +20,14 @@ checks the demonstration part.
       --claim 1.85 --claim-from "chart, by eye"
   notchproof check seat.json
 
+A claim from a finite element mesh of your own may say how fine the mesh was at
+the root: the order of its elements (1 straight-sided, 2 with mid-nodes) and
+their number per 90° of arc. Such meshes are then made and read as usual, at the
+nodes and inside the elements, to see whether the density explains the claim.
+
+  notchproof check shaft-shoulder D=90mm d=75mm r=6mm --load bending \
+      --claim 1.62 --claim-mesh order=1,arc=12
+
 A part file is JSON: title, shape (a family with its dimensions, or an outline
 of your own as path data), loads, material and claims. To start one, let
 "notchproof parts shaft-shoulder D=72mm d=48mm r=3mm --as-file" print it. What

@@ -56,13 +56,13 @@ func claimMeshOf(m *verify.MeshReading) *jsonClaimMesh {
 // meshClaimText prints, below the claim, what such a mesh gives.
 func meshClaimText(b *strings.Builder, f *verify.Finding, s style) {
 	m := f.MeshClaim
-	fmt.Fprintf(b, "  its mesh   %v: such meshes give\n", m.Density)
+	fmt.Fprintf(b, "  its mesh   %v of the root: such meshes give\n", m.Density)
 	row := func(what string, v usermesh.Span, difference float64, matched bool) {
 		mark := ""
 		if matched {
-			mark = "  " + s.bold("the claim")
+			mark = s.bold(", as the claim")
 		}
-		fmt.Fprintf(b, "             %s %8s  %s%s\n", number.Uncertain(v.Value, v.Scatter), number.SignedPercent(difference, 1), what, mark)
+		fmt.Fprintf(b, "             %-15s %8s  %s%s\n", number.Uncertain(v.Value, v.Scatter), number.SignedPercent(difference, 1), what, mark)
 	}
 	row("averaged at the nodes", m.Nodes, m.DifferenceNodes, m.Matches == usermesh.Nodes || m.Matches == usermesh.Both)
 	row("at the "+m.Points(), m.Interior, m.DifferenceInterior, m.Matches == usermesh.Interior || m.Matches == usermesh.Both)
@@ -74,35 +74,38 @@ func meshClaimText(b *strings.Builder, f *verify.Finding, s style) {
 
 // guidanceText prints how fine a mesh must be, for people who make one.
 func guidanceText(b *strings.Builder, g *usermesh.Guidance, symbol string) {
-	fmt.Fprintf(b, "\nmeshes of your own: elements per 90° of the root from which on the stress averaged\nat the nodes stays within a level of %s = %s, finer ones included\n", symbol, number.Significant(g.Factor, 4))
+	fmt.Fprintf(b, "\nA mesh of your own: the largest stress averaged at the nodes of the root stays within a level\nof %s = %s from so many elements per 90° on, all finer ones that were tried included.\n",
+		symbol, number.Uncertain(g.Factor, g.Uncertainty))
 	guidanceRows(b, "", g)
-	finest := map[int]float64{}
+	finest := make(map[int]float64)
 	for _, t := range g.Trials {
 		finest[t.Density.Order] = t.Density.Arc
 	}
-	fmt.Fprintf(b, "order 1 with straight sides, tried to %g; order 2 with mid-nodes on the curve, tried\nto %g; edges grow by %g of the distance from the root, to an eighth of the part at most\n",
+	fmt.Fprintf(b, "Order 1 has straight sides and was tried to %g per 90°, order 2 has its mid-nodes on the curve\nand was tried to %g; the length of edges grows by %g of the distance from the root, to an eighth\nof the part's width at most. The stresses are averaged part by part, then the principal stress\n(in torsion the shear) is taken from the mean.\n",
 		finest[1], finest[2], usermesh.Growth)
 }
 
 // guidanceRows prints the table, one row an order.
 func guidanceRows(b *strings.Builder, margin string, g *usermesh.Guidance) {
-	fmt.Fprintf(b, "%sper 90° for", margin)
+	fmt.Fprintf(b, "%selements per 90° for errors below", margin)
 	for _, level := range usermesh.Levels() {
-		fmt.Fprintf(b, " %8s", number.Percent(level, 0))
+		fmt.Fprintf(b, " %7s", number.Percent(level, 0))
 	}
 	order := 0
 	for _, n := range g.Needed {
 		if n.Order != order {
 			order = n.Order
-			fmt.Fprintf(b, "\n%sorder %d    ", margin, order)
+			fmt.Fprintf(b, "\n%sorder %d, averaged at the nodes   ", margin, order)
 		}
-		fmt.Fprintf(b, " %8s", needText(n))
+		fmt.Fprintf(b, " %7s", needText(n))
 	}
 	b.WriteString("\n")
 }
 
 func needText(n usermesh.Need) string {
 	switch {
+	case n.Arc == specimen.LeastArc:
+		return "≤ " + number.Compact(n.Arc, 4)
 	case n.Arc > 0:
 		return number.Compact(n.Arc, 4)
 	case n.MoreThan > 0:

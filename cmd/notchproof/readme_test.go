@@ -62,3 +62,19 @@ func TestReadmePartFile(t *testing.T) {
 		t.Errorf("exit status %d\n%s%s", status, out.String(), errs.String())
 	}
 }
+
+// TestReadmeClaimFromAMesh holds the lines of the README's claim from a mesh
+// against what is printed.
+func TestReadmeClaimFromAMesh(t *testing.T) {
+	text, err := os.ReadFile("../../README.md")
+	if err != nil {
+		t.Fatal(err)
+	}
+	block := regexp.MustCompile("(?s)\\$ notchproof (check [^\n]*--claim-mesh \\S+)[^\n]*\n  …\n(.*?)  …\n```").FindStringSubmatch(string(text))
+	if block == nil {
+		t.Fatal("the example is not in the README")
+	}
+	if _, out, _ := program(t, block[1]); !strings.Contains(out, block[2]) {
+		t.Errorf("README\n%sprinted\n%s", block[2], out)
+	}
+}

@@ -28,6 +28,9 @@ By order the mesh stays and the order climbs from 1 to 8. The last column is the
 traction that the solution leaves on the free surface at the peak, where there
 is none in truth, at unit nominal stress.
 
+Below it stands how fine a mesh of your own must be at the root: elements per 90°
+of arc for errors of 5, 2 and 1 % at order 1 and 2, read at the nodes as usual.
+
   notchproof study bar-shoulder D=60mm d=40mm r=4mm --load tension --by size -o study.png
 `,
 		run: runStudy,

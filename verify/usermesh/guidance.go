@@ -11,9 +11,10 @@ import (
 // Guidance says how fine meshes of order 1 and 2 must be at the root for the
 // stress averaged at the nodes, and what the meshes that were tried gave.
 type Guidance struct {
-	Factor float64 // the converged one that errors are counted from
-	Trials []Trial
-	Needed []Need // by order, then by level, widest first
+	Factor      float64 // the converged one that errors are counted from
+	Uncertainty float64
+	Trials      []Trial // by order, then by density
+	Needed      []Need  // by order, then by level, widest first
 }
 
 // A Trial is one mesh that was tried.
@@ -53,8 +54,9 @@ const (
 	// back fourfold either.
 	calmTrials = 3
 	calmShare  = 0.25
-	// mostGuided bounds the unknowns of one trial: about a tenth of a second.
-	mostGuided = 40_000
+	// mostWork ends it as well: the unknowns of all trials of an order together,
+	// three to four times those of an ordinary part, about half a second.
+	mostWork = 200_000
 )
 
 // Guide tries meshes of both orders, coarse to fine, against a factor that is
@@ -70,7 +72,7 @@ func (s *Subject) Guide(ctx context.Context, factor, uncertainty float64) (*Guid
 	if err != nil {
 		return nil, err
 	}
-	g := &Guidance{Factor: factor}
+	g := &Guidance{Factor: factor, Uncertainty: uncertainty}
 	for i, order := range orders {
 		g.Trials = append(g.Trials, tried[i]...)
 		for _, level := range Levels() {
@@ -84,7 +86,7 @@ func (s *Subject) Guide(ctx context.Context, factor, uncertainty float64) (*Guid
 func (s *Subject) climb(ctx context.Context, order int, factor, uncertainty float64, w *fem.Workspace) ([]Trial, error) {
 	var tried []Trial
 	levels := Levels()
-	calm := 0
+	calm, work := 0, 0
 	for _, arc := range arcs() {
 		d := specimen.Density{Order: order, Arc: arc}
 		v, err := s.value(ctx, d, Growth, w)
@@ -97,7 +99,7 @@ func (s *Subject) climb(ctx context.Context, order int, factor, uncertainty floa
 		if calm++; t.Bound > calmShare*levels[len(levels)-1] {
 			calm = 0
 		}
-		if calm == calmTrials || v.unknowns > mostGuided {
+		if work += v.unknowns; calm == calmTrials || work > mostWork {
 			break
 		}
 	}

@@ -5,6 +5,8 @@ import (
 	"math"
 	"testing"
 
+	"gonum.org/v1/gonum/spatial/r2"
+
 	"notchproof/verify/specimen"
 	"notchproof/verify/usermesh"
 )
@@ -97,6 +99,32 @@ func TestGuidanceCountsTheUncertainty(t *testing.T) {
 	for _, n := range g.Needed {
 		if reached := n.Arc > 0; reached != (n.Level > 0.03) {
 			t.Errorf("with 3 %% of uncertainty: %+v", n)
+		}
+	}
+}
+
+// The root has as many elements as are asked for: no mesh is finer there than it
+// says, and none coarser.
+func TestDensityIsKept(t *testing.T) {
+	for _, row := range shapes {
+		if row.family == "bar-ellipse" {
+			continue // its curvature changes along the root
+		}
+		p := part(t, row.family, row.dims)
+		turning := 0.0
+		for _, side := range p.Notch {
+			c := p.Region.Sides()[side].Curve
+			a, b := c.Deriv(0), c.Deriv(1)
+			turning += math.Abs(math.Atan2(r2.Cross(a, b), r2.Dot(a, b)))
+		}
+		s := subject(t, p, row.load)
+		for _, arc := range []float64{3, 5, 16, 64} {
+			for _, growth := range []float64{0.2, 0.5} {
+				want := math.Ceil(arc*turning/(math.Pi/2) - 1e-6)
+				if got := usermesh.RootEdges(t, s, arc, growth); got != int(want) {
+					t.Errorf("%s with %g elements per 90°, growth %g: %d on the root, want %g", row.family, arc, growth, got, want)
+				}
+			}
 		}
 	}
 }
