@@ -105,11 +105,11 @@ func guidanceRows(b *strings.Builder, margin string, g *usermesh.Guidance) {
 func needText(n usermesh.Need) string {
 	switch {
 	case n.Arc == specimen.LeastArc:
-		return "≤ " + number.Compact(n.Arc, 4)
+		return "≤ " + number.Compact(n.Arc, 4)
 	case n.Arc > 0:
 		return number.Compact(n.Arc, 4)
 	case n.MoreThan > 0:
-		return "> " + number.Compact(n.MoreThan, 4)
+		return "> " + number.Compact(n.MoreThan, 4)
 	}
 	return "–"
 }
