@@ -31,7 +31,7 @@ var allowed = map[string]string{
 	"verify/strength":    "mesh mesh/outline fem scf verify verify/specimen verify/quantity",
 	"render/number":      "",
 	"render":             "mesh mesh/outline mesh/lagrange fem scf verify verify/specimen render/number",
-	"verify/sizing":      "scf verify verify/specimen",
+	"verify/sizing":      "mesh/outline scf verify verify/specimen verify/strength",
 	"verify/tolerance":   "scf verify verify/specimen",
 	"render/report":      "scf verify verify/specimen verify/usermesh render render/number",
 	"cmd/notchproof":     "render/report scf verify verify/sizing verify/specimen verify/quantity verify/strength render render/number verify/usermesh verify/tolerance",

@@ -1,33 +1,47 @@
 package main
 
 import (
-	"fmt"
 	"strings"
 
-	"notchproof/scf"
 	"notchproof/verify/sizing"
 	"notchproof/verify/specimen"
 )
 
-const exitNotMet = 1 // no value of the dimension meets what is asked
+const exitNotMet = 1 // what is asked for is not met: no value of the dimension does
 
 func sizeCommand() *command {
 	return &command{
 		name:  "size",
-		args:  "PART [dimension=value ...] [--for dimension] --kt FACTOR [flags]",
-		short: "find the smallest radius, or another dimension, that meets a factor",
+		args:  "PART [dimension=value ...] [--for dimension] --kt FACTOR | --stress STRESS | --safety NUMBER [flags]",
+		short: "find the smallest radius, or another dimension, that meets a factor, a stress or a safety",
 		long: `Turns the check round: finds the value of one dimension at which the computed
-factor is the one that is allowed, with the uncertainty that follows from the
-bar of the factor, and takes it to the next drawing step on the safe side. The
-dimension may be left out, or given as the part has it now.
+factor, stress or safety is the one that is allowed, with the uncertainty that
+follows from the bar of the solution, and takes it to the next drawing step on
+the safe side. The dimension may be left out, or given as the part has it now.
 
   notchproof size shaft-shoulder D=72mm d=48mm --kt 1.8 --load bending
   notchproof size shaft-shoulder D=72mm r=3mm --for d --kt 1.8 --load bending
+  notchproof size shaft-shoulder D=72mm d=48mm --stress 120MPa --load bending --nominal 60MPa
+  notchproof size shaft-shoulder D=72mm d=48mm --safety 2 --bending 1.2kN·m --torque 900N·m --yield 355MPa
 
-The factor is looked at over all sizes that can be drawn, from a thousandth of
-the part upwards and further where it must be, for it need not fall all the way:
-of several values that meet the limit the smallest is given and the others are
-named. The nominal stress is that of the part as it is then drawn.
+--kt limits the factor on the net section of the part as it is then drawn. A
+--stress with --load and --nominal limits the largest stress at the notch, under
+the load that gives the nominal stress in the part as given. --safety, or
+--stress with --axial, --bending and --torque, limits the equivalent stress at
+the place that governs, as the command strength computes it. A load stays what
+it is while the dimension changes.
+
+The quantity is looked at over all sizes that can be drawn, from a thousandth of
+the part upwards and further where it must be, for it need not run one way: of
+several values that meet the limit the smallest is given and the others are
+named. Beside the answer stand other ways to meet the same limit, each computed:
+they keep the radius that the part has now, or half of the answer where it has
+none, and --bare leaves them out.
+
+--json prints value with valueUncertainty in unit, factor with uncertainty,
+rounded, keeps (the stretches that meet the limit), scanned, alternatives (what,
+sizes, factor, uncertainty, meets, costs, length along the axis). value is null
+where nothing meets the limit, and best is what comes nearest.
 
 Exit status: 0 met, 1 no value meets it, 2 bad input, 3 undecided, 130 interrupted.
 `,
@@ -37,27 +51,26 @@ Exit status: 0 met, 1 no value meets it, 2 bad input, 3 undecided, 130 interrupt
 
 func runSize(c *call) (int, error) {
 	var q questions
-	var s sizeQuestion
-	c.flags.StringVar(&s.dimension, "for", "", "the dimension that is sought (r where the part has one)")
-	c.flags.StringVar(&s.kt, "kt", "", "the largest stress concentration factor allowed")
+	s := sizeQuestion{goal: goal{flags: c.flags}}
+	s.define(c.flags)
 	q.loadFlag(c.flags)
 	q.targetFlag(c.flags)
 	q.partFlags(c.flags)
+	bare := c.flags.Bool("bare", false, "leave out the alternatives")
 	asJSON := c.flags.Bool("json", false, "print one JSON object instead of text")
 	args, err := c.parse()
 	if err != nil {
 		return 0, err
 	}
-	shape, err := q.shape(args)
-	if err != nil {
-		return 0, err
-	}
-	if err := s.ask(&q, shape); err != nil {
+	if err := s.ask(&q, args); err != nil {
 		return 0, err
 	}
 	bar := c.progress()
 	s.question.Progress = bar.tell
 	s.answer, err = s.question.Find(c.ctx)
+	if err == nil && !*bare {
+		s.alternatives, err = s.question.Alternatives(c.ctx, s.answer)
+	}
 	bar.clear()
 	if err != nil {
 		return 0, err
@@ -68,119 +81,6 @@ func runSize(c *call) (int, error) {
 		err = writeSizeText(c.stdout, &s, c.style())
 	}
 	return s.status(), err
-}
-
-// A shape is a family with dimensions that need not be complete, and the loads
-// that are asked for.
-type shape struct {
-	family  *scf.Family
-	dims    scf.Dims
-	unit    string
-	options scf.Options
-	loads   []scf.Load
-	title   string
-}
-
-// shape reads PART for commands that vary its dimensions.
-func (q *questions) shape(args []string) (*shape, error) {
-	if len(args) > 0 && isFile(args[0]) {
-		job, err := q.job(args)
-		if err != nil {
-			return nil, err
-		}
-		if job.part.Family == nil {
-			return nil, &inputError{text: quoted(args[0]) + ": an outline of one's own has no named dimensions", hint: "give a family with its dimensions, or a part file that names one"}
-		}
-		return &shape{job.part.Family, job.part.Given, job.part.Unit, job.part.Options, job.loads, job.part.Title}, nil
-	}
-	if len(args) == 0 {
-		_, err := partOf(args, scf.Options{})
-		return nil, err
-	}
-	family, err := familyOf(args[0])
-	if err != nil {
-		return nil, err
-	}
-	s := &shape{family: family}
-	if s.dims, s.unit, err = dimensions(family, args[1:]); err != nil {
-		return nil, err
-	}
-	if s.options, err = q.options(); err != nil {
-		return nil, err
-	}
-	s.loads, err = q.loads(family)
-	return s, err
-}
-
-// load is the one load that is meant.
-func (s *shape) load() (scf.Load, error) {
-	loads := s.loads
-	if len(loads) == 0 {
-		loads = s.family.Loads
-	}
-	if len(loads) != 1 {
-		return "", &inputError{text: "for which load?", hint: "name one with --load: " + loadNames(s.family)}
-	}
-	return loads[0], nil
-}
-
-// A sizeQuestion is what a user asks of size, and the answer.
-type sizeQuestion struct {
-	dimension string
-	kt        string
-
-	shape    *shape
-	load     scf.Load
-	question *sizing.Question
-	answer   *sizing.Answer
-}
-
-// ask puts the question together.
-func (s *sizeQuestion) ask(q *questions, shape *shape) (err error) {
-	s.shape = shape
-	if err = s.choose(); err != nil {
-		return err
-	}
-	limit, err := plainNumber(s.kt)
-	switch {
-	case s.kt == "":
-		return &inputError{text: "nothing to meet", hint: "give the largest factor allowed, as in --kt 1.8"}
-	case err != nil || limit <= 0 || limit > 1e6:
-		return &inputError{text: "--kt " + quoted(s.kt) + ": not a stress concentration factor", hint: "give a plain number, as in 1.8"}
-	}
-	if s.load, err = shape.load(); err != nil {
-		return err
-	}
-	options, err := q.verify([]scf.Load{s.load})
-	if err != nil {
-		return err
-	}
-	s.question = &sizing.Question{
-		Family: shape.family, Dims: shape.dims, Unit: shape.unit, Options: shape.options, Dimension: s.dimension,
-		Measure: sizing.Factor(s.load, 0), Limit: limit, Target: options.Target,
-	}
-	return nil
-}
-
-// choose settles which dimension is sought, and that the others are there.
-func (s *sizeQuestion) choose() error {
-	family := s.shape.family
-	if s.dimension == "" {
-		if s.dimension = "r"; dimensionOf(family, "r") == nil {
-			return &inputError{text: "which dimension?", hint: "name one with --for: " + family.Usage()}
-		}
-	}
-	if dimensionOf(family, s.dimension) == nil {
-		err := unknownDimension(family, s.dimension).(*inputError)
-		err.text = "--for " + err.text
-		return err
-	}
-	for _, d := range family.Dimensions {
-		if _, given := s.shape.dims[d.Name]; !given && !d.Optional && d.Name != s.dimension {
-			return &inputError{text: fmt.Sprintf("%s: missing, the %s", d.Name, d.Meaning), hint: "all but the dimension that is sought are needed: " + family.Usage()}
-		}
-	}
-	return nil
 }
 
 func (s *sizeQuestion) status() int {

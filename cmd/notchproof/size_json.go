@@ -15,7 +15,7 @@ import (
 type jsonSize struct {
 	Schema           int               `json:"schema"`
 	Part             jsonPart          `json:"part"`
-	Load             scf.Load          `json:"load"`
+	Load             scf.Load          `json:"load,omitempty"`
 	Limit            jsonLimit         `json:"limit"`
 	Outcome          string            `json:"outcome"`
 	Dimension        string            `json:"dimension"`
@@ -35,14 +35,18 @@ type jsonSize struct {
 }
 
 type jsonLimit struct {
-	Of    string  `json:"of"`
-	Value float64 `json:"value"`
+	Of     string  `json:"of"` // factor, stress or safety
+	Value  float64 `json:"value"`
+	Unit   string  `json:"unit,omitempty"` // of stresses
+	Safety float64 `json:"safety,omitempty"`
 }
 
 type jsonSized struct {
-	Value       float64 `json:"value"`
-	Factor      maybe   `json:"factor"`
-	Uncertainty maybe   `json:"uncertainty"`
+	Value             float64 `json:"value"`
+	Factor            maybe   `json:"factor"`
+	Uncertainty       maybe   `json:"uncertainty"`
+	Stress            *maybe  `json:"stress,omitempty"` // in the unit of the limit
+	StressUncertainty *maybe  `json:"stressUncertainty,omitempty"`
 }
 
 type jsonInterval struct {
@@ -51,14 +55,60 @@ type jsonInterval struct {
 }
 
 type jsonAlternative struct {
-	What        string `json:"what"`
-	Factor      maybe  `json:"factor"`
-	Uncertainty maybe  `json:"uncertainty"`
-	Costs       string `json:"costs"`
+	What        string          `json:"what"`
+	Factor      maybe           `json:"factor"`
+	Uncertainty maybe           `json:"uncertainty"`
+	Costs       string          `json:"costs"`
+	Sizes       []jsonDimension `json:"sizes"`
+	Meets       bool            `json:"meets"`
+	Length      float64         `json:"length"` // along the axis
+	Changes     []jsonDimension `json:"changes"`
 }
 
-func sized(s sizing.Sample) jsonSized {
-	return jsonSized{s.At, maybe(s.Factor), maybe(s.FactorBar)}
+// A jsonDimension is a size by its name, with a bar where it was sought.
+type jsonDimension struct {
+	Dimension   string  `json:"dimension"`
+	Value       float64 `json:"value"`
+	Uncertainty float64 `json:"uncertainty,omitempty"`
+}
+
+func (s *sizeQuestion) sized(x sizing.Sample) jsonSized {
+	out := jsonSized{Value: x.At, Factor: maybe(x.Factor), Uncertainty: maybe(x.FactorBar)}
+	if s.limit.Given() {
+		stress, bar := maybe(s.limit.Like(x.Value).Value()), maybe(s.limit.Like(x.Uncertainty).Value())
+		out.Stress, out.StressUncertainty = &stress, &bar
+	}
+	return out
+}
+
+func (s *sizeQuestion) jsonAlternatives() []jsonAlternative {
+	list := []jsonAlternative{}
+	for i := range s.alternatives {
+		a := &s.alternatives[i]
+		out := jsonAlternative{What: a.What, Factor: maybe(a.Factor), Uncertainty: maybe(a.FactorBar), Costs: s.costsText(a), Meets: a.Meets, Length: a.Length, Changes: []jsonDimension{}}
+		for _, z := range a.Sizes {
+			d := jsonDimension{Dimension: z.Name, Value: z.Value}
+			if z.Name == a.Sought {
+				d.Uncertainty = a.Bar
+			}
+			out.Sizes = append(out.Sizes, d)
+		}
+		for _, z := range a.Changes {
+			out.Changes = append(out.Changes, jsonDimension{Dimension: z.Name, Value: z.Value})
+		}
+		list = append(list, out)
+	}
+	return list
+}
+
+func (s *sizeQuestion) jsonLimit() jsonLimit {
+	switch {
+	case !s.limit.Given():
+		return jsonLimit{Of: "factor", Value: s.question.Limit}
+	case s.safety > 0:
+		return jsonLimit{Of: "safety", Value: s.limit.Value(), Unit: s.limit.Unit(), Safety: s.safety}
+	}
+	return jsonLimit{Of: "stress", Value: s.limit.Value(), Unit: s.limit.Unit()}
 }
 
 var outcomeNames = map[sizing.Outcome]string{sizing.Met: "met", sizing.Throughout: "metThroughout", sizing.Beyond: "notMet", sizing.Undecided: "undecided"}
@@ -68,31 +118,31 @@ func writeSizeJSON(w io.Writer, s *sizeQuestion) error {
 	out := jsonSize{
 		Schema: 1,
 		Part:   jsonPart{Family: s.shape.family.Name, Dims: s.shape.dims, Unit: s.shape.unit, Nu: s.shape.options.Nu},
-		Load:   s.load, Limit: jsonLimit{"factor", s.question.Limit},
+		Load:   s.load, Limit: s.jsonLimit(),
 		Outcome: outcomeNames[a.Outcome], Dimension: s.dimension, Unit: s.unit(),
 		Value: maybe(math.NaN()), ValueUncertainty: maybe(math.NaN()), Factor: maybe(math.NaN()), Uncertainty: maybe(math.NaN()),
 		Smallest: a.Outcome == sizing.Throughout || a.Falling,
 		Keeps:    []jsonInterval{},
 		Searched: jsonInterval(a.Searched), Drawable: jsonInterval(a.Drawable),
-		Alternatives: []jsonAlternative{},
+		Alternatives: s.jsonAlternatives(),
 	}
 	switch a.Outcome {
 	case sizing.Met, sizing.Throughout:
 		out.Value, out.ValueUncertainty = maybe(a.At.At), maybe(a.Bar)
 		out.Factor, out.Uncertainty = maybe(a.At.Factor), maybe(a.At.FactorBar)
 	case sizing.Beyond:
-		best := sized(a.At)
+		best := s.sized(a.At)
 		out.Best = &best
 	}
 	if a.Rounded != nil {
-		r := sized(*a.Rounded)
+		r := s.sized(*a.Rounded)
 		out.Rounded = &r
 	}
 	for _, k := range a.Keeps {
 		out.Keeps = append(out.Keeps, jsonInterval(k))
 	}
 	for _, x := range a.Scanned {
-		out.Scanned = append(out.Scanned, sized(x))
+		out.Scanned = append(out.Scanned, s.sized(x))
 	}
 	encoder := json.NewEncoder(w)
 	encoder.SetEscapeHTML(false)

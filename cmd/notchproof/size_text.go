@@ -21,22 +21,29 @@ func writeSizeText(w io.Writer, s *sizeQuestion, st style) error {
 	s.questionText(&b, st)
 	s.answerText(&b, st)
 	s.searchText(&b, st)
+	s.alternativesText(&b, st)
 	b.WriteString("\n" + caution)
 	_, err := io.WriteString(w, b.String())
 	return err
 }
 
 func (s *sizeQuestion) questionText(b *strings.Builder, st style) {
-	fmt.Fprintf(b, "\n%s", st.bold(string(s.load)))
-	if p := s.part(s.answer.At.At); p != nil {
-		l, _ := p.Load(s.load)
-		fmt.Fprintf(b, ", nominal stress %s (%s)", l.Nominal.Formula, l.Nominal.Section)
+	b.WriteString("\n")
+	if s.load != "" {
+		b.WriteString(st.bold(string(s.load)))
+		if p := s.part(s.answer.At.At); p != nil {
+			l, _ := p.Load(s.load)
+			fmt.Fprintf(b, ", nominal stress %s (%s)", l.Nominal.Formula, l.Nominal.Section)
+		}
+		b.WriteString("\n")
+	} else {
+		fmt.Fprintf(b, "  loads      %s\n", loadsText(&s.strength))
 	}
 	which := "smallest"
 	if s.answer.Outcome == sizing.Met && !s.answer.Falling {
 		which = "largest"
 	}
-	fmt.Fprintf(b, "\n  asked      the %s %s with %s ≤ %s\n", which, s.dimension, s.symbol(), number.Compact(s.question.Limit, 6))
+	fmt.Fprintf(b, "  asked      the %s %s with %s\n", which, s.dimension, s.words)
 }
 
 func (s *sizeQuestion) symbol() string {
@@ -65,20 +72,36 @@ func (s *sizeQuestion) known(x, bar float64) string {
 	return text
 }
 
-func (s *sizeQuestion) at(x sizing.Sample) string {
-	return fmt.Sprintf("%s = %s", s.symbol(), number.Uncertain(x.Factor, x.FactorBar))
+// at writes what was measured.
+func (s *sizeQuestion) at(r sizing.Reading) string {
+	factor := fmt.Sprintf("%s = %s", s.symbol(), number.Uncertain(r.Factor, r.FactorBar))
+	if !s.limit.Given() {
+		return factor
+	}
+	text := number.Uncertain(s.limit.Like(r.Value).Value(), s.limit.Like(r.Uncertainty).Value()) + "\u00a0" + s.limit.Unit()
+	switch {
+	case s.load != "":
+		return text + ", " + factor
+	case s.safety > 0:
+		safety := s.safety * s.question.Limit / r.Value
+		text += ", safety " + number.Uncertain(safety, safety*r.Uncertainty/(r.Value-r.Uncertainty))
+	}
+	if r.Where != "" {
+		text += ", on the " + r.Where
+	}
+	return text
 }
 
 func (s *sizeQuestion) answerText(b *strings.Builder, st style) {
 	a := s.answer
 	switch a.Outcome {
 	case sizing.Met:
-		fmt.Fprintf(b, "  answer     %s, where %s\n", st.bold(s.dimension+" = "+s.known(a.At.At, a.Bar)), s.at(a.At))
+		fmt.Fprintf(b, "  answer     %s, where %s\n", st.bold(s.dimension+" = "+s.known(a.At.At, a.Bar)), s.at(a.At.Reading))
 		s.roundedText(b)
 	case sizing.Throughout:
-		fmt.Fprintf(b, "  answer     %s\n             at %s = %s %s\n", st.bold("every "+s.dimension+" that was looked at meets it"), s.dimension, s.length(a.At.At), s.at(a.At))
+		fmt.Fprintf(b, "  answer     %s\n             at %s = %s %s\n", st.bold("every "+s.dimension+" that was looked at meets it"), s.dimension, s.length(a.At.At), s.at(a.At.Reading))
 	case sizing.Beyond:
-		fmt.Fprintf(b, "  answer     %s\n             the best is %s = %s with %s\n", st.bad("no "+s.dimension+" meets it"), s.dimension, s.length(a.At.At), s.at(a.At))
+		fmt.Fprintf(b, "  answer     %s\n             the best is %s = %s with %s\n", st.bad("no "+s.dimension+" meets it"), s.dimension, s.length(a.At.At), s.at(a.At.Reading))
 	default:
 		fmt.Fprintf(b, "  answer     %s\n             at %s = %s: %s\n", st.weak("undecided"), s.dimension, s.length(a.At.At), oneLine(a.At.Why))
 	}
@@ -97,7 +120,7 @@ func (s *sizeQuestion) roundedText(b *strings.Builder) {
 	if !s.answer.Falling {
 		way = "down"
 	}
-	fmt.Fprintf(b, "  rounded    %s to %s = %s, where %s\n", way, s.dimension, s.length(r.At), s.at(*r))
+	fmt.Fprintf(b, "  rounded    %s to %s = %s, where %s\n", way, s.dimension, s.length(r.At), s.at(r.Reading))
 }
 
 func (s *sizeQuestion) searchText(b *strings.Builder, st style) {
@@ -113,6 +136,77 @@ func (s *sizeQuestion) searchText(b *strings.Builder, st style) {
 	for _, x := range a.Skipped {
 		fmt.Fprintf(b, "  %s at %s = %s nothing could be judged: %s\n", st.weak("warning"), s.dimension, s.length(x.At), oneLine(x.Why))
 	}
+}
+
+// alternativesText is the table of other ways.
+func (s *sizeQuestion) alternativesText(b *strings.Builder, st style) {
+	if len(s.alternatives) == 0 {
+		return
+	}
+	fmt.Fprintf(b, "\n%s\n", st.bold("other ways in the same envelope"))
+	if a := s.answer; a.Outcome == sizing.Met {
+		if p := s.part(a.At.At); p != nil {
+			s.rowText(b, "the answer", s.dimension+" = "+s.length(a.At.At), a.At.Reading, s.alongText(sizing.Length(p)), "")
+		}
+	}
+	for i := range s.alternatives {
+		a := &s.alternatives[i]
+		meets := ""
+		if !a.Meets {
+			meets = st.bad("not enough")
+		}
+		s.rowText(b, a.What, s.sizesText(a), a.Reading, s.costsText(a), meets)
+	}
+}
+
+func (s *sizeQuestion) rowText(b *strings.Builder, what, sizes string, r sizing.Reading, costs, meets string) {
+	fmt.Fprintf(b, "  %-34s %s\n", what, sizes)
+	fmt.Fprintf(b, "    %s; %s", s.at(r), costs)
+	if meets != "" {
+		fmt.Fprintf(b, "; %s", meets)
+	}
+	b.WriteString("\n")
+}
+
+// sizesText writes the dimensions of an alternative; the one that was sought
+// with its bar.
+func (s *sizeQuestion) sizesText(a *sizing.Alternative) string {
+	var words []string
+	for _, z := range a.Sizes {
+		text := s.lengthOf(z)
+		if z.Name == a.Sought && a.Bar > 0 {
+			text = number.Uncertain(z.Value, a.Bar) + noBreakUnit(s.shape.unit)
+		}
+		words = append(words, z.Name+" = "+text)
+	}
+	return strings.Join(words, ", ")
+}
+
+func noBreakUnit(unit string) string {
+	if unit == "" {
+		return ""
+	}
+	return "\u00a0" + unit
+}
+
+func (s *sizeQuestion) lengthOf(z sizing.Size) string {
+	if z.Name == "angle" {
+		return number.Compact(z.Value, 6) + "°"
+	}
+	return number.Length(round(z.Value, 4), s.shape.unit)
+}
+
+func (s *sizeQuestion) alongText(length float64) string {
+	return "takes " + number.Length(round(length, 3), s.shape.unit) + " along the axis"
+}
+
+// costsText says what an alternative takes.
+func (s *sizeQuestion) costsText(a *sizing.Alternative) string {
+	words := []string{s.alongText(a.Length)}
+	for _, z := range a.Changes {
+		words = append(words, z.Name+" "+signedText(round(z.Value, 3))+noBreakUnit(s.shape.unit))
+	}
+	return strings.Join(words, ", ")
 }
 
 // givenText writes the dimensions as given, in the order of the family's list.

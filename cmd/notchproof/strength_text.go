@@ -48,7 +48,24 @@ func (b *strengthSheet) line(format string, args ...any) { fmt.Fprintf(b, format
 const strengthDigits = 4
 
 func (b *strengthSheet) question() {
-	q, m := &b.Question, &b.Question.Material
+	m := &b.Question.Material
+	b.line("  loads      %s", loadsText(&b.Question))
+	var words []string
+	if m.Yield.Given() {
+		words = append(words, "yield "+number.Quantity(m.Yield.Value(), 6, m.Yield.Unit()))
+	}
+	if m.Tensile.Given() {
+		words = append(words, "tensile "+number.Quantity(m.Tensile.Value(), 6, m.Tensile.Unit()))
+	}
+	if m.Elongation > 0 {
+		words = append(words, "elongation "+number.Compact(100*m.Elongation, 3)+" %")
+	}
+	b.line("  material   %s", strings.Join(words, ", "))
+	b.line("             %s", b.criterion())
+}
+
+// loadsText writes the loads that were given, and a bar's thickness.
+func loadsText(q *strength.Question) string {
 	var loads []string
 	for _, l := range []struct {
 		name string
@@ -65,19 +82,7 @@ func (b *strengthSheet) question() {
 	if q.Thickness.Value != 0 {
 		loads = append(loads, "thickness "+number.Length(q.Thickness.Value, q.Thickness.Unit))
 	}
-	b.line("  loads      %s", strings.Join(loads, ", "))
-	var words []string
-	if m.Yield.Given() {
-		words = append(words, "yield "+number.Quantity(m.Yield.Value(), 6, m.Yield.Unit()))
-	}
-	if m.Tensile.Given() {
-		words = append(words, "tensile "+number.Quantity(m.Tensile.Value(), 6, m.Tensile.Unit()))
-	}
-	if m.Elongation > 0 {
-		words = append(words, "elongation "+number.Compact(100*m.Elongation, 3)+" %")
-	}
-	b.line("  material   %s", strings.Join(words, ", "))
-	b.line("             %s", b.criterion())
+	return strings.Join(loads, ", ")
 }
 
 func (b *strengthSheet) criterion() string {

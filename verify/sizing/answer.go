@@ -63,7 +63,7 @@ func (q *Question) Find(ctx context.Context) (*Answer, error) {
 	if err != nil {
 		return nil, err
 	}
-	in, err := q.drawable()
+	in, err := q.Drawable()
 	if err != nil {
 		return nil, err
 	}
@@ -110,13 +110,19 @@ func (q *Question) settle(ctx context.Context, kind scf.Dimension, a *Answer, s 
 		return err
 	}
 	others := append(trail[:len(trail)-1:len(trail)-1], s.nodes...)
-	slope := math.Abs(steepness(end, others)) * end.Value / c.stretch(end.At)
-	a.Outcome, a.Bar = Met, (end.Uncertainty+math.Abs(end.Value-q.Limit))/slope
+	a.Outcome, a.Bar = Met, q.bar(c, end, others)
 	a.Rounded, err = q.round(ctx, kind, a)
 	s.nodes = append(s.nodes, trail...)
 	s.add(q, c)
 	a.Keeps = s.keeps(c)
 	return err
+}
+
+// bar is how well the value at the limit is known: the bar of the measure there,
+// and what it is still off the limit by, over its slope.
+func (q *Question) bar(c coordinate, end node, others []node) float64 {
+	slope := math.Abs(steepness(end, others)) * end.Value / c.stretch(end.At)
+	return (end.Uncertainty + math.Abs(end.Value-q.Limit)) / slope
 }
 
 // least finds the lowest measure there is, where none keeps the limit: by

@@ -9,10 +9,8 @@ import (
 	"notchproof/verify/specimen"
 )
 
-// Factor measures the stress concentration factor under one load. reference is
-// the nominal stress under a unit load of the part as given, to which the peak
-// stress is referred while the load stays; 0: of the part measured.
-func Factor(load scf.Load, reference float64) Measure {
+// Factor measures the stress concentration factor under one load.
+func Factor(load scf.Load) Measure {
 	return func(ctx context.Context, p *specimen.Part, e Effort) (Reading, error) {
 		f, err := finding(ctx, p, load, e)
 		if err != nil {
@@ -20,33 +18,25 @@ func Factor(load scf.Load, reference float64) Measure {
 		}
 		r := reading(f)
 		r.Value, r.Uncertainty = r.Factor, r.FactorBar
-		r.Peak = r.Factor * ratio(f, reference)
 		return r, nil
 	}
 }
 
-// PeakStress measures the highest stress under one load that stays the same
-// while the dimensions change: factor times the nominal stress, which is stress
-// where the nominal stress under a unit load is reference.
-func PeakStress(load scf.Load, stress, reference float64) Measure {
+// PeakStress measures the largest stress at the notch under one load that stays
+// the same while the dimensions change. It gives the nominal stress in a part
+// whose nominal stress under a unit load (scf.Nominal.Net) is reference; the
+// unit of stress is the caller's.
+func PeakStress(load scf.Load, nominal, reference float64) Measure {
 	return func(ctx context.Context, p *specimen.Part, e Effort) (Reading, error) {
 		f, err := finding(ctx, p, load, e)
 		if err != nil {
 			return Reading{}, err
 		}
 		r := reading(f)
-		r.Peak = r.Factor * ratio(f, reference)
-		r.Value = r.Peak * stress
-		r.Uncertainty = r.FactorBar * ratio(f, reference) * stress
+		stress := nominal * f.Load.Nominal.Net / reference
+		r.Value, r.Uncertainty = r.Factor*stress, r.FactorBar*stress
 		return r, nil
 	}
-}
-
-func ratio(f *verify.Finding, reference float64) float64 {
-	if reference == 0 {
-		return 1
-	}
-	return f.Load.Nominal.Net / reference
 }
 
 func finding(ctx context.Context, p *specimen.Part, load scf.Load, e Effort) (*verify.Finding, error) {

@@ -19,7 +19,7 @@ func question(t *testing.T, family, dimension string, dims scf.Dims, load scf.Lo
 		t.Fatal(family)
 	}
 	return &sizing.Question{Family: f, Dims: dims, Unit: "mm", Options: scf.Options{Nu: 0.3}, Dimension: dimension,
-		Measure: sizing.Factor(load, 0), Limit: limit}
+		Measure: sizing.Factor(load), Limit: limit}
 }
 
 func find(t *testing.T, q *sizing.Question) *sizing.Answer {
@@ -148,7 +148,7 @@ func BenchmarkSize(b *testing.B) {
 	f, _ := scf.Lookup("shaft-shoulder")
 	for b.Loop() {
 		q := &sizing.Question{Family: f, Dims: scf.Dims{"D": 72, "d": 48}, Unit: "mm", Options: scf.Options{Nu: 0.3},
-			Dimension: "r", Measure: sizing.Factor(scf.Bending, 0), Limit: 1.8}
+			Dimension: "r", Measure: sizing.Factor(scf.Bending), Limit: 1.8}
 		if _, err := q.Find(context.Background()); err != nil {
 			b.Fatal(err)
 		}

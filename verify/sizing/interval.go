@@ -10,10 +10,11 @@ import (
 // An Interval is a stretch of values of the dimension.
 type Interval struct{ From, To float64 }
 
-// drawable finds the values of the dimension with which the part can be drawn:
+// Drawable finds the values of the dimension with which the part can be drawn:
 // the stretch around the value given, else the longest that a coarse row of
-// trials meets, its ends found by bisection. Check costs nothing beside a solve.
-func (q *Question) drawable() (Interval, error) {
+// trials meets, its ends found by bisection. Check costs nothing beside a solve. The error is a
+// *scf.DimensionError.
+func (q *Question) Drawable() (Interval, error) {
 	kind, err := q.kind()
 	if err != nil {
 		return Interval{}, err

@@ -28,6 +28,8 @@ type Question struct {
 	Workers   int     // goroutines; 0: one a processor
 	// Progress hears what is being done, from several goroutines; nil: nobody.
 	Progress func(text string)
+
+	draw func(x float64) (*specimen.Part, error) // of an alternative; nil: the family's
 }
 
 // A Measure is the quantity that is held against the limit: it solves the part
@@ -47,9 +49,9 @@ type Reading struct {
 	Uncertainty float64
 	Factor      float64 // the stress concentration factor behind it
 	FactorBar   float64
-	Peak        float64 // the highest stress over the nominal stress of the part as given; 0 where there is none
-	Decided     bool    // the ladder has converged and the checks have passed
-	Why         string  // why not, or what the factor does not tell
+	Where       string // the place that governs, where there are several
+	Decided     bool   // the ladder has converged and the checks have passed
+	Why         string // why not, or what the factor does not tell
 }
 
 // Meets tells that a reading keeps a limit with its bar.
@@ -105,6 +107,9 @@ func (q *Question) with(x float64) scf.Dims {
 
 // Part draws the part with a value of the dimension.
 func (q *Question) Part(x float64) (*specimen.Part, error) {
+	if q.draw != nil {
+		return q.draw(x)
+	}
 	return specimen.New(q.Family, q.with(x), q.Unit, q.Options)
 }
 
