@@ -1,6 +1,8 @@
 package main
 
 import (
+	"fmt"
+
 	"notchproof/scf"
 	"notchproof/verify"
 	"notchproof/verify/specimen"
@@ -33,6 +35,13 @@ of your own as path data), loads, material and claims. To start one, let
 "notchproof parts shaft-shoulder D=72mm d=48mm r=3mm --as-file" print it. What
 the flags say goes before what the file says.
 
+-o writes the solution for other programs: FILE.vtu the field of stresses and
+displacements (VTK XML unstructured grid of Lagrange triangles), FILE.csv the
+stress along the free surface. Stresses are multiples of the nominal stress. With
+several loads the name of each goes before the ending: field-tension.vtu.
+
+  notchproof check bar-hole W=60mm d=20mm -o field.vtu -o surface.csv
+
 Exit status: 0 agrees or nothing to compare with, 1 disagrees, 2 bad input,
 3 undecided, 130 interrupted.
 `,
@@ -47,12 +56,16 @@ func runCheck(c *call) (int, error) {
 	q.targetFlag(c.flags)
 	q.partFlags(c.flags)
 	asJSON := c.flags.Bool("json", false, "print one JSON object instead of text")
+	files := c.flags.StringArrayP("output", "o", nil, "write the field to this .vtu file, the surface stress to this .csv file; several may be named")
 	args, err := c.parse()
 	if err != nil {
 		return 0, err
 	}
 	job, err := q.job(args)
 	if err != nil {
+		return 0, err
+	}
+	if err := checkExports(*files, job.loads); err != nil {
 		return 0, err
 	}
 	bar := c.progress()
@@ -62,12 +75,20 @@ func runCheck(c *call) (int, error) {
 	if err != nil {
 		return 0, err
 	}
-	if *asJSON {
-		err = writeJSON(c.stdout, result)
-	} else {
-		err = writeText(c.stdout, result, c.style())
+	written, err := writeExports(*files, result)
+	if err != nil {
+		return 0, err
 	}
-	return statusOf(result), err
+	if *asJSON {
+		return statusOf(result), writeJSON(c.stdout, result)
+	}
+	if err := writeText(c.stdout, result, c.style()); err != nil {
+		return 0, err
+	}
+	for _, file := range written {
+		fmt.Fprintf(c.stdout, "written to %s\n", file)
+	}
+	return statusOf(result), nil
 }
 
 // A job is a part with what is asked about it.

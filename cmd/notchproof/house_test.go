@@ -33,8 +33,9 @@ var allowed = map[string]string{
 	"render":             "mesh mesh/outline mesh/lagrange fem scf verify verify/specimen render/number",
 	"verify/sizing":      "mesh/outline scf verify verify/specimen verify/strength",
 	"verify/tolerance":   "scf verify verify/specimen",
+	"render/export":      "mesh mesh/outline fem verify verify/specimen",
 	"render/report":      "scf verify verify/specimen verify/usermesh render render/number",
-	"cmd/notchproof":     "render/report scf verify verify/sizing verify/specimen verify/quantity verify/strength render render/number verify/usermesh verify/tolerance",
+	"cmd/notchproof":     "render/export render/report scf verify verify/sizing verify/specimen verify/quantity verify/strength render render/number verify/usermesh verify/tolerance",
 }
 
 // TestImportsFollowTheFloorPlan names the file and the arrow that broke it.
