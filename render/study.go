@@ -16,7 +16,7 @@ type Study struct {
 	// off; NaN when there is none.
 	Limit, Uncertainty float64
 	// Order is the power of the element size with which the error is expected to
-	// fall; 0: none is, as when the order climbs.
+	// fall; negative where it grows; 0: none is, as when the order climbs.
 	Order float64
 }
 
@@ -101,7 +101,7 @@ func (study Study) errors() Diagram {
 // the number of unknowns goes with the inverse square of the element size.
 func (study Study) slope(changes []CurvePoint) (Curve, bool) {
 	n := len(changes)
-	if n < 2 || study.Order <= 0 {
+	if n < 2 || study.Order == 0 {
 		return Curve{}, false
 	}
 	first, last := changes[0], changes[n-1]

@@ -6,12 +6,10 @@ package verify
 import (
 	"context"
 	"fmt"
-	"math"
 	"runtime"
 	"sync"
 
 	"notchproof/scf"
-	"notchproof/verify/extrapolate"
 	"notchproof/verify/specimen"
 )
 
@@ -100,8 +98,7 @@ func (c *climb) finding(ctx context.Context) (Finding, error) {
 // without leaves a ladder no factor: its stress has no bound, whatever its first
 // rungs look like.
 func (c *Computed) without() {
-	none := Estimate{Value: math.NaN(), Uncertainty: math.Inf(1), Status: extrapolate.Diverging, Notes: []string{"the stress of a sharp corner has no bound"}}
-	c.Factor, c.VonMises = none, none
+	c.Factor, c.VonMises = noFactor(), noFactor()
 }
 
 // shapes are the meshes of a part, one a stage, made once for all loads.

@@ -16,7 +16,10 @@ type StudyOptions struct {
 	// most meshes in use have.
 	Order int
 	// Rungs is the number of meshes of a study by size; 0: 4.
-	Rungs    int
+	Rungs int
+	// Size is the length of the elements at the notch with which a study by size
+	// begins, in the part's unit; 0: three of them on 90° of its arc.
+	Size     float64
 	Workers  int
 	Progress func(text string)
 }
@@ -30,61 +33,25 @@ type Study struct {
 	// by size; nil in a study by order.
 	Sizes    *extrapolate.Study
 	Estimate Estimate
+	// SizeAsked is the size of the elements at the notch that the study began
+	// with, 0 where it was graded.
+	SizeAsked float64
+	// Corners are the concave corners without a radius of the shape that the last
+	// rung was solved on.
+	Corners []Corner
 }
 
 // A StudyRow is one rung with what it changed.
 type StudyRow struct {
 	Rung
 	Change        float64 // from the row before; NaN in the first
-	ObservedOrder float64 // by size: from this row and the two before, NaN where there is none
+	ObservedOrder float64 // by size: from this row and the two before, negative where they grow without end, NaN where there is none
+	Size          float64 // length of the element's edge at the peak, in the part's unit
+	Blind         bool    // its elements are larger than the root, which is left out
 }
 
 // mostUnknowns bounds a single solve of a study: about 3 GB of factor.
 const mostUnknowns = 1_200_000
-
-// BySize solves one order on a graded mesh and on those made of it by halving
-// every element, so that nothing but the size changes from rung to rung and the
-// order can be observed.
-func BySize(ctx context.Context, p *specimen.Part, l *specimen.Load, o StudyOptions) (*Study, error) {
-	order, rungs := o.Order, o.Rungs
-	if order == 0 {
-		order = 2
-	}
-	if rungs == 0 {
-		rungs = 4
-	}
-	s := &Study{Part: p, Load: l}
-	made, err := newShape(p, grading{perQuarter: 3, growth: 0.6, joint: 0.5})
-	if err != nil {
-		return nil, err
-	}
-	var w fem.Workspace
-	var sizes, values []float64
-	for k := range rungs {
-		if k > 0 {
-			made = made.halved()
-		}
-		if n := estimateUnknowns(len(made.mesh.Triangles), order, l.Model.Unknowns()); n > mostUnknowns {
-			return nil, fmt.Errorf("rung %d would have about %d unknowns, more than %d: ask for fewer rungs or a lower order", k+1, n, mostUnknowns)
-		}
-		if err := s.add(ctx, made, order, &w, o); err != nil {
-			return nil, err
-		}
-		sizes = append(sizes, 1/math.Sqrt(float64(len(made.mesh.Triangles))))
-		values = append(values, s.Rows[k].Factor)
-	}
-	// Surface stresses of elements of order p converge with h^p.
-	study := extrapolate.Sizes(sizes, values).Against(float64(order), 2)
-	s.Sizes, s.Estimate = &study, study.Estimate()
-	// The grid convergence index knows differences alone, and these can be small
-	// by accident; the traction that is left where none can be is known to be
-	// wrong, and belongs to the bar as it does in a check.
-	s.Estimate.Uncertainty += s.Rows[rungs-1].Leftover
-	for i, observed := range study.Orders {
-		s.Rows[i+2].ObservedOrder = observed
-	}
-	return s, nil
-}
 
 // ByOrder solves orders 1 to 8 on the mesh that a check begins with.
 func ByOrder(ctx context.Context, p *specimen.Part, l *specimen.Load, o StudyOptions) (*Study, error) {
@@ -95,7 +62,7 @@ func ByOrder(ctx context.Context, p *specimen.Part, l *specimen.Load, o StudyOpt
 	}
 	var w fem.Workspace
 	for order := 1; order <= 8; order++ {
-		if err := s.add(ctx, made, order, &w, o); err != nil {
+		if err := s.add(ctx, p, made, order, &w, o); err != nil {
 			return nil, err
 		}
 	}
@@ -105,18 +72,31 @@ func ByOrder(ctx context.Context, p *specimen.Part, l *specimen.Load, o StudyOpt
 	}
 	c.estimate()
 	s.Estimate = c.Factor
+	if err := s.seeCorners(ctx, p, &w, o); err != nil {
+		return nil, err
+	}
+	if endless(s.Corners) {
+		s.Estimate = noFactor()
+	}
 	return s, nil
 }
 
-func (s *Study) add(ctx context.Context, made *shape, order int, w *fem.Workspace, o StudyOptions) error {
+func (s *Study) add(ctx context.Context, drawn *specimen.Part, made *shape, order int, w *fem.Workspace, o StudyOptions) error {
 	Options{Progress: o.Progress}.tell(fmt.Sprintf("%s: order %d on %d triangles", s.Load.Name, order, len(made.mesh.Triangles)))
-	sol, err := solve(ctx, s.Part, s.Load, made.order(order), w, o.Workers)
+	load, ok := drawn.Load(s.Load.Name)
+	if !ok {
+		panic("verify: a part without its root carries other loads")
+	}
+	sol, err := solve(ctx, drawn, load, made.order(order), w, o.Workers)
 	if err != nil {
 		return err
 	}
-	rung, _ := read(s.Part, s.Load, sol)
+	rung, peaks := read(drawn, load, sol)
 	rung.PerQuarter = made.grading.perQuarter
-	row := StudyRow{Rung: rung, Change: math.NaN(), ObservedOrder: math.NaN()}
+	row := StudyRow{Rung: rung, Change: math.NaN(), ObservedOrder: math.NaN(), Size: math.NaN()}
+	if len(peaks) > 0 {
+		row.Size = edgeLength(sol, peaks[0])
+	}
 	if n := len(s.Rows); n > 0 {
 		row.Change = rung.Factor - s.Rows[n-1].Factor
 	}

@@ -9,7 +9,6 @@ import (
 	"strings"
 
 	"notchproof/render"
-	"notchproof/render/number"
 	"notchproof/verify"
 	"notchproof/verify/specimen"
 )
@@ -21,9 +20,12 @@ func studyCommand() *command {
 		short: "show how the factor converges with the mesh or the order",
 		long: `Solves the part on a ladder and prints every rung: triangles, elements per 90°
 of arc on the notch, unknowns, factor, change, observed order, then the limit.
-By size the elements keep their order (2 unless --order says otherwise) and the
-every element is split into four from rung to rung; the limit is Richardson's, its bar the grid
-convergence index of Roache (1994) by the procedure of Celik et al. (2008).
+By size the elements keep their order (2 unless --order says otherwise) and
+every element is split into four from rung to rung; the limit is Richardson's, its
+bar the grid convergence index of Roache (1994) by the procedure of Celik et al.
+(2008). The first mesh has three elements on 90° of the notch, or with --size
+elements of that length there: where they are larger than the root, a mesh leaves
+it out, and the study shows the growth at the sharp corner that is left.
 By order the mesh stays and the order climbs from 1 to 8. The last column is the
 traction that the solution leaves on the free surface at the peak, where there
 is none in truth, at unit nominal stress.
@@ -32,6 +34,7 @@ Below it stands how fine a mesh of your own must be at the root: elements per 90
 of arc for errors of 5, 2 and 1 % at order 1 and 2, read at the nodes as usual.
 
   notchproof study bar-shoulder D=60mm d=40mm r=4mm --load tension --by size -o study.png
+  notchproof study bar-shoulder D=60mm d=40mm r=0 -o corner.png
 `,
 		run: runStudy,
 	}
@@ -42,6 +45,7 @@ func runStudy(c *call) (int, error) {
 	by := c.flags.String("by", "size", "what is refined: size or order")
 	order := c.flags.Int("order", 0, "order of the elements in a study by size, 1 to 8 (default 2)")
 	rungs := c.flags.Int("rungs", 0, "number of meshes in a study by size, 3 to 6 (default 4)")
+	size := c.flags.String("size", "", "length of the elements at the notch that a study by size begins with, as in 1mm")
 	file := c.flags.StringP("output", "o", "", "write the plot to this .png or .svg file")
 	q.loadFlag(c.flags)
 	q.partFlags(c.flags)
@@ -57,13 +61,17 @@ func runStudy(c *call) (int, error) {
 	if err != nil {
 		return 0, err
 	}
+	begin, err := elementSize(*size, *by, job.part)
+	if err != nil {
+		return 0, err
+	}
 	if err := checkOutput(*file, figureFormats...); err != nil {
 		return 0, err
 	}
 	debug.SetGCPercent(100)
 	debug.SetMemoryLimit(math.MaxInt64)
 	bar := c.progress()
-	s, err := climb(c.ctx, job.part, load, verify.StudyOptions{Order: *order, Rungs: *rungs, Progress: bar.tell})
+	s, err := climb(c.ctx, job.part, load, verify.StudyOptions{Order: *order, Rungs: *rungs, Size: begin, Progress: bar.tell})
 	if err != nil {
 		bar.clear()
 		return 0, err
@@ -93,6 +101,29 @@ func runStudy(c *call) (int, error) {
 		return exitUndecided, nil
 	}
 	return exitAgrees, nil
+}
+
+// elementSize reads the size of elements in the part's unit; 0: none asked.
+func elementSize(text, by string, part *specimen.Part) (float64, error) {
+	if text == "" {
+		return 0, nil
+	}
+	if by != "size" {
+		return 0, &inputError{text: "--size belongs to a study by size", hint: "a study by order stays on the mesh that a check begins with"}
+	}
+	length, err := specimen.ParseLength(text)
+	if err != nil {
+		return 0, named(err, "--size")
+	}
+	if (length.Unit == "") != (part.Unit == "") {
+		return 0, &inputError{text: "--size " + quoted(text) + ": one of part and size has a unit and the other has none", hint: "write the size in the way of the part's lengths"}
+	}
+	box := part.Region.Bounds()
+	size, extent := length.In(part.Unit), math.Max(box.Max.X-box.Min.X, box.Max.Y-box.Min.Y)
+	if !(size >= 1e-8*extent) || size > extent {
+		return 0, &inputError{text: "--size " + quoted(text) + ": too small or too large for the part", hint: "give the length of an element's edge at the notch"}
+	}
+	return size, nil
 }
 
 // one reads a part and the one load that a study or picture is about: the one
@@ -130,59 +161,4 @@ func studyKind(by string, order, rungs int) (climber, error) {
 		return verify.ByOrder, nil
 	}
 	return nil, &inputError{text: "--by " + quoted(by) + ": no such study", hint: "size or order"}
-}
-
-// writeStudy prints the table.
-func writeStudy(w io.Writer, s *verify.Study, st style) error {
-	var b strings.Builder
-	fmt.Fprintf(&b, "%s  %s\n%s, nominal stress %s (%s)\n\n", st.bold(s.Part.Name), dimensionText(s.Part),
-		st.bold(string(s.Load.Name)), s.Load.Nominal.Formula, s.Load.Nominal.Section)
-	fmt.Fprintf(&b, "%5s %10s %8s %9s %12s %11s %9s %9s\n", "order", "triangles", "per 90°", "unknowns", "factor", "change", "observed", "traction")
-	for _, r := range s.Rows {
-		fmt.Fprintf(&b, "%5d %10d %8.1f %9d %12.7f %11s %9s %9.1e\n", r.Order, r.Triangles, r.PerQuarter, r.Unknowns, r.Factor,
-			orNothing("%+.2e", r.Change), orNothing("%.2f", r.ObservedOrder), r.Leftover)
-	}
-	e := s.Estimate
-	switch {
-	case !e.Status.Settled():
-		fmt.Fprintf(&b, "\n%s\n", st.weak("no limit: "+e.Status.String()))
-	case s.Sizes != nil:
-		fmt.Fprintf(&b, "\nobserved order %.2f (%s); extrapolated limit %.6f\ngrid convergence index of the finest mesh %s, with the traction left on its surface its factor is %s\n",
-			s.Sizes.Order, e.Status, s.Sizes.Limit, number.Percent(s.Sizes.GCI, 3), number.Uncertain(e.Value, e.Uncertainty))
-	default:
-		fmt.Fprintf(&b, "\none order more leaves about %.2f of the error (%s); the factor is %s\n", e.Order, e.Status, number.Uncertain(e.Value, e.Uncertainty))
-	}
-	for _, note := range e.Notes {
-		fmt.Fprintf(&b, "note: %s\n", note)
-	}
-	_, err := io.WriteString(w, b.String())
-	return err
-}
-
-func orNothing(format string, v float64) string {
-	if math.IsNaN(v) || math.IsInf(v, 0) {
-		return "–"
-	}
-	return fmt.Sprintf(format, v)
-}
-
-func plotOf(s *verify.Study) render.Study {
-	p := render.Study{Title: s.Part.Name + ", " + string(s.Load.Name), Note: dimensionText(s.Part), Limit: math.NaN(), Uncertainty: math.NaN()}
-	if s.Estimate.Status.Settled() {
-		p.Limit, p.Uncertainty = s.Estimate.Value, s.Estimate.Uncertainty
-		if s.Sizes != nil {
-			p.Limit = s.Sizes.Limit
-		}
-	}
-	if s.Sizes != nil {
-		p.Order = float64(s.Rows[0].Order) // surface stresses of elements of order p converge with h^p
-	}
-	for _, r := range s.Rows {
-		label := fmt.Sprintf("order %d", r.Order)
-		if s.Sizes != nil {
-			label = fmt.Sprintf("%.3g per 90°", r.PerQuarter)
-		}
-		p.Points = append(p.Points, render.StudyPoint{Label: label, Unknowns: r.Unknowns, Factor: r.Factor, Change: math.Abs(r.Change), Traction: r.Leftover})
-	}
-	return p
 }
