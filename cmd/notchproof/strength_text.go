@@ -88,8 +88,8 @@ func loadsText(q *strength.Question) string {
 func (b *strengthSheet) criterion() string {
 	m := &b.Question.Material
 	switch {
-	case m.Brittle:
-		return "brittle, as given: largest principal stress against tensile strength"
+	case m.Brittle || m.Elongation == 0 && m.Metal == strength.GreyIron:
+		return "brittle: largest principal stress against tensile strength"
 	case b.Brittle:
 		return "brittle, less than 5 % elongation (common practice): largest principal stress against tensile strength"
 	case m.Elongation == 0:
@@ -147,6 +147,9 @@ func (b *strengthSheet) factors() {
 
 // book is the handbook factor that the rule by hand uses.
 func (b *strengthSheet) book(load scf.Load) string {
+	if !b.Settled {
+		return "not looked at"
+	}
 	for _, f := range b.Hand[1].Factors {
 		if f.Load == load {
 			return fmt.Sprintf("%s ± %s %s", number.Compact(f.Factor, 4), number.Percent(f.Tolerance/f.Factor, 0), f.From)
@@ -176,6 +179,8 @@ func (b *strengthSheet) notch() {
 func (b *strengthSheet) side(h *strength.Hand, n *strength.Place) string {
 	gap := math.Abs(h.Equivalent - n.Equivalent)
 	switch {
+	case h.Equivalent == 0:
+		return "nothing pulls"
 	case gap <= n.Uncertainty:
 		return "the same"
 	case h.Difference > 0:
@@ -257,12 +262,13 @@ func (b *strengthSheet) cover() {
 	for _, load := range c.Without {
 		b.line("  %-9s                   no chart covers this shape", load)
 	}
-	more, why := "", "where the shape is exactly a chart's, as here"
+	more, why := "", "where the shape is exactly a chart's, as here;"
 	if c.AndMore {
-		more, why = " and more", "where a factor comes from a similar shape or an old experiment; no chart is exactly this shape"
+		more, why = " and more", "where a factor is carried over from a similar shape or an old experiment;"
 	}
-	b.line("  common practice             %s to %s%s, %s;", number.Significant(c.From, 2), number.Significant(c.To, 2), more, why)
-	b.line("                              no substitute for the applicable code")
+	b.line("  common practice             safety %s to %s%s", number.Significant(c.From, 2), number.Significant(c.To, 2), more)
+	b.line("             %s", why)
+	b.line("             no substitute for the applicable code")
 }
 
 func (b *strengthSheet) decision() {

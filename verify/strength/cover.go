@@ -56,12 +56,17 @@ func (r *Result) decide() {
 	switch {
 	case q.Required == 0:
 		r.Decision = NotAsked
+	case r.Pressed*q.Required > r.Strength && g.Safety.Low >= q.Required:
+		r.because("the notch is pressed with %v, and no compressive strength is known that would bear it %.3g times", q.Material.Tensile.Like(r.Pressed), q.Required)
 	case g.Safety.Low >= q.Required:
 		r.Decision = Met
 		r.because("the smallest safety, %.3g on the %s, is not below the %.3g asked for", g.Safety.Value, g.Name, q.Required)
 	case g.Safety.High < q.Required:
 		r.Decision = NotMet
 		r.because("the smallest safety, %.3g on the %s, is below the %.3g asked for", g.Safety.Value, g.Name, q.Required)
+		if s := r.Section; s != nil && !r.Brittle && s.Plastic >= q.Required {
+			r.because("the net section as a whole flows at %.3g times the loads at the earliest: whether the peak may be shed by yielding is for the applicable code to say", s.Plastic)
+		}
 	default:
 		r.because("the smallest safety, %.4g to %.4g on the %s, is too close to the %.4g asked for to be told from it", g.Safety.Low, g.Safety.High, g.Name, q.Required)
 	}

@@ -17,8 +17,17 @@ func (m *Material) quantity() fem.Quantity {
 
 // equivalent is that stress of a normal stress with a shear.
 func (m *Material) equivalent(normal, shear float64) float64 {
-	if m.brittle() {
-		return math.Max(0, normal/2+math.Hypot(normal/2, shear))
+	switch {
+	case m.brittle() && shear == 0:
+		return math.Max(0, normal)
+	case m.brittle():
+		return normal/2 + math.Hypot(normal/2, shear)
 	}
 	return math.Sqrt(normal*normal + 3*shear*shear)
+}
+
+// pressed is the size of the largest compressive principal stress, which the
+// criterion of a brittle material does not judge.
+func pressed(p fem.SurfacePoint) float64 {
+	return math.Max(0, math.Hypot((p.Tangential-p.Hoop)/2, p.Shear)-(p.Tangential+p.Hoop)/2)
 }

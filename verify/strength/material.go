@@ -23,8 +23,12 @@ type Material struct {
 const leastElongation = 0.05
 
 // brittle tells that the largest principal stress is held against the tensile
-// strength, not von Mises against yield.
+// strength, not von Mises against yield. Grey iron breaks without yielding
+// (common practice), whether anybody says so or not.
 func (m *Material) brittle() bool {
+	if m.Elongation == 0 && m.Metal == GreyIron {
+		return true
+	}
 	return m.Brittle || m.Elongation > 0 && m.Elongation < leastElongation
 }
 

@@ -47,7 +47,7 @@ func (q *Question) place(s *solved, p fem.SurfacePoint) Place {
 	before, _ := s.coarse.worst(p, of)
 	place := Place{
 		Name: q.Part.Region.Sides()[s.fine.side(p)].Name,
-		X:    p.At.X, Y: p.At.Y, Degrees: theta * 180 / math.Pi,
+		X:    s.fine.rounded(p, p.At.X), Y: s.fine.rounded(p, p.At.Y), Degrees: theta * 180 / math.Pi,
 		Along: at.Tangential, Hoop: at.Hoop, Shear: at.Shear,
 		Equivalent:  of(at),
 		Uncertainty: s.fine.bar(p) + math.Abs(of(at)-of(before)),
@@ -91,6 +91,15 @@ func (q *Question) excepted(f *field, p fem.SurfacePoint) bool {
 		}
 	}
 	return false
+}
+
+// rounded brings a coordinate of a maximum to a decimal step no larger than what
+// is known of it: a maximum is flat, and its place is good to 1e-4 of the edge
+// that it lies on.
+func (f *field) rounded(p fem.SurfacePoint, v float64) float64 {
+	const share = 1e-4
+	step := math.Pow(10, math.Floor(math.Log10(share*f.edgeLength(p))))
+	return math.Round(v/step) * step
 }
 
 func (f *field) edgeLength(p fem.SurfacePoint) float64 {

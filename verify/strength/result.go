@@ -17,6 +17,10 @@ type Result struct {
 	Settled bool
 	Hand    []Hand  // by hand, with the computed factors and with the handbook's
 	Places  []Place // judged, smallest safety first
+	// Pressed is, of a brittle material, the size of the largest compressive
+	// stress on the notch. Brittle metals bear at least as much in compression as
+	// in tension (common practice); beyond the tensile strength nothing is decided.
+	Pressed float64
 	Section *Section
 	// Sensitivity has one entry a load, for fluctuating loads.
 	Sensitivity []Sensitivity

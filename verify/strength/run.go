@@ -2,6 +2,8 @@ package strength
 
 import (
 	"context"
+	"fmt"
+	"slices"
 
 	"notchproof/verify"
 )
@@ -26,7 +28,11 @@ func Run(ctx context.Context, q Question) (*Result, error) {
 		if f.Verdict == verify.Undecided || !f.Computed.Factor.Status.Settled() {
 			r.Settled = false
 			r.because("%s: the factor is not settled", f.Load.Name)
-			r.Because = append(r.Because, f.Because...)
+			for _, why := range f.Because {
+				if !slices.Contains(r.Because, why) {
+					r.Because = append(r.Because, why)
+				}
+			}
 		}
 	}
 	if !r.Settled {
@@ -37,6 +43,10 @@ func Run(ctx context.Context, q Question) (*Result, error) {
 		return nil, err
 	}
 	r.Places = q.places(s)
+	if r.Brittle {
+		at, _ := s.fine.worst(s.fine.maxima(q.Part.Notch, pressed)[0], pressed)
+		r.Pressed = pressed(at)
+	}
 	r.Hand = q.byHand(checked, r.Notch().Equivalent)
 	if r.Section, err = q.capacity(q.firstYield(r.Places, s)); err != nil {
 		return nil, err
@@ -65,7 +75,8 @@ func (r *Result) warn() {
 	for i := range r.Checked.Findings {
 		r.Warnings = append(r.Warnings, r.Checked.Findings[i].Warnings...)
 	}
-	if r.Brittle && q.Axial.Newtons() < 0 {
-		r.Warnings = append(r.Warnings, "the largest principal stress says nothing of failure in compression, and the part is pressed")
+	if r.Pressed > r.Notch().Equivalent {
+		r.Warnings = append(r.Warnings, fmt.Sprintf("the notch is pressed with up to %v, more than it is pulled: the largest principal stress does not judge that",
+			q.Material.Tensile.Like(r.Pressed)))
 	}
 }

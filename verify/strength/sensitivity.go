@@ -13,6 +13,7 @@ import (
 // is a first step: nothing here is a fatigue strength or a life.
 type Sensitivity struct {
 	Load        *specimen.Load
+	Shaft       bool
 	Factor      float64 // Kt or Kts
 	Uncertainty float64
 	Radius      float64 // of curvature at the peak, mm; 0: none, the peak is not on a concave curve
@@ -39,7 +40,7 @@ func (q *Question) sensitivity(checked *verify.Result, s *solved) []Sensitivity 
 		peak, gradient, bar := q.gradient(f.Load, s.fine.parts[i].solution, s.coarse.parts[i].solution)
 		mm := q.millimetres()
 		one := Sensitivity{
-			Load: f.Load, Factor: f.Computed.Factor.Value, Uncertainty: f.Computed.Factor.Uncertainty,
+			Load: f.Load, Shaft: q.shaft(), Factor: f.Computed.Factor.Value, Uncertainty: f.Computed.Factor.Uncertainty,
 			Radius: q.radius(s.fine.side(peak), peak) * mm, Gradient: gradient / mm, GradientBar: bar / mm,
 		}
 		one.Rules = q.Material.rules(&one)

@@ -32,6 +32,8 @@ func (m *Material) siebelStieler(s *Sensitivity) Reduced {
 func (m *Material) din743(s *Sensitivity) Reduced {
 	r := Reduced{Rule: "DIN 743-2", Source: "DIN 743-2, Tragfähigkeitsberechnung von Wellen und Achsen", Covers: "shafts of steel", Sureness: unchecked}
 	switch {
+	case !s.Shaft:
+		r.Missing = "for shafts alone"
 	case m.Metal != "" && m.Metal != Steel:
 		r.Missing = "for steel alone"
 	case !m.Yield.Given():
