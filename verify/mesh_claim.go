@@ -43,7 +43,11 @@ func subject(p *specimen.Part, l *specimen.Load, o Options) *usermesh.Subject {
 // readMesh holds a claim that came from a mesh against what such a mesh gives.
 // The verdict is on the factor and stays; why it fails is said.
 func (f *Finding) readMesh(ctx context.Context, p *specimen.Part, o Options) error {
-	if f.Claim == nil || f.Claim.Claim.Mesh == nil || f.Verdict == Undecided {
+	if f.Claim == nil || f.Claim.Claim.Mesh == nil {
+		return nil
+	}
+	if f.Verdict == Undecided {
+		f.because("nothing is said of the mesh that the claim came from: there is no converged factor to count its error from")
 		return nil
 	}
 	claim, e := f.Claim.Claim, f.Computed.Factor
