@@ -21,7 +21,7 @@ func Run(ctx context.Context, p *specimen.Part, loads []scf.Load, o Options) (*R
 	}
 	result := &Result{Part: p, Findings: make([]Finding, len(chosen))}
 	errs := make([]error, len(chosen))
-	shared := &shapes{part: p}
+	shared := newPair(p, p.Lengthened(longer), firstGrading(), secondGrading())
 	inner, outer := share(o.Workers, len(chosen))
 	gate := make(chan struct{}, outer)
 	var group sync.WaitGroup
@@ -29,7 +29,7 @@ func Run(ctx context.Context, p *specimen.Part, loads []scf.Load, o Options) (*R
 		group.Go(func() {
 			gate <- struct{}{}
 			defer func() { <-gate }()
-			c := &climb{part: p, load: l, shapes: shared, options: o, workers: inner}
+			c := &climb{part: p, load: l, pair: shared, options: o, workers: inner}
 			result.Findings[i], errs[i] = c.finding(ctx)
 		})
 	}
@@ -71,15 +71,16 @@ func choose(p *specimen.Part, loads []scf.Load) ([]*specimen.Load, error) {
 
 // finding climbs the ladder and judges.
 func (c *climb) finding(ctx context.Context) (Finding, error) {
-	computed, s, err := c.run(ctx)
-	if err != nil {
-		return Finding{}, err
-	}
 	found, err := corners(ctx, c.part, c.load, &c.work[0], c.workers)
 	if err != nil {
 		return Finding{}, err
 	}
-	if endless(found) {
+	c.endless = endless(found)
+	computed, s, err := c.run(ctx)
+	if err != nil {
+		return Finding{}, err
+	}
+	if c.endless {
 		computed.without()
 	}
 	computed.Gross = computed.Factor.Value * c.load.Nominal.Net / c.load.Nominal.Gross
@@ -99,27 +100,4 @@ func (c *climb) finding(ctx context.Context) (Finding, error) {
 // rungs look like.
 func (c *Computed) without() {
 	c.Factor, c.VonMises = noFactor(), noFactor()
-}
-
-// shapes are the meshes of a part, one a stage, made once for all loads.
-type shapes struct {
-	part *specimen.Part
-	mu   sync.Mutex
-	made []*shape
-}
-
-func (s *shapes) stage(i int, g grading) (*shape, error) {
-	s.mu.Lock()
-	defer s.mu.Unlock()
-	for len(s.made) <= i {
-		s.made = append(s.made, nil)
-	}
-	if s.made[i] == nil {
-		made, err := newShape(s.part, g)
-		if err != nil {
-			return nil, err
-		}
-		s.made[i] = made
-	}
-	return s.made[i], nil
 }

@@ -20,6 +20,7 @@ const (
 	solveLimit    = 1e-8 // unbalanced nodal forces and support forces, relative; see roundingLimit
 	plainLimit    = 1.5  // length of a plain end in units of its size
 	angleLimit    = 20.0 // degrees
+	secondLimit   = 5.0  // distance to the factor of the second mesh, in units of what ladder and traction leave open
 	jacobianLimit = 0.05 // smallest Jacobian of a bent triangle over that of the straight one
 )
 
@@ -36,6 +37,7 @@ func (c *climb) checks(s *shape, out *Computed) []Check {
 	for i, plain := range c.part.Plain {
 		list = append(list, below("far-field stress in the "+plain.Name, farError(c.part, c.load, sol, i), farLimit))
 	}
+	list = append(list, below("distance to the factor of a second mesh, in bars of the first", apart(out.Factor), secondLimit))
 	for i := range list {
 		list[i].discretisation = true
 	}
@@ -66,6 +68,18 @@ func contraction(e Estimate) float64 {
 		return math.Inf(1)
 	}
 	return e.Order
+}
+
+// apart is how far the second mesh is from the first, in units of what the first
+// leaves open by its own account. Both meshes err by about as much, so that one
+// or two is what honest bars give; a mesh that misses the peak, or an end that
+// is too near, gives more.
+func apart(e Estimate) float64 {
+	open := e.Signals.Ladder + e.Signals.Witness
+	if open == 0 {
+		return 0
+	}
+	return e.Signals.Second / open
 }
 
 // plainSize is the width or diameter of a plain stretch.

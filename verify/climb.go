@@ -3,6 +3,7 @@ package verify
 import (
 	"context"
 	"fmt"
+	"math"
 	"sync"
 
 	"notchproof/fem"
@@ -10,72 +11,94 @@ import (
 	"notchproof/verify/specimen"
 )
 
-// A stage is one mesh and the orders that are solved on it.
-type stage struct {
-	grading     grading
-	first, last int
-}
+// Orders of a ladder: raising the order on a mesh that is graded to the notch
+// converges geometrically.
+const (
+	firstOrder = 2
+	lastOrder  = 8
+	// enoughRungs is the least number of rungs from which a limit and its
+	// uncertainty can be told.
+	enoughRungs = 3
+	// mostRounds bounds how often the mesh is refined where the error sits.
+	mostRounds = 5
+)
 
-// stages lists what a ladder tries, cheapest first. Raising the order on a mesh
-// that is graded to the notch converges geometrically, so one mesh is enough
-// as a rule; the later stages are for shapes or targets that ask for more.
-func stages() []stage {
-	return []stage{
-		{grading{perQuarter: 6, growth: 0.6, joint: 0.2}, 2, 8},
-		{grading{perQuarter: 12, growth: 0.35, joint: 0.05}, 4, 8},
-	}
-}
-
-// A climb is the ladder of one part under one load.
+// A climb is the ladder of one part under one load. Beside the mesh of the
+// ladder stands a second one, graded otherwise, of the same part with longer
+// ends; the last order is solved on both.
 type climb struct {
 	part    *specimen.Part
 	load    *specimen.Load
-	shapes  *shapes
+	pair    *pair // the first one, which all loads of the part share
 	options Options
 	workers int
-	work    [2]fem.Workspace // the second for rungs that are solved side by side
+	endless bool             // the notch has a sharp corner: no mesh is fine enough
+	work    [2]fem.Workspace // the second for what is solved side by side
 }
 
-// run climbs until the target is met and the solution is sound, or the stages
-// are used up; the last stage's state is what is reported.
+// run climbs until the target is met and the solution is sound, or the work
+// limit is reached. From each rung on it raises the order where the ladder lets
+// expect that this is enough, else it refines the mesh where the error sits and
+// begins anew.
 func (c *climb) run(ctx context.Context) (Computed, *shape, error) {
-	var out Computed
+	var best Computed
 	var at *shape
-	for i, st := range stages() {
-		s, err := c.shapes.stage(i, st.grading)
+	p := c.pair
+	for round := 0; ; round++ {
+		out, s, err := c.orders(ctx, p, round)
 		if err != nil {
-			return out, nil, err
-		}
-		at = s
-		out = Computed{}
-		if err := c.begin(ctx, s, st.first, &out); err != nil {
 			return out, s, err
 		}
-		for order := st.first + enoughRungs; ; order++ {
-			if c.met(out.Factor) && c.sound(s, &out) {
-				return out, s, nil
-			}
-			if order > st.last {
-				break
-			}
-			next := c.solve(ctx, s, order, &c.work[0], c.workers)
-			if err := out.add(next); err != nil {
-				return out, s, err
-			}
+		if at == nil || better(out.Factor, best.Factor) {
+			best, at = out, s
 		}
+		if c.done(at, &best) || round == mostRounds || c.endless || out.Factor.Status == extrapolate.Diverging {
+			return best, at, nil
+		}
+		next, err := c.refined(p, s, &out)
+		if err != nil || next == nil {
+			return best, at, err
+		}
+		p = next
 	}
-	return out, at, nil
 }
 
-// met tells that an estimate is as good as was wished for.
-func (c *climb) met(e Estimate) bool {
-	return e.Status.Settled() && e.Uncertainty <= c.options.target()*e.Value
+// better tells that an estimate says more than another.
+func better(a, b Estimate) bool {
+	if a.Status.Settled() != b.Status.Settled() {
+		return a.Status.Settled()
+	}
+	return !(a.Uncertainty >= b.Uncertainty)
 }
 
-// sound tells that no check asks for a finer rung. The factor may be there before
-// the stress far off is, where elements are large; rounding only grows.
-func (c *climb) sound(s *shape, out *Computed) bool {
-	out.checks = c.checks(s, out)
+// orders climbs on one pair of meshes as far as that helps.
+func (c *climb) orders(ctx context.Context, p *pair, round int) (Computed, *shape, error) {
+	var out Computed
+	first := firstOrder
+	if round > 0 {
+		first = firstOrder + 2 // low orders have nothing to tell on a fine mesh
+	}
+	s, err := c.begin(ctx, p, first, &out)
+	for err == nil && !c.done(s, &out) {
+		order := out.Ladder[len(out.Ladder)-1].Order + 1
+		if order > lastOrder || c.hopeless(out.Factor, order) || tooLarge(s, order, c.load) {
+			break
+		}
+		err = c.raise(ctx, p, s, order, &out)
+	}
+	return out, s, err
+}
+
+// done tells that the target is met and that no check asks for a finer rung. The
+// factor may be there before the stress far off is, where elements are large.
+func (c *climb) done(s *shape, out *Computed) bool {
+	e := out.Factor
+	if !e.Status.Settled() || e.Uncertainty > c.options.target()*e.Value {
+		return false
+	}
+	if out.checks == nil {
+		out.checks = c.checks(s, out)
+	}
 	for _, check := range out.checks {
 		if !check.Passed && check.discretisation {
 			return false
@@ -84,35 +107,67 @@ func (c *climb) sound(s *shape, out *Computed) bool {
 	return true
 }
 
-// enoughRungs is the least number of rungs from which a limit and its
-// uncertainty can be told.
-const enoughRungs = 3
+// hopeless tells that the orders which are left will not bring a settled ladder
+// to its target at the pace that was seen: each leaves the share e.Order of the
+// error.
+func (c *climb) hopeless(e Estimate, order int) bool {
+	if !e.Status.Settled() {
+		return false // too early to tell
+	}
+	left := float64(lastOrder - order + 1)
+	return e.Uncertainty*math.Pow(e.Order, left) > c.options.target()*e.Value
+}
 
-// begin solves the first rungs, which are always needed. The last of them costs
-// about as much as the others together, so two goroutines share them better than
-// they would share each factorisation.
-func (c *climb) begin(ctx context.Context, s *shape, first int, out *Computed) error {
-	var solved [enoughRungs]solvedRung
-	last := enoughRungs - 1
-	var group sync.WaitGroup
-	small, large := 1, 1
-	if c.workers > 1 {
-		large = c.workers - 1
-		group.Go(func() { solved[last] = c.solve(ctx, s, first+last, &c.work[0], large) })
-	}
-	for i := range last {
-		solved[i] = c.solve(ctx, s, first+i, &c.work[1], small)
-	}
-	group.Wait()
-	if c.workers <= 1 {
-		solved[last] = c.solve(ctx, s, first+last, &c.work[1], large)
-	}
-	for _, r := range solved {
-		if err := out.add(r); err != nil {
-			return err
+// begin makes the meshes and solves the first rungs, which are always needed,
+// and the last of their orders on the second mesh beside them.
+func (c *climb) begin(ctx context.Context, p *pair, first int, out *Computed) (*shape, error) {
+	last := first + enoughRungs - 1
+	var second reading
+	s, err := p.first()
+	c.beside(func() {
+		second = c.second(ctx, p, last, &c.work[1])
+	}, func() {
+		for order := first; order <= last && err == nil; order++ {
+			var r solvedRung
+			if r, err = c.solve(ctx, s, order, &c.work[0]); err == nil {
+				out.add(r)
+			}
 		}
+	})
+	if err == nil {
+		err = out.confirm(second)
 	}
-	return nil
+	return s, err
+}
+
+// raise solves one order more on both meshes.
+func (c *climb) raise(ctx context.Context, p *pair, s *shape, order int, out *Computed) error {
+	var second reading
+	var next solvedRung
+	var err error
+	c.beside(func() {
+		second = c.second(ctx, p, order, &c.work[1])
+	}, func() {
+		next, err = c.solve(ctx, s, order, &c.work[0])
+	})
+	if err != nil {
+		return err
+	}
+	out.add(next)
+	return out.confirm(second)
+}
+
+// beside does two things, at the same time if there are two workers.
+func (c *climb) beside(a, b func()) {
+	if c.workers <= 1 {
+		b()
+		a()
+		return
+	}
+	var group sync.WaitGroup
+	group.Go(a)
+	b()
+	group.Wait()
 }
 
 // A solvedRung is a rung with what it was read from.
@@ -120,30 +175,56 @@ type solvedRung struct {
 	Rung
 	solution *fem.Solution
 	peaks    []fem.SurfacePoint
-	err      error
 }
 
 // solve solves one rung and reads it.
-func (c *climb) solve(ctx context.Context, s *shape, order int, w *fem.Workspace, workers int) (r solvedRung) {
+func (c *climb) solve(ctx context.Context, s *shape, order int, w *fem.Workspace) (r solvedRung, err error) {
 	c.options.tell(fmt.Sprintf("%s: order %d on %d triangles", c.load.Name, order, len(s.mesh.Triangles)))
-	r.solution, r.err = solve(ctx, c.part, c.load, s.order(order), w, workers)
-	if r.err != nil {
-		return r
+	r.solution, err = solve(ctx, c.part, c.load, s.order(order), w, max(1, c.workers/2))
+	if err != nil {
+		return r, err
 	}
 	r.Rung, r.peaks = read(c.part, c.load, r.solution)
 	r.PerQuarter = s.grading.perQuarter
-	return r
+	return r, nil
 }
 
-// add puts a rung on the ladder and brings the estimates up to date.
-func (c *Computed) add(r solvedRung) error {
-	if r.err != nil {
-		return r.err
+// A reading is what the second mesh says.
+type reading struct {
+	factor, vonMises float64
+	err              error
+}
+
+// second solves an order on the second mesh and reads its factors.
+func (c *climb) second(ctx context.Context, p *pair, order int, w *fem.Workspace) (r reading) {
+	s, err := p.second()
+	if err != nil {
+		return reading{err: err}
 	}
+	load, _ := p.long.Load(c.load.Name)
+	solution, err := solve(ctx, p.long, load, s.order(order), w, max(1, c.workers/2))
+	if err != nil {
+		return reading{err: err}
+	}
+	rung, _ := read(p.long, load, solution)
+	return reading{factor: rung.Factor, vonMises: rung.VonMises}
+}
+
+// add puts a rung on the ladder.
+func (c *Computed) add(r solvedRung) {
 	c.Ladder = append(c.Ladder, r.Rung)
 	c.Last, c.peaks = r.solution, r.peaks
-	c.estimate()
 	c.checks = nil // those of the rung before
+}
+
+// confirm brings the estimates up to date with the ladder and the second mesh.
+func (c *Computed) confirm(second reading) error {
+	if second.err != nil {
+		return second.err
+	}
+	c.estimate()
+	c.Factor = c.Factor.Confirmed(second.factor)
+	c.VonMises = c.VonMises.Confirmed(second.vonMises)
 	return nil
 }
 

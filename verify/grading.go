@@ -1,20 +1,27 @@
 package verify
 
 import (
+	"math"
 	"sync"
 
+	"gonum.org/v1/gonum/spatial/r2"
+
 	"notchproof/mesh"
+	"notchproof/mesh/outline"
 	"notchproof/verify/specimen"
 )
 
 // A grading says how fine the mesh is: a number of elements per 90° of arc on
-// the notch, growing away from it at a fixed rate.
+// the notch, growing away from it at a fixed rate, and finer at known points
+// where the solution is less smooth than the order.
 type grading struct {
 	perQuarter float64
 	growth     float64
 	// joint is the size wished for at points where the curvature of the
-	// boundary jumps, as a share of the size on the arc beside them.
+	// boundary jumps and at obtuse corners, as a share of the size around them.
 	joint float64
+	// spots are further wishes, found by looking at a solution.
+	spots []mesh.SpotWish
 }
 
 // sizing turns a grading into wishes for the mesher.
@@ -22,18 +29,67 @@ func (g grading) sizing(p *specimen.Part) mesh.Sizing {
 	s := mesh.Sizing{Growth: g.growth}
 	sides := p.Region.Sides()
 	for _, side := range p.Notch {
-		s.Sides = append(s.Sides, mesh.SideWish{
-			Side: side, PerQuarter: g.perQuarter,
-			// An arc that is cut off may turn by a few degrees only; it is not
-			// left to one element for that.
-			Size: sides[side].Curve.Length(0, 1) * leastPieces / g.perQuarter,
-		})
+		s.Sides = append(s.Sides, mesh.SideWish{Side: side, PerQuarter: g.perQuarter, Size: g.piece(sides[side].Curve)})
 	}
 	for _, j := range p.Joints {
-		s.Spots = append(s.Spots, mesh.SpotWish{At: j.At, Size: g.joint * j.Radius * quarter / g.perQuarter})
+		size := j.Radius * quarter / g.perQuarter
+		for _, side := range p.Notch {
+			if c := sides[side].Curve; ends(c, j.At) {
+				size = math.Min(size, g.piece(c))
+			}
+		}
+		s.Spots = append(s.Spots, mesh.SpotWish{At: j.At, Size: g.joint * size})
 	}
+	for _, c := range p.Region.Corners() {
+		if share := g.cornerShare(c); share < 1 {
+			s.Spots = append(s.Spots, mesh.SpotWish{At: c.At, Size: share * g.around(p, sides, c.At)})
+		}
+	}
+	s.Spots = append(s.Spots, g.spots...)
 	return s
 }
+
+// cornerShare is how much finer the mesh is at a corner than around it. The
+// stress at a free corner goes with distance^(λ−1) (M. L. Williams, J. Appl.
+// Mech. 19 (1952) 526): at 90° of material λ is 2.7 and there is nothing to
+// resolve; up to 180° it falls to 1, and beyond the stress has no bound.
+func (g grading) cornerShare(c outline.Corner) float64 {
+	const smooth, flat = 100.0, 181.0 // what turns in by less than a degree is rounding of coordinates
+	switch {
+	case c.Degrees > flat:
+		return g.joint * g.joint * g.joint
+	case c.Degrees > smooth:
+		return g.joint
+	}
+	return 1
+}
+
+// around is the size that the notch sides alone ask for at a place.
+func (g grading) around(p *specimen.Part, sides []outline.Side, at r2.Vec) float64 {
+	least := math.Inf(1)
+	for _, side := range p.Notch {
+		c := sides[side].Curve
+		t := c.Nearest(at)
+		size := g.piece(c)
+		if k := math.Abs(outline.Curvature(c, t)); k > 0 {
+			size = math.Min(size, quarter/(g.perQuarter*k))
+		}
+		least = math.Min(least, size+g.growth*r2.Norm(r2.Sub(c.At(t), at)))
+	}
+	return least
+}
+
+// ends tells whether a curve begins or ends at a point.
+func ends(c outline.Curve, at r2.Vec) bool {
+	const slack = 1e-6 // of the chord: corners are given to rounding
+	near := slack * r2.Norm(r2.Sub(c.At(1), c.At(0)))
+	return r2.Norm(r2.Sub(c.At(0), at)) <= near || r2.Norm(r2.Sub(c.At(1), at)) <= near
+}
+
+// piece is the largest size of an element along a notch side. An arc that is
+// cut off may turn by a few degrees only; it is not left to one element for
+// that.
+func (g grading) piece(c outline.Curve) float64 { return c.Length(0, 1) * leastPieces / g.perQuarter }
 
 // leastPieces: a notch side gets at least half as many elements as a quarter
 // turn would, however little it turns.

@@ -25,7 +25,7 @@ func TestMeshGrowsLikeTheLogarithm(t *testing.T) {
 	for _, D := range []float64{1.2, 1.5, 3} {
 		var counts []int
 		for _, r := range []float64{1e-1, 1e-2, 1e-3, 1e-4, 1e-5} {
-			s, err := newShape(shoulderOf(t, scf.Dims{"D": D, "d": 1, "r": r}), stages()[0].grading)
+			s, err := newShape(shoulderOf(t, scf.Dims{"D": D, "d": 1, "r": r}), firstGrading())
 			if err != nil {
 				t.Fatal(err)
 			}
@@ -53,7 +53,7 @@ func TestNotchGetsItsElements(t *testing.T) {
 		{scf.Dims{"D": 1.01, "d": 1, "r": 0.3}, 3},
 	} {
 		p := shoulderOf(t, row.dims)
-		s, err := newShape(p, stages()[0].grading)
+		s, err := newShape(p, firstGrading())
 		if err != nil {
 			t.Fatal(err)
 		}

@@ -45,6 +45,24 @@ type Computed struct {
 	checks []Check // of the last rung, nil where not yet made
 }
 
+// Converged tells that three pieces of evidence agree: the differences between
+// rungs shrink towards a limit, the traction left on the free surface shrinks
+// with them, and a second mesh gives the same factor within a few bars of both.
+func (c *Computed) Converged() bool {
+	return c.Factor.Status.Settled() && apart(c.Factor) <= secondLimit
+}
+
+// State is what the ladder has come to, in words.
+func (c *Computed) State() string {
+	switch {
+	case c.Converged():
+		return "converged"
+	case c.Factor.Status.Settled():
+		return "undecided"
+	}
+	return c.Factor.Status.String()
+}
+
 // A Peak is a local maximum of the stress on the notch.
 type Peak struct {
 	X, Y       float64

@@ -56,7 +56,7 @@ const mostUnknowns = 1_200_000
 // ByOrder solves orders 1 to 8 on the mesh that a check begins with.
 func ByOrder(ctx context.Context, p *specimen.Part, l *specimen.Load, o StudyOptions) (*Study, error) {
 	s := &Study{Part: p, Load: l}
-	made, err := newShape(p, stages()[0].grading)
+	made, err := newShape(p, firstGrading())
 	if err != nil {
 		return nil, err
 	}

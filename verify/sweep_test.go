@@ -97,7 +97,7 @@ func TestShouldersAgainstKnownBias(t *testing.T) {
 // against a far finer ladder.
 func row(t *testing.T, w *strings.Builder, p *specimen.Part, f *Finding, D, r float64) {
 	t.Helper()
-	fine, err := newShape(p, far)
+	fine, err := newShape(p, far())
 	if err != nil {
 		t.Fatal(err)
 	}

@@ -62,8 +62,17 @@ type jsonComputed struct {
 	Gross       maybe      `json:"gross"`
 	At          jsonPlace  `json:"at"`
 	Status      string     `json:"status"`
+	Trend       string     `json:"trend"` // of the ladder's values
+	Signals     jsonSignal `json:"signals"`
 	Ladder      []jsonRung `json:"ladder"`
 	Others      []jsonPeak `json:"others,omitempty"`
+}
+
+// jsonSignal is what each piece of evidence leaves open, absolute, in factor units.
+type jsonSignal struct {
+	Ladder          maybe `json:"ladder"`
+	SurfaceTraction maybe `json:"surfaceTraction"`
+	SecondMesh      maybe `json:"secondMesh"`
 }
 
 type jsonPlace struct {
@@ -152,8 +161,9 @@ func jsonOf(f *verify.Finding) jsonFinding {
 			Factor: maybe(c.Factor.Value), Uncertainty: maybe(c.Factor.Uncertainty),
 			VonMises: maybe(c.VonMises.Value), Gross: maybe(c.Gross),
 			At:     jsonPlace{c.Peak.X, c.Peak.Y, c.Peak.ArcDegrees},
-			Status: c.Factor.Status.String(),
-			Ladder: []jsonRung{},
+			Status: c.State(), Trend: c.Factor.Status.String(),
+			Signals: jsonSignal{maybe(c.Factor.Signals.Ladder), maybe(c.Factor.Signals.Witness), maybe(c.Factor.Signals.Second)},
+			Ladder:  []jsonRung{},
 		},
 		Handbook: []jsonHandbook{}, Checks: []jsonCheck{}, Misreadings: []jsonMisreading{},
 		Warnings: append([]string{}, f.Warnings...),

@@ -67,8 +67,9 @@ func findingText(b *strings.Builder, f *verify.Finding, part *specimen.Part, s s
 		number.Length(round(c.Peak.X, 4), unit), number.Length(round(c.Peak.Y, 4), unit), c.Peak.ArcDegrees, part.AngleFrom())
 	if k := len(c.Ladder); k > 0 {
 		last := c.Ladder[k-1]
-		fmt.Fprintf(b, "             %d rungs to order %d on %s, %s unknowns; %s\n",
-			k, last.Order, number.CountOf(last.Triangles, "triangle", "triangles"), number.Count(last.Unknowns), c.Factor.Status)
+		fmt.Fprintf(b, "             %s: %d rungs to order %d on %s, %s unknowns; %s\n",
+			c.State(), k, last.Order, number.CountOf(last.Triangles, "triangle", "triangles"), number.Count(last.Unknowns), c.Factor.Status)
+		signalsText(b, c.Factor)
 	}
 	othersText(b, c, unit)
 	for _, warning := range f.Warnings {
@@ -92,6 +93,16 @@ func findingText(b *strings.Builder, f *verify.Finding, part *specimen.Part, s s
 	for _, why := range f.Because {
 		fmt.Fprintf(b, "    %s\n", why)
 	}
+}
+
+// signalsText says what the bar is made of.
+func signalsText(b *strings.Builder, e verify.Estimate) {
+	if !e.Status.Settled() {
+		return
+	}
+	s := e.Signals
+	fmt.Fprintf(b, "             its bar: ladder %s, second mesh %s, surface traction %s\n",
+		number.Significant(s.Ladder, 1), number.Significant(s.Second, 1), number.Significant(s.Witness, 1))
 }
 
 func othersText(b *strings.Builder, c *verify.Computed, unit string) {

@@ -36,7 +36,16 @@ type Estimate struct {
 	Uncertainty float64 // half width, absolute
 	Order       float64 // Sizes: observed order; Witnessed: share of the error left after one order more; 0: not observed
 	Status      Status
+	Signals     Signals
 	Notes       []string // short, lower case, for people
+}
+
+// Signals are the sizes of the error that each piece of evidence speaks of, in
+// the unit of the values; zero where there is no such evidence.
+type Signals struct {
+	Ladder  float64 // what the differences between rungs have still to bring
+	Witness float64 // what ought to vanish at the place and does not
+	Second  float64 // the distance to the value of a second, independent mesh
 }
 
 func nothing(s Status, note string) Estimate {
