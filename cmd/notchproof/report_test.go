@@ -60,7 +60,7 @@ func TestSheetsAreWellFormed(t *testing.T) {
 		says   []string // in the page
 	}{
 		{with(steppedShaft, "--load", "bending", "--claim", "1.85", "--claim-from", "chart, by eye"), exitDisagrees,
-			[]string{"12.0\u00a0% too low", "2.1012\u00a0±\u00a00.0007", "tipton-1996", "chart, by eye", "not an approval"}},
+			[]string{"12.0\u00a0% too low", "2.1012\u00a0±\u00a00.0005", "tipton-1996", "chart, by eye", "not an approval"}},
 		{with(steppedShaft, "--title", wicked, "--by", wicked, "--date", wicked), exitDisagrees, []string{`<a href="#torsion">`, "Summary"}},
 		{with(steppedShaft, "--load", "torsion", "--claim", "1.5", "--claim-from", wicked), exitAgrees, []string{"√3"}},
 		{[]string{link}, exitAgrees, []string{"o&#39;link &lt;&amp;&#34; ü.json", "part file below"}},
