@@ -103,7 +103,10 @@ func superscript(n int) string {
 // sides, or by as much about a single value.
 func around(low, high, share float64, log bool) (float64, float64) {
 	if log {
-		ratio := math.Max(math.Pow(high/low, share), 1.25)
+		ratio := math.Pow(high/low, share)
+		if high < 4*low { // room for at least one round value
+			ratio = math.Max(ratio, 1.25)
+		}
 		return low / ratio, high * ratio
 	}
 	length := high - low

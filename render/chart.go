@@ -20,6 +20,7 @@ type Diagram struct {
 	X, Y   Axis
 	Curves []Curve
 	Levels []Level
+	Stops  []Stop
 }
 
 // An Axis is one scale of a diagram. Low and High are its ends; both zero: it
@@ -67,6 +68,12 @@ type Level struct {
 	Label string
 	Value float64
 	Bar   float64 // half height of its band; 0: none
+}
+
+// A Stop is a place on the x axis that has a name: where a fillet ends.
+type Stop struct {
+	Label string
+	At    float64
 }
 
 // Chart draws a plot. It fails where there is nothing to draw, on values that
@@ -173,7 +180,7 @@ func (d Diagram) scales() (x, y axis) {
 	for _, l := range d.Levels {
 		ys = append(ys, l.Value-l.Bar, l.Value+l.Bar)
 	}
-	return d.X.scale(xs, 0.1), d.Y.scale(ys, 0.12)
+	return d.X.scale(xs, 0.03), d.Y.scale(ys, 0.12)
 }
 
 // bar is the half height of the error bar, 0 where there is none.

@@ -50,16 +50,21 @@ func (p Plot) layout(wide float64) chartLayout {
 // plot draws a sheet of diagrams.
 func (s *sheet) plot(p Plot) {
 	l := p.layout(s.paper.width() / s.scale)
-	for i, line := range l.title {
-		s.text(point{s.u(sheetMargin), s.u(sheetMargin + titleHeight*float64(i))}, 0, 0, line, head, ink)
-	}
+	s.titleAndNote(l.title, l.note, l.height)
 	for i, d := range p.Diagrams {
 		c := l.cells[i]
 		s.diagram(s.area(c.X0, c.Y0, c.X1, c.Y1), d)
 	}
-	for i, line := range l.note {
-		y := l.height - sheetMargin + 8 - noteHeight*float64(len(l.note)-i)
-		s.text(point{s.u(sheetMargin), s.u(y)}, 0, 0, line, small, ink)
+}
+
+// titleAndNote letters what stands above and below the diagrams of a sheet.
+func (s *sheet) titleAndNote(title, note []string, height float64) {
+	for i, line := range title {
+		s.text(point{s.u(sheetMargin), s.u(sheetMargin + titleHeight*float64(i))}, 0, 0, line, head, ink)
 	}
-	s.text(point{s.paper.X1 - s.u(sheetMargin), s.u(l.height - sheetMargin + 8 - noteHeight + small.Size)}, 1, 1, "notchproof", small, grey)
+	bottom := height - sheetMargin + 8
+	for i, line := range note {
+		s.text(point{s.u(sheetMargin), s.u(bottom - noteHeight*float64(len(note)-i))}, 0, 0, line, small, ink)
+	}
+	s.text(point{s.paper.X1 - s.u(sheetMargin), s.u(bottom - noteHeight)}, 1, 0, "notchproof", small, grey)
 }

@@ -19,6 +19,9 @@ func (s *sheet) diagram(cell box, d Diagram) {
 			p.bandOf(c)
 		}
 	}
+	for _, stop := range d.Stops {
+		p.stop(stop)
+	}
 	form := 0
 	var ends []ending
 	for _, c := range d.Curves {
@@ -39,6 +42,9 @@ func (s *sheet) diagram(cell box, d Diagram) {
 				p.name(at, q.Label)
 			}
 		}
+	}
+	for _, stop := range d.Stops {
+		p.stopLabel(stop)
 	}
 	p.endings(ends)
 }
@@ -66,7 +72,7 @@ func (p *panel) curve(c Curve, form int) {
 	}
 	if !c.Band {
 		for _, q := range c.Points {
-			p.errorBar(q)
+			p.errorBar(q, c.Marked)
 		}
 	}
 	if !c.Marked {
@@ -103,16 +109,17 @@ func (p *panel) avoid(ps []point) {
 	}
 }
 
-// errorBar draws the bar of a point with its two ends; on a logarithmic scale a
-// lower end that is not above zero runs out of the frame.
-func (p *panel) errorBar(q CurvePoint) {
+// errorBar draws the bar of a point with its two ends, unless it would not look
+// out from under the mark; on a logarithmic scale a lower end that is not above
+// zero runs out of the frame.
+func (p *panel) errorBar(q CurvePoint, marked bool) {
 	bar := q.bar()
 	if bar == 0 {
 		return
 	}
 	at := p.position(q.X, q.Y)
 	top, bottom := p.height(q.Y+bar), p.height(q.Y-bar)
-	if !p.frame.has(at) || bottom-top < p.u(2) {
+	if !p.frame.has(at) || marked && bottom-top < p.u(2*8) {
 		return
 	}
 	p.pen(ink, narrow)
@@ -164,4 +171,14 @@ func (p *panel) levelBand(l Level) {
 	p.line(point{p.frame.X0, y}, point{p.frame.X1, y})
 	p.dc.SetDash()
 	p.take(box{p.frame.X0, y - 1, p.frame.X1, y + 1})
+}
+
+// stop draws the line of a place on the x axis.
+func (p *panel) stop(s Stop) {
+	x := p.x.at(s.At)
+	p.pen(grey, hairline)
+	p.dc.SetDash(p.u(14), p.u(4), p.u(2), p.u(4))
+	p.line(point{x, p.frame.Y0}, point{x, p.frame.Y1})
+	p.dc.SetDash()
+	p.take(box{x - 1, p.frame.Y0, x + 1, p.frame.Y1})
 }

@@ -1,6 +1,7 @@
 package render
 
 import (
+	"strings"
 	"testing"
 
 	"gonum.org/v1/gonum/spatial/r2"
@@ -29,16 +30,27 @@ func checkLayout(t *testing.T, s *sheet) {
 	}
 }
 
-// checkFigure holds a figure against the rules on wide and on narrow paper, in
-// pixels and as SVG.
+// checkFigure holds a figure against the rules on wide and on narrow paper, as
+// SVG and in pixels.
 func checkFigure(t *testing.T, f *Figure) {
 	t.Helper()
-	for _, o := range []FigureOptions{{Pixels: 800}, {Millimetres: 160, Pixels: 800}, {Millimetres: 80, Pixels: 945}} {
-		checkLayout(t, f.sheet(o))
+	for _, mm := range []float64{210, 160, 80} {
+		o := FigureOptions{Millimetres: mm}
 		s, _ := f.vector(o)
 		checkLayout(t, s)
 		checkSVG(t, f.SVG(o))
 	}
+	checkLayout(t, f.sheet(FigureOptions{Millimetres: 80, Pixels: 400}))
+}
+
+// letters tells whether a text stands on a figure, in one line or broken into
+// several.
+func letters(s *sheet, text string) bool {
+	all := ""
+	for _, l := range s.texts {
+		all += l.Text + " "
+	}
+	return strings.Contains(all, legible(text))
 }
 
 func TestPictureLayout(t *testing.T) {

@@ -5,6 +5,7 @@ import "math"
 // A panel is the frame of one diagram.
 type panel struct {
 	*sheet
+	cell  box // with the lettering all round
 	frame box
 	x, y  axis
 }
@@ -15,7 +16,7 @@ const markApart = 44
 // newPanel rules a frame inside a cell with both scales and the grid behind.
 // Right is the room to keep free on its right side, in pixels.
 func (s *sheet) newPanel(cell box, d Diagram, right float64) *panel {
-	p := &panel{sheet: s}
+	p := &panel{sheet: s, cell: cell}
 	p.x, p.y = d.scales()
 	p.frame = box{cell.X0, cell.Y0 + s.u(diagramHead), cell.X1 - right, cell.Y1 - s.u(diagramFoot)}
 	ys := p.y.marks(int(p.frame.height() / s.u(markApart)))
