@@ -93,7 +93,10 @@ func (c *climb) finding(ctx context.Context) (Finding, error) {
 	f.judge(c.part, c.options)
 	own := c.options
 	own.Workers = c.workers
-	return f, f.readMesh(ctx, c.part, own)
+	if err := f.readMesh(ctx, c.part, own); err != nil {
+		return f, err
+	}
+	return f, c.misread(ctx, &f)
 }
 
 // without leaves a ladder no factor: its stress has no bound, whatever its first

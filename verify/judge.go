@@ -13,11 +13,7 @@ func (f *Finding) judge(p *specimen.Part, o Options) {
 	settled := f.settle(p, o)
 	f.consult(p, settled)
 	if claim := o.Claims[f.Load.Name]; claim != nil {
-		reading := claim.Reading
-		if reading == 0 {
-			reading = defaultReading
-		}
-		tolerance := claimTolerance(claim.Factor, claim.LastDigit, reading)
+		tolerance := claimTolerance(claim.Factor, claim.LastDigit, claim.reading())
 		f.Claim = &ClaimComparison{*claim, compare(claim.Factor, tolerance, e, settled)}
 	}
 	if !settled {

@@ -111,6 +111,14 @@ type Claim struct {
 	Mesh      *specimen.Density // of the finite element mesh it came from; nil: not from one
 }
 
+// reading is the claim's reading tolerance with its default.
+func (c *Claim) reading() float64 {
+	if c.Reading == 0 {
+		return defaultReading
+	}
+	return c.Reading
+}
+
 // ClaimComparison holds the claim against the computed factor.
 type ClaimComparison struct {
 	Claim Claim
@@ -126,5 +134,9 @@ type HandbookComparison struct {
 // A Misreading is a known slip whose factor would explain a claim.
 type Misreading struct {
 	What   string
-	Factor float64
+	Factor float64 // what the slip gives
+	From   string  // the chart that gives it, or "computed"
+	// Chance is the share of claims wrong for no such reason that a slip at
+	// least as specific meets as closely; package misreading says how.
+	Chance float64
 }

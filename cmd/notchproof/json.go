@@ -135,6 +135,8 @@ type jsonCorner struct {
 type jsonMisreading struct {
 	What   string  `json:"what"`
 	Factor float64 `json:"factor"`
+	From   string  `json:"from"`
+	Chance float64 `json:"chance"`
 }
 
 // writeJSON prints a result as one object.
@@ -194,7 +196,7 @@ func jsonOf(f *verify.Finding) jsonFinding {
 		out.Checks = append(out.Checks, jsonCheck{k.Name, maybe(k.Value), k.Limit, k.Passed})
 	}
 	for _, m := range f.Misreadings {
-		out.Misreadings = append(out.Misreadings, jsonMisreading{m.What, m.Factor})
+		out.Misreadings = append(out.Misreadings, jsonMisreading{m.What, m.Factor, m.From, m.Chance})
 	}
 	return out
 }

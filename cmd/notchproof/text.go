@@ -81,6 +81,7 @@ func findingText(b *strings.Builder, f *verify.Finding, part *specimen.Part, s s
 			from = "  (" + oneLine(from) + ")"
 		}
 		fmt.Fprintf(b, "  claim      %s%s\n", comparisonText(f.Claim.Comparison, s), from)
+		misreadingsText(b, f.Misreadings)
 	}
 	if f.MeshClaim != nil {
 		meshClaimText(b, f, s)
@@ -112,6 +113,14 @@ func othersText(b *strings.Builder, c *verify.Computed, unit string) {
 		}
 		fmt.Fprintf(b, "  also       about %s on %s at x = %s, y = %s, %.1f°\n",
 			number.Significant(p.Factor, 3), p.Side, number.Length(round(p.X, 4), unit), number.Length(round(p.Y, 4), unit), p.ArcDegrees)
+	}
+}
+
+// misreadingsText says what slip would explain the claim, and how much that means.
+func misreadingsText(b *strings.Builder, list []verify.Misreading) {
+	for _, m := range list {
+		fmt.Fprintf(b, "  misread?   %-6s %s (%s); so by chance in %s of wrong claims\n",
+			number.Compact(m.Factor, 4), m.What, m.From, number.Percent(m.Chance, 0))
 	}
 }
 
