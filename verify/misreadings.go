@@ -8,12 +8,17 @@ import (
 	"notchproof/fem"
 	"notchproof/verify/misreading"
 	"notchproof/verify/specimen"
+	"notchproof/verify/usermesh"
 )
 
 // misread looks for the slip behind a claim that disagrees. Nothing is sought
-// where the claim agrees or the ladder has not settled.
+// where the claim agrees, where the ladder has not settled, or where the claim's
+// own mesh explains it already.
 func (c *climb) misread(ctx context.Context, f *Finding) error {
 	if f.Claim == nil || f.Claim.Verdict != Disagrees {
+		return nil
+	}
+	if f.MeshClaim != nil && f.MeshClaim.Matches != usermesh.None {
 		return nil
 	}
 	claim := f.Claim.Claim

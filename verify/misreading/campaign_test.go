@@ -3,9 +3,11 @@ package misreading_test
 import (
 	"context"
 	"errors"
+	"maps"
 	"math"
 	"math/rand/v2"
 	"os"
+	"slices"
 	"strconv"
 	"testing"
 
@@ -54,11 +56,11 @@ func TestSuggestionsByChance(t *testing.T) {
 			for _, eye := range []float64{0, 0.005, 0.01} {
 				claim, digit := written(c.Factor*(1+eye*rng.NormFloat64()), 3)
 				if wrong, found := tries.Judge(claim, digit); wrong {
-					key := strconv.FormatFloat(eye, 'g', -1, 64)
-					if slips[key+c.Grade] == nil {
-						slips[key+c.Grade] = &share{}
+					key := c.Grade + " " + strconv.FormatFloat(eye, 'g', -1, 64)
+					if slips[key] == nil {
+						slips[key] = &share{}
 					}
-					slips[key+c.Grade].count(contains(found, c.What))
+					slips[key].count(contains(found, c.What))
 				}
 			}
 		}
@@ -74,10 +76,10 @@ func TestSuggestionsByChance(t *testing.T) {
 			t.Errorf("%d figures: %s of wrong claims are met by chance, level %g", n, byChance[n], misreading.Level)
 		}
 	}
-	for key, s := range slips {
-		t.Logf("spread of the eye and grade %s: %s found", key, s)
+	for _, key := range slices.Sorted(maps.Keys(slips)) {
+		t.Logf("grade and spread of the eye %s: %s found", key, slips[key])
 	}
-	if s := slips["0line"]; s.of() < 0.9 {
+	if s := slips["line 0"]; s.of() < 0.9 {
 		t.Errorf("%s of the plainest slips found when read exactly", s)
 	}
 }

@@ -36,7 +36,15 @@
 //
 // The costs were settled on random parts of one seed, where they shift finds
 // from one kind of slip to another; the chance stays what it is. On another seed
-// (TestSuggestionsByChance, NOTCHPROOF_LONG=1):
+// (TestSuggestionsByChance, NOTCHPROOF_LONG=1, 200 parts of all families), claims
+// wrong by 4 to 30 % for no reason met a suggestion in 5.6, 16.3 and 18.7 % of
+// cases when written with two, three and four figures; of 12000 claims that agree
+// none did. Slips written with three figures were among the best three in these
+// shares of cases, by how well the factor was read:
 //
-//	MEASURED
+//	                        exactly   ± 0.5 %   ± 1 %  (standard deviation)
+//	line, of 1623             99 %      78 %     57 %
+//	table, of 386             96 %      72 %     55 %
+//	choice, of 1221           74 %      47 %     31 %
+//	free, of 468              28 %      12 %      7 %
 package misreading
