@@ -30,6 +30,11 @@ nodes and inside the elements, to see whether the density explains the claim.
   notchproof check shaft-shoulder D=90mm d=75mm r=6mm --load bending \
       --claim 1.62 --claim-mesh order=1,arc=12
 
+A claim that disagrees is tried on the slips people make (another load, gross
+for net section, diameter for radius, bar for shaft, ...). Those it meets are
+named, each with the share of claims wrong for no such reason that would meet
+some slip as well.
+
 A part file is JSON: title, shape (a family with its dimensions, or an outline
 of your own as path data), loads, material and claims. To start one, let
 "notchproof parts shaft-shoulder D=72mm d=48mm r=3mm --as-file" print it. What

@@ -78,3 +78,20 @@ func TestReadmeClaimFromAMesh(t *testing.T) {
 		t.Errorf("README\n%sprinted\n%s", block[2], out)
 	}
 }
+
+// TestReadmeMisreading: the lines shown of a claim that is a known slip.
+func TestReadmeMisreading(t *testing.T) {
+	text, err := os.ReadFile("../../README.md")
+	if err != nil {
+		t.Fatal(err)
+	}
+	block := regexp.MustCompile("(?s)\\$ notchproof ([^\n]* --claim 1.55)  # exit 1\n  …\n(.*?)\n  …\n").FindStringSubmatch(string(text))
+	if block == nil {
+		t.Fatal("the example is not in the README")
+	}
+	var out, errs bytes.Buffer
+	status := run(context.Background(), strings.Fields(block[1]), &out, &errs)
+	if status != exitDisagrees || errs.Len() > 0 || !strings.Contains(out.String(), block[2]+"\n") {
+		t.Errorf("exit status %d, the README shows\n%s\nprinted\n%s%s", status, block[2], errs.String(), out.String())
+	}
+}
