@@ -91,7 +91,7 @@ func findingOf(f *verify.Finding, p *specimen.Part) Finding {
 		out.Handbook = append(out.Handbook, handbookOf(h))
 	}
 	if c := f.Claim; c != nil {
-		out.Claim = &Claim{c.Claim.Factor, c.Claim.From, c.Tolerance, Number(c.Difference), verdictOf(c.Verdict), c.Unsafe()}
+		out.Claim = &Claim{c.Claim.Factor, c.Claim.From, c.Tolerance, numberOf(c.Difference), verdictOf(c.Verdict), c.Unsafe()}
 	}
 	if m := f.MeshClaim; m != nil {
 		out.ClaimMesh = claimMeshOf(m)
@@ -100,7 +100,7 @@ func findingOf(f *verify.Finding, p *specimen.Part) Finding {
 		out.Misreadings = append(out.Misreadings, Misreading{m.What, m.Factor})
 	}
 	for _, k := range f.Checks {
-		out.Checks = append(out.Checks, Check{k.Name, Number(k.Value), Number(k.Limit), k.Above, k.Passed})
+		out.Checks = append(out.Checks, Check{k.Name, numberOf(k.Value), numberOf(k.Limit), k.Above, k.Passed})
 	}
 	return out
 }
@@ -108,7 +108,7 @@ func findingOf(f *verify.Finding, p *specimen.Part) Finding {
 func claimMeshOf(m *verify.MeshReading) *ClaimMesh {
 	reading := func(what string, s usermesh.Span, difference float64, match usermesh.Match) MeshReading {
 		claimed := m.Matches == match || m.Matches == usermesh.Both
-		return MeshReading{what, Value{Number(s.Value), Number(s.Scatter)}, Number(difference), claimed}
+		return MeshReading{what, Value{numberOf(s.Value), numberOf(s.Scatter)}, numberOf(difference), claimed}
 	}
 	return &ClaimMesh{m.Density.String(), m.Matches.String(), []MeshReading{
 		reading("averaged at the nodes", m.Nodes, m.DifferenceNodes, usermesh.Nodes),
@@ -122,9 +122,9 @@ func texts(list []string) []string { return append([]string{}, list...) }
 func computedOf(c *verify.Computed, p *specimen.Part) Computed {
 	out := Computed{
 		Settled: c.Factor.Status.Settled(), Status: c.Factor.Status.String(),
-		Factor:   Value{Number(c.Factor.Value), Number(c.Factor.Uncertainty)},
-		VonMises: Value{Number(c.VonMises.Value), Number(c.VonMises.Uncertainty)},
-		Gross:    Value{Number(c.Gross), Number(c.Gross / c.Factor.Value * c.Factor.Uncertainty)},
+		Factor:   Value{numberOf(c.Factor.Value), numberOf(c.Factor.Uncertainty)},
+		VonMises: Value{numberOf(c.VonMises.Value), numberOf(c.VonMises.Uncertainty)},
+		Gross:    Value{numberOf(c.Gross), numberOf(c.Gross / c.Factor.Value * c.Factor.Uncertainty)},
 		At:       placeOf(c.Peak), AngleFrom: p.AngleFrom(), Others: []Place{}, Ladder: []Rung{},
 	}
 	for _, o := range c.Others {
@@ -132,19 +132,19 @@ func computedOf(c *verify.Computed, p *specimen.Part) Computed {
 	}
 	before := math.NaN()
 	for _, r := range c.Ladder {
-		out.Ladder = append(out.Ladder, Rung{r.Order, r.Triangles, r.Unknowns, Number(r.Factor), Number(r.Factor - before), Number(r.Leftover)})
+		out.Ladder = append(out.Ladder, Rung{r.Order, r.Triangles, r.Unknowns, numberOf(r.Factor), numberOf(r.Factor - before), numberOf(r.Leftover)})
 		before = r.Factor
 	}
 	return out
 }
 
-func placeOf(p verify.Peak) Place { return Place{p.Side, p.X, p.Y, p.ArcDegrees, Number(p.Factor)} }
+func placeOf(p verify.Peak) Place { return Place{p.Side, p.X, p.Y, p.ArcDegrees, numberOf(p.Factor)} }
 
 func handbookOf(h verify.HandbookComparison) Handbook {
 	v := h.Value
 	out := Handbook{
 		ID: v.ID, Factor: v.Factor, InRange: v.InRange, Hint: v.Hint, Range: v.Range, Outside: texts(v.Outside),
-		Accuracy: v.Accuracy, Source: v.Source, Difference: Number(h.Difference),
+		Accuracy: v.Accuracy, Source: v.Source, Difference: numberOf(h.Difference),
 		Verdict: verdictOf(h.Verdict), Unsafe: h.Unsafe(), Remarks: []string{},
 	}
 	if h.Verdict == verify.Disagrees && v.Bias != "" {

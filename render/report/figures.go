@@ -20,7 +20,7 @@ import (
 // that they have on paper.
 const (
 	stressWidth = 1600
-	sketchWide  = 150 // mm
+	sketchWide  = 210 // mm
 	ladderWide  = 150
 )
 

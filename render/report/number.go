@@ -5,9 +5,17 @@ import (
 	"math"
 )
 
-// Number is a number that may be missing: NaN and infinities are null in JSON,
-// and null is read as NaN.
+// Number is a number that may be missing, NaN then, which is null in JSON.
 type Number float64
+
+// numberOf takes what is not finite as missing, so that a content says the same
+// before it is written and after it is read.
+func numberOf(v float64) Number {
+	if math.IsInf(v, 0) {
+		v = math.NaN()
+	}
+	return Number(v)
+}
 
 // MarshalJSON writes a number that reads back to the last bit, or null.
 func (n Number) MarshalJSON() ([]byte, error) {
