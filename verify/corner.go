@@ -2,6 +2,7 @@ package verify
 
 import (
 	"context"
+	"fmt"
 	"math"
 	"slices"
 
@@ -10,6 +11,7 @@ import (
 	"notchproof/fem"
 	"notchproof/mesh"
 	"notchproof/mesh/outline"
+	"notchproof/scf"
 	"notchproof/verify/specimen"
 )
 
@@ -93,6 +95,9 @@ func corners(ctx context.Context, p *specimen.Part, l *specimen.Load, w *fem.Wor
 			list[i].read(flanks(p, s, c), l)
 		}
 	}
+	for i := range list {
+		list[i].settle()
+	}
 	return list, nil
 }
 
@@ -156,4 +161,14 @@ func room(p *specimen.Part, c outline.Corner) float64 {
 		}
 	}
 	return least
+}
+
+// Corners measures the growth of the stress at the sharp corners of a part under
+// a load that it carries, on workers goroutines (0: one a processor).
+func Corners(ctx context.Context, p *specimen.Part, load scf.Load, workers int) ([]Corner, error) {
+	l, ok := p.Load(load)
+	if !ok {
+		return nil, fmt.Errorf("%s does not carry %s", p.Name, load)
+	}
+	return corners(ctx, p, l, &fem.Workspace{}, workers)
 }

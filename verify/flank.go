@@ -123,6 +123,16 @@ func (c *Corner) read(list []flank, l *specimen.Load) {
 	c.Mode, c.Wedge = mode, mode.exponent(c.Degrees)
 }
 
+// vague is the uncertainty of an exponent from which on it says nothing.
+const vague = 0.1
+
+// settle drops an exponent that was not found.
+func (c *Corner) settle() {
+	if !(c.Uncertainty < vague) {
+		c.Measured, c.Uncertainty = math.NaN(), math.Inf(1)
+	}
+}
+
 // growth is the exponent of values at distances that grow by a fixed ratio. It
 // is fitted to the differences over the inner third of the places; how far the
 // fits over the other thirds are off, and how far the differences scatter about

@@ -45,6 +45,8 @@ func (c Corner) Says(unit string) []string {
 	switch {
 	case c.Bounded():
 		where += ", but this load leaves the stress there bounded"
+	case math.IsNaN(c.Measured) && math.IsNaN(c.Wedge):
+		where += ": whether the stress there has a bound could not be told, and there is no factor"
 	case c.OnNotch:
 		where += ": the stress there grows without bound, and there is no factor"
 	default:
