@@ -33,7 +33,7 @@ type command struct {
 func commands() []*command {
 	return []*command{
 		checkCommand(), studyCommand(), pictureCommand(), reportCommand(), partsCommand(),
-		strengthCommand(), sizeCommand(), toleranceCommand(),
+		strengthCommand(), sizeCommand(), toleranceCommand(), selfcheckCommand(),
 	}
 }
 

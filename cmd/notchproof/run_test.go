@@ -51,6 +51,7 @@ func TestExitStatuses(t *testing.T) {
 		{"parts", exitAgrees, "shaft-shoulder"},
 		{"parts bar-shoulder", exitAgrees, "typical proportions"},
 		{"parts bar-shoulder D=60mm d=40mm r=4mm -o " + filepath.Join(dir, "s.png"), exitAgrees, "sketch written"},
+		{"selfcheck", exitAgrees, "all passed: 16 of 16 cases"},
 		{"help", exitAgrees, "usage: notchproof COMMAND"},
 		{"help check", exitAgrees, "Exit status"},
 		{"study --help", exitAgrees, "--by"},
@@ -128,6 +129,7 @@ func TestBadInput(t *testing.T) {
 		{"picture bar-shoulder D=60 d=40 r=4 -o p.jpg", `"p.jpg"`, "format"},
 		{"picture bar-shoulder D=60 d=40 r=4 -o no/such/folder/p.png", "folder", "make"},
 		{"picture bar-shoulder D=60 d=40 r=4 -o p.png --width 3", "--width 3", "400"},
+		{"selfcheck bar-hole", `"bar-hole": takes no part`, "check PART"},
 		{"parts bar-sholder", "no such family", "bar-shoulder"},
 		{"parts -o s.png", "no family", "shaft-shoulder"},
 	} {

@@ -14,7 +14,8 @@ import (
 // writeSelfcheck prints the table: one block a case, one row a number.
 func writeSelfcheck(w io.Writer, head build, outcomes []evidence.Outcome, s style) error {
 	var b strings.Builder
-	fmt.Fprintf(&b, "%s\n", head)
+	fmt.Fprintf(&b, "%s\n\n", head)
+	fmt.Fprintf(&b, readingColumns, "", "expected", "got", "bar", "")
 	passed, rows, kept := 0, 0, 0
 	for i := range outcomes {
 		o := &outcomes[i]
@@ -27,7 +28,7 @@ func writeSelfcheck(w io.Writer, head build, outcomes []evidence.Outcome, s styl
 			if r.Passed {
 				kept++
 			}
-			fmt.Fprintf(&b, "  %s\n", readingText(r, s))
+			readingText(&b, r, s)
 		}
 		if o.Passed() {
 			passed++
@@ -42,24 +43,34 @@ func writeSelfcheck(w io.Writer, head build, outcomes []evidence.Outcome, s styl
 	return err
 }
 
-const readingColumns = "%-46s %s"
+const readingColumns = "  %-46s %14s %14s %10s  %s\n"
 
-func readingText(r evidence.Reading, s style) string {
+func readingText(b *strings.Builder, r evidence.Reading, s style) {
 	mark := s.good("pass")
 	if !r.Passed {
 		mark = s.bad("failed")
 	}
 	bar := r.Bar + r.Accuracy
+	want, got := asKnown(r), to(r.Got, bar)
 	if r.Value == 0 {
-		return fmt.Sprintf(readingColumns, r.What, fmt.Sprintf("%14s %14s %9s  %s", "0", upTo(r.Got), "± "+oneDigit(bar), mark))
+		want, got = "0", upTo(r.Got)
 	}
-	return fmt.Sprintf(readingColumns, r.What, fmt.Sprintf("%14s %14s %9s  %s", to(r.Value, bar), to(r.Got, bar), "± "+oneDigit(bar), mark))
+	fmt.Fprintf(b, readingColumns, r.What, want, got, "± "+strconv.FormatFloat(bar, 'g', 2, 64), mark)
+}
+
+// asKnown writes an expected number with the digits that are known of it.
+func asKnown(r evidence.Reading) string {
+	if r.Accuracy == 0 {
+		return to(r.Value, r.Bar)
+	}
+	digits := math.Ceil(-math.Log10(2*r.Accuracy) - 1e-9)
+	return minus(strconv.FormatFloat(r.Value, 'f', int(math.Max(0, math.Min(10, digits))), 64))
 }
 
 // upTo is a miss of a number that ought to be zero. Rounding differs from machine
-// to machine: what is below a billionth is not told apart.
+// to machine: what is below that is not told apart.
 func upTo(v float64) string {
-	const seen = 1e-9
+	const seen = 1e-11
 	if math.Abs(v) < seen {
 		return "< " + oneDigit(seen)
 	}
@@ -75,8 +86,11 @@ func to(v, bar float64) string {
 	if bar > 0 {
 		decimals = int(math.Max(1, math.Min(10, 1-math.Floor(math.Log10(bar)))))
 	}
-	return strings.Replace(strconv.FormatFloat(v, 'f', decimals, 64), "-", "−", 1)
+	return minus(strconv.FormatFloat(v, 'f', decimals, 64))
 }
+
+// minus has the sign that print has.
+func minus(text string) string { return strings.Replace(text, "-", "−", 1) }
 
 // The object that selfcheck --json prints.
 type jsonSelfcheck struct {
