@@ -5,6 +5,7 @@ import (
 	"math"
 	"os"
 	"path/filepath"
+	"regexp"
 	"strings"
 	"testing"
 )
@@ -98,6 +99,34 @@ func TestStrengthBadInput(t *testing.T) {
 		}
 		if !strings.Contains(lines[0], row.says) || !strings.Contains(lines[1], row.hint) {
 			t.Errorf("%s: got\n%swant …%s… and …%s…", row.line, errs, row.says, row.hint)
+		}
+	}
+}
+
+// TestReadmeShowsStrength runs the README's examples: every line that stands
+// under them is printed, in that order.
+func TestReadmeShowsStrength(t *testing.T) {
+	text, err := os.ReadFile("../../README.md")
+	if err != nil {
+		t.Fatal(err)
+	}
+	blocks := regexp.MustCompile("(?s)\\$ notchproof (strength [^\n#]*)[^\n]*\n(.*?)\n```").FindAllStringSubmatch(string(text), -1)
+	if len(blocks) < 2 {
+		t.Fatalf("%d examples in the README", len(blocks))
+	}
+	for _, block := range blocks {
+		_, out, errs := program(t, strings.ReplaceAll(block[1], " testdata/", " ../../testdata/"))
+		if errs != "" {
+			t.Error(errs)
+		}
+		out = strings.NewReplacer("\u00a0", " ", "\u202f", " ").Replace(out)
+		for _, line := range strings.Split(block[2], "\n") {
+			before, after, found := strings.Cut(out, line+"\n")
+			if !found {
+				t.Errorf("%s: not printed, or not in this order: %s\n%s", block[1], line, before)
+				break
+			}
+			out = after
 		}
 	}
 }
