@@ -38,7 +38,8 @@ its yield stress.
 
 A part file may hold all of it: "forces" {"axial", "bending", "torque"},
 "thickness", "safety", and under "material" "yield", "tensile", "elongation",
-"brittle", "metal". What the flags say goes before what the file says.
+"brittle", "metal". What the flags say goes before what the file says. Claims of
+the file are carried through the rule by hand too.
 
 --json prints, with stresses in stressUnit: factors (nominal stress, computed
 and best handbook factor of every load), byHand, places (smallest safety first;
@@ -132,7 +133,6 @@ func (s *strengthFlags) ask(q *questions, args []string) (strength.Question, err
 	if err != nil {
 		return out, err
 	}
-	job.options.Claims = nil
 	out.Part, out.Options = job.part, job.options
 	if job.file != nil {
 		if err := fromFile(&out, job.file); err != nil {

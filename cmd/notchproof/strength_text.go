@@ -139,6 +139,9 @@ func (b *strengthSheet) factors() {
 		}
 		b.line("  %-9s  nominal %s, %s = %s, handbook %s", f.Load.Name, b.stress(b.Nominal[i].Stress), symbol,
 			number.Uncertain(e.Value, e.Uncertainty), b.book(f.Load.Name))
+		if f.Claim != nil {
+			b.line("             claim %s", comparisonText(f.Claim.Comparison, b.style))
+		}
 	}
 	for _, warning := range b.Warnings {
 		b.line("  %s %s", b.style.weak("warning"), warning)
@@ -175,18 +178,22 @@ func (b *strengthSheet) notch() {
 	b.line("             by hand: every nominal stress times its own factor, all at one point")
 }
 
-// side tells on which side of the computed stress the rule by hand lies.
+// side tells on which side of the computed stress the rule by hand lies, and
+// whether that is more than its factors are good for.
 func (b *strengthSheet) side(h *strength.Hand, n *strength.Place) string {
-	gap := math.Abs(h.Equivalent - n.Equivalent)
+	gap, within := math.Abs(h.Equivalent-n.Equivalent), ""
+	if gap <= n.Uncertainty+h.Uncertainty {
+		within = ", within its ±"
+	}
 	switch {
 	case h.Equivalent == 0:
 		return "nothing pulls"
 	case gap <= n.Uncertainty:
 		return "the same"
 	case h.Difference > 0:
-		return b.style.weak("conservative")
+		return b.style.weak("conservative" + within)
 	}
-	return b.style.bad("not conservative")
+	return b.style.bad("not conservative" + within)
 }
 
 func (b *strengthSheet) where(p *strength.Place) string {

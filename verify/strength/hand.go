@@ -6,14 +6,21 @@ import (
 	"notchproof/verify"
 )
 
-// byHand works out the rule of the design office with the computed factors and
-// with the handbook's.
+// byHand works out the rule of the design office with the computed factors, with
+// the handbook's, and with those that the user claims, where there are some.
 func (q *Question) byHand(checked *verify.Result, computed float64) []Hand {
-	own, book := Hand{With: "computed factors"}, Hand{With: "handbook factors"}
+	own, book, claimed := Hand{With: "computed factors"}, Hand{With: "handbook factors"}, Hand{With: "claimed factors"}
+	claims := false
 	for i := range checked.Findings {
 		f := &checked.Findings[i]
 		e := f.Computed.Factor
-		own.Factors = append(own.Factors, HandFactor{f.Load.Name, e.Value, e.Uncertainty, ""})
+		factor := HandFactor{f.Load.Name, e.Value, e.Uncertainty, ""}
+		own.Factors = append(own.Factors, factor)
+		if f.Claim != nil {
+			claims = true
+			factor = HandFactor{f.Load.Name, f.Claim.Factor, f.Claim.Tolerance, "claim"}
+		}
+		claimed.Factors = append(claimed.Factors, factor)
 		if best, ok := bestInRange(f.Handbook); ok {
 			v := best.Value
 			book.Factors = append(book.Factors, HandFactor{f.Load.Name, v.Factor, v.Accuracy * v.Factor, v.ID})
@@ -21,12 +28,16 @@ func (q *Question) byHand(checked *verify.Result, computed float64) []Hand {
 			book.Missing = append(book.Missing, string(f.Load.Name))
 		}
 	}
-	for _, h := range []*Hand{&own, &book} {
-		if len(h.Missing) == 0 {
-			q.combine(h, computed)
+	list := []Hand{own, book}
+	if claims {
+		list = append(list, claimed)
+	}
+	for i := range list {
+		if len(list[i].Missing) == 0 {
+			q.combine(&list[i], computed)
 		}
 	}
-	return []Hand{own, book}
+	return list
 }
 
 // bestInRange is the published factor that covers the shape with the best

@@ -6,6 +6,7 @@ import (
 	"testing"
 
 	"notchproof/scf"
+	"notchproof/verify"
 	"notchproof/verify/quantity"
 	"notchproof/verify/specimen"
 )
@@ -58,6 +59,25 @@ func TestByHandArithmetic(t *testing.T) {
 	near(t, "plastic limit", r.Section.Plastic, (math.Sqrt(m*m+4*n*n)-m)/(2*n*n), 1e-9)
 }
 
+// A claim is carried through the rule by hand, the other loads with the
+// computed factors, and changes nothing of what is computed.
+func TestClaimByHand(t *testing.T) {
+	q := Question{Part: family(t, "shaft-shoulder", scf.Dims{"D": 72, "d": 48, "r": 3}),
+		Bending: quantity.NewtonMillimetres(300e3), Torque: quantity.NewtonMillimetres(450e3)}
+	plain := answer(t, q)
+	q.Options.Claims = map[scf.Load]*verify.Claim{scf.Bending: {Factor: 1.5, LastDigit: 0.1}}
+	r := answer(t, q)
+	if len(plain.Hand) != 2 || len(r.Hand) != 3 {
+		t.Fatalf("%d and %d ways by hand", len(plain.Hand), len(r.Hand))
+	}
+	near(t, "computed", r.Notch().Equivalent, plain.Notch().Equivalent, 1e-12)
+	normal, shear := 1.5*27.6311, r.Hand[0].Factors[1].Factor*20.7233
+	near(t, "with the claim", r.Hand[2].Equivalent, math.Sqrt(normal*normal+3*shear*shear), 1e-5)
+	if !(r.Hand[2].Difference < -0.05) {
+		t.Errorf("difference %g", r.Hand[2].Difference)
+	}
+}
+
 func place(t *testing.T, r *Result, name string) Place {
 	t.Helper()
 	for _, p := range r.Places {
@@ -80,6 +100,12 @@ func TestForceBesideTheNetSection(t *testing.T) {
 	q := Question{Part: p, Thickness: mm(8), Axial: quantity.Newtons(8e3)}
 	r := answer(t, q)
 	near(t, "outermost fibre", 300/r.Section.Elastic, 8e3/320+6*8e3*10/(40*40*8), 1e-9)
+	// A moment that opens the notch adds to that, one that closes it takes from it.
+	for _, moment := range []float64{5e4, -5e4, -2e5} {
+		q.Bending = quantity.NewtonMillimetres(moment)
+		want := 8e3/320.0 + math.Abs(6*(8e3*10+moment)/(40*40*8))
+		near(t, "outermost fibre in bending", 300/answer(t, q).Section.Elastic, want, 1e-9)
+	}
 }
 
 // TestLimits of a hole's net section: two strips whose outer fibres lie at W/2.

@@ -15,7 +15,7 @@ type Result struct {
 	Nominal  []Nominal     // in the order of the findings
 	// Settled tells that every factor is; without that nothing is decided.
 	Settled bool
-	Hand    []Hand  // by hand, with the computed factors and with the handbook's
+	Hand    []Hand  // by hand: with the computed factors, the handbook's, and the user's where there are some
 	Places  []Place // judged, smallest safety first
 	// Pressed is, of a brittle material, the size of the largest compressive
 	// stress on the notch. Brittle metals bear at least as much in compression as
@@ -59,7 +59,7 @@ type Interval struct{ Value, Low, High float64 }
 // Hand is the rule of the design office: each nominal stress times its own
 // factor, all taken to act at one point.
 type Hand struct {
-	With    string // "computed factors", "handbook factors"
+	With    string // "computed factors", "handbook factors", "claimed factors" (others computed)
 	Factors []HandFactor
 	Missing []string // loads without a factor in range; nothing else is then told
 	Normal  float64  // sum of the direct stresses
@@ -76,7 +76,7 @@ type HandFactor struct {
 	Load      scf.Load
 	Factor    float64
 	Tolerance float64
-	From      string // name of the fit; empty: computed
+	From      string // name of the fit, "claim", or empty: computed
 }
 
 // Section is what the net section bears as a whole: factors by which all loads
