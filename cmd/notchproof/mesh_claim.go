@@ -77,12 +77,13 @@ func guidanceText(b *strings.Builder, g *usermesh.Guidance, symbol string) {
 	fmt.Fprintf(b, "\nA mesh of your own: the largest stress averaged at the nodes of the root stays within a level\nof %s = %s from so many elements per 90° on, all finer ones that were tried included.\n",
 		symbol, number.Uncertain(g.Factor, g.Uncertainty))
 	guidanceRows(b, "", g)
-	finest := make(map[int]float64)
+	tried := make(map[int][]string)
 	for _, t := range g.Trials {
-		finest[t.Density.Order] = t.Density.Arc
+		tried[t.Density.Order] = append(tried[t.Density.Order], number.Compact(t.Density.Arc, 4))
 	}
-	fmt.Fprintf(b, "Order 1 has straight sides and was tried to %g per 90°, order 2 has its mid-nodes on the curve\nand was tried to %g; the length of edges grows by %g of the distance from the root, to an eighth\nof the part's width at most. The stresses are averaged part by part, then the principal stress\n(in torsion the shear) is taken from the mean.\n",
-		finest[1], finest[2], usermesh.Growth)
+	fmt.Fprintf(b, "Order 1 (straight sides) was tried with %s;\norder 2 (mid-nodes on the curve) with %s.\n",
+		strings.Join(tried[1], ", "), strings.Join(tried[2], ", "))
+	fmt.Fprintf(b, "Edges grow by %g of the distance from the root, to an eighth of the part's width at most. The\nstresses are averaged part by part, then the principal stress (in torsion the shear) is taken from\nthe mean. A mesh made otherwise may need a step of the row more or less.\n", usermesh.Growth)
 }
 
 // guidanceRows prints the table, one row an order.

@@ -26,7 +26,9 @@ type Trial struct {
 }
 
 // A Need is the least number of elements per 90° from which on the error of every
-// mesh tried stays within a level.
+// mesh tried stays within a level. Errors of order 1 scatter from mesh to mesh by
+// about a step of the densities tried: with other large elements far from the root
+// a need moves to the density before or after it.
 type Need struct {
 	Order int
 	Level float64 // relative
