@@ -5,8 +5,8 @@ import (
 	"testing"
 
 	"notchproof/fem"
-	"notchproof/mesh"
 	"notchproof/scf"
+	"notchproof/verify/evidence"
 )
 
 // nodalOrderShortfall: three halvings of the edge length are near the limit, but
@@ -20,9 +20,9 @@ func TestEvidenceNodalStressAtABore(t *testing.T) {
 	for order := 1; order <= 2; order++ {
 		var errs []float64
 		for _, size := range []float64{0.24, 0.03} {
-			p := problem{model: fem.PlaneStress{}, nu: 0.3, sides: quarterRing(1, 1, 2, 2), size: mesh.Sizing{Largest: size}, order: order,
-				fixed: mirrored(0, 2), tractions: []fem.Traction{pressed(3, 1, inward)}}
-			s := p.solve(t)
+			p := evidence.PressedRing(fem.PlaneStress{})
+			p.Size.Largest, p.Order = size, order
+			s := solved(t, p)
 			nodal, sum, count := s.NodalStress(), 0.0, 0.0
 			for i, at := range s.Problem.Shape.Nodes {
 				if r := math.Hypot(at.X, at.Y); r < 1+1e-9 {

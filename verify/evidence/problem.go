@@ -66,7 +66,7 @@ func (p *Problem) SolveOn(ctx context.Context, m *mesh.Mesh) (*fem.Solution, err
 		}
 		q.Pinned = append(q.Pinned, fem.Pin{Point: point, Unknown: pin.Unknown})
 	}
-	s, err := q.Solve(ctx, nil, 1)
+	s, err := q.Solve(ctx, nil, 0)
 	if err != nil {
 		return nil, err
 	}
