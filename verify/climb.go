@@ -4,6 +4,7 @@ import (
 	"context"
 	"fmt"
 	"math"
+	"slices"
 	"sync"
 
 	"notchproof/fem"
@@ -52,7 +53,7 @@ func (c *climb) run(ctx context.Context) (Computed, *shape, error) {
 		if at == nil || better(out.Factor, best.Factor) {
 			best, at = out, s
 		}
-		if c.done(at, &best) || round == mostRounds || c.endless || out.Factor.Status == extrapolate.Diverging {
+		if c.done(at, &best) || round == mostRounds || c.endless || out.Factor.Status == extrapolate.Diverging || c.spoiled(s, &out) {
 			return best, at, nil
 		}
 		next, err := c.refined(p, s, &out)
@@ -105,6 +106,15 @@ func (c *climb) done(s *shape, out *Computed) bool {
 		}
 	}
 	return true
+}
+
+// spoiled tells that a check has failed which no finer rung mends: ends that are
+// too near, a part that rounding rules.
+func (c *climb) spoiled(s *shape, out *Computed) bool {
+	if out.checks == nil {
+		out.checks = c.checks(s, out)
+	}
+	return slices.ContainsFunc(out.checks, func(k Check) bool { return !k.Passed && !k.discretisation })
 }
 
 // hopeless tells that the orders which are left will not bring a settled ladder

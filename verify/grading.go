@@ -40,9 +40,11 @@ func (g grading) sizing(p *specimen.Part) mesh.Sizing {
 		}
 		s.Spots = append(s.Spots, mesh.SpotWish{At: j.At, Size: g.joint * size})
 	}
+	box := p.Region.Bounds()
+	least := tiny * r2.Norm(r2.Sub(box.Max, box.Min))
 	for _, c := range p.Region.Corners() {
 		if share := g.cornerShare(c); share < 1 {
-			s.Spots = append(s.Spots, mesh.SpotWish{At: c.At, Size: share * g.around(p, sides, c.At)})
+			s.Spots = append(s.Spots, mesh.SpotWish{At: c.At, Size: math.Max(share*g.around(p, sides, c.At), least)})
 		}
 	}
 	s.Spots = append(s.Spots, g.spots...)
@@ -52,12 +54,14 @@ func (g grading) sizing(p *specimen.Part) mesh.Sizing {
 // cornerShare is how much finer the mesh is at a corner than around it. The
 // stress at a free corner goes with distance^(λ−1) (M. L. Williams, J. Appl.
 // Mech. 19 (1952) 526): at 90° of material λ is 2.7 and there is nothing to
-// resolve; up to 180° it falls to 1, and beyond the stress has no bound.
+// resolve; up to 180° it falls to 1, and beyond the stress has no bound: there λ
+// is about a half, and what the last element leaves reaches the factor with its
+// size to the power 2λ.
 func (g grading) cornerShare(c outline.Corner) float64 {
 	const smooth, flat = 100.0, 181.0 // what turns in by less than a degree is rounding of coordinates
 	switch {
 	case c.Degrees > flat:
-		return g.joint * g.joint * g.joint
+		return math.Pow(g.joint, 5)
 	case c.Degrees > smooth:
 		return g.joint
 	}
@@ -78,6 +82,10 @@ func (g grading) around(p *specimen.Part, sides []outline.Side, at r2.Vec) float
 	}
 	return least
 }
+
+// tiny is the smallest size at a corner, as a share of the part's: coordinates
+// have few digits left below it.
+const tiny = 1e-8
 
 // ends tells whether a curve begins or ends at a point.
 func ends(c outline.Curve, at r2.Vec) bool {

@@ -32,7 +32,12 @@ func (c *climb) refined(p *pair, s *shape, out *Computed) (*pair, error) {
 	spots := marked(s, out)
 	first, second := s.grading, secondGrading()
 	first.spots = append(append([]mesh.SpotWish(nil), s.grading.spots...), spots...)
-	second.spots = first.spots
+	// The second mesh is finer there by as much as tells: what is left of the
+	// error at a point that is not smooth goes with the size around it, and would
+	// be the same on both.
+	for _, spot := range first.spots {
+		second.spots = append(second.spots, mesh.SpotWish{At: spot.At, Size: spot.Size / 2})
+	}
 	next := newPair(p.part, p.long, first, second)
 	made, err := next.first()
 	if err != nil || len(made.mesh.Triangles) <= len(s.mesh.Triangles) || tooLarge(made, firstOrder+enoughRungs+1, c.load) {
