@@ -11,6 +11,9 @@ func (b box) middle() (x, y float64) { return (b.X0 + b.X1) / 2, (b.Y0 + b.Y1) /
 // grown gives the box with a margin added all round.
 func (b box) grown(m float64) box { return box{b.X0 - m, b.Y0 - m, b.X1 + m, b.Y1 + m} }
 
+// widened gives the box with a margin added on its left and right.
+func (b box) widened(m float64) box { return box{b.X0 - m, b.Y0, b.X1 + m, b.Y1} }
+
 // meets tells whether two boxes share an area.
 func (b box) meets(o box) bool {
 	return b.X0 < o.X1 && o.X0 < b.X1 && b.Y0 < o.Y1 && o.Y0 < b.Y1

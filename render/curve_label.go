@@ -116,7 +116,7 @@ func (p *panel) beside(at point, off float64, lines []string) bool {
 		// The side of the block that looks at the point stands off by the distance.
 		x, y := at.X+d.X*p.u(off)-width*(1-d.X)/2, at.Y+d.Y*p.u(off)-height*(1-d.Y)/2
 		b := box{x, y, x + width, y + height}
-		if !p.frame.holds(b) || !p.free(b) {
+		if !p.frame.holds(b) || !p.free(b.widened(p.u(6))) {
 			continue
 		}
 		if off > 20 {
@@ -190,7 +190,7 @@ func spread(wishes, heights []float64, low, high float64) []float64 {
 func (p *panel) name(q point, text string) {
 	for _, d := range [8][4]float64{{0, -11, 0.5, 1}, {9, -9, 0, 1}, {13, 0, 0, 0.5}, {0, 11, 0.5, 0}, {9, 9, 0, 0}, {-13, 0, 1, 0.5}, {-9, 9, 1, 0}, {-9, -9, 1, 1}} {
 		at := q.plus(p.u(d[0]), p.u(d[1]))
-		if b := p.sheet.place(at, d[2], d[3], text, small); p.free(b) && p.frame.holds(b) {
+		if b := p.sheet.place(at, d[2], d[3], text, small); p.free(b.widened(p.u(6))) && p.frame.holds(b) {
 			p.onPaper(at, d[2], d[3], text, small, ink)
 			return
 		}

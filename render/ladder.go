@@ -56,7 +56,7 @@ const (
 func newLadder(f *verify.Finding, part *specimen.Part) ladder {
 	c := &f.Computed
 	l := ladder{
-		title:  part.Name + ", " + string(f.Load.Name) + ": ladder of factors",
+		title:  headText(part, f) + ": ladder of factors",
 		note:   dimensionText(part) + "; " + nominalText(f.Load) + "; bars of rungs: traction left on the free surface, at unit nominal stress",
 		answer: c.Factor.Value, bar: c.Factor.Uncertainty,
 	}

@@ -69,7 +69,7 @@ func TestPictureLayout(t *testing.T) {
 func TestSketchLayout(t *testing.T) {
 	for _, c := range proportions {
 		t.Run(c.name, func(t *testing.T) {
-			checkLayout(t, SketchFigure(newPart(t, c.family, c.dims)).sheet(FigureOptions{Pixels: 800}))
+			checkFigure(t, SketchFigure(newPart(t, c.family, c.dims)))
 		})
 	}
 }

@@ -16,7 +16,7 @@ func SectionFigure(f *verify.Finding, part *specimen.Part) (*Figure, error) {
 	if err != nil {
 		return nil, err
 	}
-	plot := Plot{Title: part.Name + ", " + string(f.Load.Name) + ": stress below the root", Note: dimensionText(part) + "; " + nominalText(f.Load)}
+	plot := Plot{Title: headText(part, f) + ": stress below the root", Note: dimensionText(part) + "; " + nominalText(f.Load)}
 	near := profile.Length
 	if d := steep(profile); 8*d < profile.Length {
 		near = roundStep(4 * d)
@@ -28,6 +28,16 @@ func SectionFigure(f *verify.Finding, part *specimen.Part) (*Figure, error) {
 		plot.Diagrams = append(plot.Diagrams, close)
 	}
 	return Chart(plot)
+}
+
+// headText says what is plotted: the part by its title, where it has one of its
+// own, and the load.
+func headText(part *specimen.Part, f *verify.Finding) string {
+	name := part.Title
+	if name == "" {
+		name = part.Name
+	}
+	return name + ", " + string(f.Load.Name)
 }
 
 // steep is the depth at which half of what the notch adds to the nominal stress
@@ -163,7 +173,7 @@ func SurfaceFigure(f *verify.Finding, part *specimen.Part) (*Figure, error) {
 			d.Stops = append(d.Stops, Stop{f.Computed.Peak.Side + end.text, end.at})
 		}
 	}
-	return Chart(Plot{Title: part.Name + ", " + string(f.Load.Name) + ": stress along the notch",
+	return Chart(Plot{Title: headText(part, f) + ": stress along the notch",
 		Note: dimensionText(part) + "; " + nominalText(f.Load) + "; peak " + peakPlace(f, part), Diagrams: []Diagram{d.upTo(last)}})
 }
 

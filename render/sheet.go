@@ -103,9 +103,10 @@ func (s *sheet) rectangle(b box, width float64, c color.Color) {
 	s.dc.Stroke()
 }
 
-// polyline appends points to the current path.
+// polyline appends points to the current path, without corners that no eye sees:
+// the rasteriser's strokes lose chords of a fraction of a pixel.
 func (s *sheet) polyline(ps []point) {
-	for i, p := range ps {
+	for i, p := range simplified(ps) {
 		if i == 0 {
 			s.dc.MoveTo(p.X, p.Y)
 		} else {

@@ -75,7 +75,7 @@ func (study Study) factors() Diagram {
 
 // errors is the diagram of what is known of the error of each rung.
 func (study Study) errors() Diagram {
-	d := Diagram{X: study.unknowns(), Y: Axis{Label: "error of the factor", Log: true}}
+	d := Diagram{X: study.unknowns(), Y: Axis{Label: "signs of the error", Log: true}}
 	changes, traction := Curve{Label: "change from the rung before", Marked: true}, Curve{Label: "traction left at the peak", Marked: true}
 	for _, p := range study.Points {
 		x := float64(p.Unknowns)
@@ -107,6 +107,6 @@ func (study Study) slope(changes []CurvePoint) (Curve, bool) {
 	first, last := changes[0], changes[n-1]
 	const above = 1.6 // clear of the curve itself
 	start := CurvePoint{X: first.X, Y: above * last.Y * math.Pow(last.X/first.X, study.Order/2)}
-	return Curve{Label: "order " + number.Compact(study.Order, 3), Line: Dashed,
+	return Curve{Label: "expected order " + number.Compact(study.Order, 3), Line: Dashed,
 		Points: []CurvePoint{start, {X: last.X, Y: above * last.Y}}}, true
 }

@@ -63,13 +63,16 @@ func hundredth(x float64) float64 {
 	return x
 }
 
-// unseen is how far, in units, a line may pass by a corner that is left out: a
-// twentieth of the narrowest line.
+// unseen is how far, in units of SVG or pixels, a line may pass by a corner that
+// is left out: a twentieth of the narrowest line.
 const unseen = 0.04
 
 // simplified leaves out the corners of a polyline that lie within unseen of
 // what remains (D. H. Douglas, T. K. Peucker, Cartographica 10 (1973) 112).
 func simplified(ps []point) []point {
+	if len(ps) < 3 {
+		return ps
+	}
 	keep := make([]bool, len(ps))
 	keep[0], keep[len(ps)-1] = true, true
 	for todo := [][2]int{{0, len(ps) - 1}}; len(todo) > 0; {

@@ -10,6 +10,8 @@ import (
 	"strings"
 	"testing"
 
+	"github.com/fogleman/gg"
+
 	"notchproof/scf"
 )
 
@@ -143,5 +145,23 @@ func TestSimplified(t *testing.T) {
 		if least > unseen {
 			t.Fatalf("%v is %.3f off", p, least)
 		}
+	}
+}
+
+// A tiny arc is drawn: the rasteriser alone would lose chords of a fraction of a
+// pixel.
+func TestTinyArcsAreDrawn(t *testing.T) {
+	im := blank(40, 40)
+	s := newSheetOn(pixels{gg.NewContextForRGBA(im)}, 1, sizeOf(im))
+	ps := make([]point, 49)
+	for i := range ps {
+		sin, cos := math.Sincos(math.Pi / 2 * float64(i) / 48)
+		ps[i] = point{20 + 2.3*cos, 20 + 2.3*sin}
+	}
+	s.pen(ink, wide)
+	s.polyline(ps)
+	s.dc.Stroke()
+	if c := im.RGBAAt(21, 21); c.G > 128 {
+		t.Errorf("the middle of the arc is as light as %d", c.G)
 	}
 }

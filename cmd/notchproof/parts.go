@@ -29,7 +29,8 @@ the part as a part file with its outline, to start one of your own from.
 
 func runParts(c *call) (int, error) {
 	var q questions
-	file := c.flags.StringP("output", "o", "", "write a dimensioned sketch to this .png or .svg file")
+	var out figureFile
+	out.flags(c.flags, "write a dimensioned sketch to this .png or .svg file")
 	asFile := c.flags.Bool("as-file", false, "print the part as a part file")
 	q.partFlags(c.flags)
 	args, err := c.parse()
@@ -40,7 +41,7 @@ func runParts(c *call) (int, error) {
 		if *asFile {
 			return 0, &inputError{text: "no family to write", hint: "name one, as in: parts shaft-shoulder --as-file"}
 		}
-		if *file != "" {
+		if out.name != "" {
 			return 0, &inputError{text: "no family to sketch", hint: "name one, as in: parts shaft-shoulder -o sketch.png"}
 		}
 		return exitAgrees, listFamilies(c.stdout)
@@ -62,7 +63,7 @@ func runParts(c *call) (int, error) {
 	if err != nil {
 		return 0, err
 	}
-	if err := checkOutput(*file, figureFormats...); err != nil {
+	if err := out.check(); err != nil {
 		return 0, err
 	}
 	if *asFile {
@@ -71,13 +72,13 @@ func runParts(c *call) (int, error) {
 	if err := describe(c.stdout, family, part, len(args) > 1); err != nil {
 		return 0, err
 	}
-	if *file == "" {
+	if out.name == "" {
 		return exitAgrees, nil
 	}
-	if err := writeFigure(*file, render.SketchFigure(part), render.FigureOptions{}); err != nil {
+	if err := out.write(render.SketchFigure(part)); err != nil {
 		return 0, err
 	}
-	fmt.Fprintf(c.stdout, "\nsketch written to %s\n", *file)
+	fmt.Fprintf(c.stdout, "\nsketch written to %s\n", out.name)
 	return exitAgrees, nil
 }
 

@@ -32,7 +32,7 @@ type command struct {
 // commands lists all verbs in the order of the help text.
 func commands() []*command {
 	return []*command{
-		checkCommand(), studyCommand(), pictureCommand(), reportCommand(), partsCommand(),
+		checkCommand(), studyCommand(), pictureCommand(), plotCommand(), reportCommand(), partsCommand(),
 		strengthCommand(), sizeCommand(), toleranceCommand(), selfcheckCommand(),
 	}
 }

@@ -46,6 +46,10 @@ func TestExitStatuses(t *testing.T) {
 		{"study bar-shoulder D=60mm d=40mm r=4mm --order 3 --rungs 3", exitAgrees, "grid convergence index"},
 		{"study bar-shoulder D=60mm d=40mm r=4mm --by order -o " + filepath.Join(dir, "é_ü.png"), exitAgrees, "plot written"},
 		{"study bar-shoulder D=60mm d=40mm r=4mm --order 3 --rungs 3 -o " + filepath.Join(dir, "s.svg"), exitAgrees, "plot written"},
+		{"plot shaft-shoulder D=72mm d=48mm r=3mm --load bending -o " + filepath.Join(dir, "section.svg"), exitAgrees, "plot of the section written"},
+		{"plot bar-hole W=60mm d=20mm --load tension --of surface --width 80mm -o " + filepath.Join(dir, "surface.png"), exitAgrees, "plot of the surface written"},
+		{"plot shaft-shoulder D=72mm d=48mm r=3mm --load bending --claim 1.85 --of ladder -o " + filepath.Join(dir, "ladder.svg"), exitDisagrees, "plot of the ladder written"},
+		{"plot bar-shoulder D=60mm d=40mm r=0 --load tension -o " + filepath.Join(dir, "corner.svg"), exitUndecided, "no factor and no plot"},
 		{"parts shaft-groove -o " + filepath.Join(dir, "p.SVG"), exitAgrees, "sketch written"},
 		{"picture bar-shoulder D=60mm d=40mm r=4mm --width 400 -o " + filepath.Join(dir, "p.png"), exitAgrees, "picture written"},
 		{"parts", exitAgrees, "shaft-shoulder"},
@@ -130,6 +134,12 @@ func TestBadInput(t *testing.T) {
 		{"picture bar-shoulder D=60 d=40 r=4 -o no/such/folder/p.png", "folder", "make"},
 		{"picture bar-shoulder D=60 d=40 r=4 -o p.png --width 3", "--width 3", "400"},
 		{"selfcheck bar-hole", `"bar-hole": takes no part`, "check PART"},
+		{"plot bar-shoulder D=60 d=40 r=4", "no file", "-o"},
+		{"plot bar-shoulder D=60 d=40 r=4 -o s.pdf", `"s.pdf"`, "ending"},
+		{"plot bar-shoulder D=60 d=40 r=4 --of edge -o s.svg", `--of "edge"`, "ladder"},
+		{"plot bar-shoulder D=60 d=40 r=4 --width wide -o s.svg", `--width "wide"`, "160mm"},
+		{"plot bar-shoulder D=60 d=40 r=4 --width 5mm -o s.svg", "--width 5mm", "400"},
+		{"study bar-shoulder D=60 d=40 r=4 --width 80mm --dpi 10 -o s.png", "--dpi 10", "300"},
 		{"parts bar-sholder", "no such family", "bar-shoulder"},
 		{"parts -o s.png", "no family", "shaft-shoulder"},
 	} {
@@ -148,7 +158,7 @@ func TestBadInput(t *testing.T) {
 			t.Errorf("%s: want %q and %q in\n%s", row.line, row.says, row.hint, errs)
 		}
 	}
-	for _, name := range []string{"p.png", "p.jpg", "s.png"} {
+	for _, name := range []string{"p.png", "p.jpg", "s.png", "s.svg"} {
 		if _, err := os.Stat(name); err == nil {
 			t.Errorf("%s was written by a run that failed", name)
 		}

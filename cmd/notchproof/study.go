@@ -42,11 +42,12 @@ of arc for errors of 5, 2 and 1 % at order 1 and 2, read at the nodes as usual.
 
 func runStudy(c *call) (int, error) {
 	var q questions
+	var out figureFile
 	by := c.flags.String("by", "size", "what is refined: size or order")
 	order := c.flags.Int("order", 0, "order of the elements in a study by size, 1 to 8 (default 2)")
 	rungs := c.flags.Int("rungs", 0, "number of meshes in a study by size, 3 to 6 (default 4)")
 	size := c.flags.String("size", "", "length of the elements at the notch that a study by size begins with, as in 1mm")
-	file := c.flags.StringP("output", "o", "", "write the plot to this .png or .svg file")
+	out.flags(c.flags, "write the plot to this .png or .svg file")
 	q.loadFlag(c.flags)
 	q.partFlags(c.flags)
 	args, err := c.parse()
@@ -65,7 +66,7 @@ func runStudy(c *call) (int, error) {
 	if err != nil {
 		return 0, err
 	}
-	if err := checkOutput(*file, figureFormats...); err != nil {
+	if err := out.check(); err != nil {
 		return 0, err
 	}
 	debug.SetGCPercent(100)
@@ -87,15 +88,15 @@ func runStudy(c *call) (int, error) {
 	if _, err := io.WriteString(c.stdout, own); err != nil {
 		return 0, err
 	}
-	if *file != "" {
+	if out.name != "" {
 		figure, err := render.StudyFigure(plotOf(s))
 		if err != nil {
 			return 0, err
 		}
-		if err := writeFigure(*file, figure, render.FigureOptions{}); err != nil {
+		if err := out.write(figure); err != nil {
 			return 0, err
 		}
-		fmt.Fprintf(c.stdout, "\nplot written to %s\n", *file)
+		fmt.Fprintf(c.stdout, "\nplot written to %s\n", out.name)
 	}
 	if !s.Estimate.Status.Settled() {
 		return exitUndecided, nil
