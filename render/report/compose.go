@@ -97,7 +97,7 @@ func findingOf(f *verify.Finding, p *specimen.Part) Finding {
 		out.ClaimMesh = claimMeshOf(m)
 	}
 	for _, m := range f.Misreadings {
-		out.Misreadings = append(out.Misreadings, Misreading{m.What, m.Factor})
+		out.Misreadings = append(out.Misreadings, Misreading{m.What, m.Factor, m.From, m.Chance})
 	}
 	for _, k := range f.Checks {
 		out.Checks = append(out.Checks, Check{k.Name, numberOf(k.Value), numberOf(k.Limit), k.Above, k.Passed})

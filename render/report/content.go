@@ -166,6 +166,8 @@ type MeshReading struct {
 type Misreading struct {
 	What   string  `json:"what"`
 	Factor float64 `json:"factor"`
+	From   string  `json:"from"`
+	Chance float64 `json:"chance"` // of meeting some slip as well by accident
 }
 
 // Check is a condition without which no factor is judged.

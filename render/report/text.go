@@ -164,7 +164,8 @@ func (t *textSheet) comparisons(f *Finding) {
 		}
 	}
 	for _, m := range f.Misreadings {
-		t.paragraph("would be explained by: ", m.What+", "+number.Compact(m.Factor, 4))
+		t.paragraph("would be explained by: ", fmt.Sprintf("%s, %s (%s); so by chance in %s of wrong claims",
+			m.What, number.Compact(m.Factor, 4), m.From, number.Percent(m.Chance, 0)))
 	}
 }
 

@@ -1,7 +1,5 @@
 package misreading
 
-import "fmt"
-
 // chart: the claim is what a chart for this very case gives, and the chart is
 // wrong. No slip of the reader's; said first because nothing else need be
 // looked for.
@@ -10,7 +8,7 @@ func chart(q *Question) []wrong {
 	for _, v := range q.handbook() {
 		if v.InRange {
 			list = append(list, wrong{
-				what:  fmt.Sprintf("no slip: read well from %s, which is itself off here", v.ID),
+				what:  "no slip: read well off a chart that is itself off here",
 				known: []value{{v.Factor, v.ID}},
 			})
 		}
@@ -24,7 +22,7 @@ func outsideRange(q *Question) []wrong {
 	for _, v := range q.handbook() {
 		if !v.InRange {
 			list = append(list, wrong{
-				what:  fmt.Sprintf("%s used outside its range", v.ID),
+				what:  "a chart used outside its range",
 				known: []value{{v.Factor, v.ID}},
 			})
 		}
