@@ -1,6 +1,8 @@
 package main
 
 import (
+	"runtime/debug"
+
 	"notchproof/scf"
 	"notchproof/verify/specimen"
 )
@@ -59,3 +61,7 @@ func (s *shape) load() (scf.Load, error) {
 	}
 	return loads[0], nil
 }
+
+// collectSometimes lets memory be used again in a run that solves dozens of
+// parts: fresh pages cost more than the collector does.
+func collectSometimes() { debug.SetGCPercent(400) }

@@ -65,6 +65,7 @@ func runSize(c *call) (int, error) {
 	if err := s.ask(&q, args); err != nil {
 		return 0, err
 	}
+	collectSometimes()
 	bar := c.progress()
 	s.question.Progress = bar.tell
 	s.answer, err = s.question.Find(c.ctx)

@@ -93,6 +93,9 @@ func (s *sizeQuestion) choose() error {
 		err.text = "--for " + err.text
 		return err
 	}
+	if s.dimension != "r" && family.Sharp(s.shape.dims) {
+		return &inputError{text: "r=0: a sharp corner has no factor, whatever " + s.dimension + " is", hint: "give the radius it is made with, or seek r itself"}
+	}
 	for _, d := range family.Dimensions {
 		if _, given := s.shape.dims[d.Name]; !given && !d.Optional && d.Name != s.dimension {
 			return &inputError{text: fmt.Sprintf("%s: missing, the %s", d.Name, d.Meaning), hint: "all but the dimension that is sought are needed: " + family.Usage()}

@@ -26,6 +26,7 @@ func TestSizeAndToleranceStatuses(t *testing.T) {
 		{"size shaft-shoulder D=72mm d=48mm --kt 1.5 --load torsion", exitAgrees, "where Kts = 1."},
 		{"size shaft-shoulder D=72mm d=48mm r=3mm --kt 1 --load torsion", exitNotMet, "no r meets it"},
 		{"size shaft-shoulder D=72mm d=48mm r=3mm --kt 100 --load torsion", exitAgrees, "every r"},
+		{"size shaft-shoulder D=72mm d=48mm r=0 --kt 1.5 --load torsion --bare", exitAgrees, "where Kts = 1."},
 		{"size " + file + " --kt 1.5", exitAgrees, "seat\n"},
 		{"size shaft-groove D=60 d=50 r=2 --for angle --kt 1.7 --load torsion", exitAgrees, "°"},
 		{"tolerance shaft-shoulder D=72mm d=48mm r=3mm r=±0.2mm --load torsion", exitAgrees, "by r"},
@@ -65,7 +66,9 @@ func TestSizeAndToleranceRefuse(t *testing.T) {
 		{good + "r=±0.1 r=±0.2", "second tolerance of r", "once"},
 		{good + "q=±0.1", `"q": no such dimension`, "[ra]"},
 		{good + "ra=±0.1", "not given", "ra"},
-		{good + "r=±4mm", "allow r=-1mm", "narrow"},
+		{good + "r=±3mm", "allow r=0mm, which has no factor", "narrow"},
+		{good + "r=±4mm", "allow r=-1mm, which has no factor", "narrow"},
+		{"tolerance shaft-shoulder D=72 d=48 r=0 d=±1", "sharp corner", "radius"},
 		{"tolerance shaft-shoulder D=72 d=48 r=3 r=±1mm", "the dimensions have none", "leave"},
 		{"tolerance " + own + " r=±0.1", "no named dimensions", "family"},
 	} {

@@ -4,6 +4,7 @@ import (
 	"fmt"
 	"io"
 	"strings"
+	"unicode/utf8"
 
 	"notchproof/render/number"
 	"notchproof/scf"
@@ -75,11 +76,10 @@ func (s *sizeQuestion) known(x, bar float64) string {
 // at writes what was measured.
 func (s *sizeQuestion) at(r sizing.Reading) string {
 	factor := fmt.Sprintf("%s = %s", s.symbol(), number.Uncertain(r.Factor, r.FactorBar))
-	if !s.limit.Given() {
-		return factor
-	}
-	text := number.Uncertain(s.limit.Like(r.Value).Value(), s.limit.Like(r.Uncertainty).Value()) + "\u00a0" + s.limit.Unit()
+	text := s.bare(r)
 	switch {
+	case !s.limit.Given():
+		return factor
 	case s.load != "":
 		return text + ", " + factor
 	case s.safety > 0:
@@ -90,6 +90,14 @@ func (s *sizeQuestion) at(r sizing.Reading) string {
 		text += ", on the " + r.Where
 	}
 	return text
+}
+
+// bare writes the measure alone.
+func (s *sizeQuestion) bare(r sizing.Reading) string {
+	if !s.limit.Given() {
+		return number.Uncertain(r.Factor, r.FactorBar)
+	}
+	return number.Uncertain(s.limit.Like(r.Value).Value(), s.limit.Like(r.Uncertainty).Value()) + "\u00a0" + s.limit.Unit()
 }
 
 func (s *sizeQuestion) answerText(b *strings.Builder, st style) {
@@ -138,34 +146,54 @@ func (s *sizeQuestion) searchText(b *strings.Builder, st style) {
 	}
 }
 
-// alternativesText is the table of other ways.
+// alternativesText is the table of other ways, the answer first.
 func (s *sizeQuestion) alternativesText(b *strings.Builder, st style) {
 	if len(s.alternatives) == 0 {
 		return
 	}
-	fmt.Fprintf(b, "\n%s\n", st.bold("other ways in the same envelope"))
+	head := s.symbol()
+	if s.limit.Given() {
+		head = "stress"
+	}
+	rows := [][]string{{"other ways in the same envelope", head, "along the axis", "elsewhere"}}
 	if a := s.answer; a.Outcome == sizing.Met {
 		if p := s.part(a.At.At); p != nil {
-			s.rowText(b, "the answer", s.dimension+" = "+s.length(a.At.At), a.At.Reading, s.alongText(sizing.Length(p)), "")
+			rows = append(rows, []string{"the answer, " + s.dimension + " = " + s.known(a.At.At, a.Bar), s.bare(a.At.Reading), s.alongText(sizing.Length(p)), ""})
 		}
 	}
 	for i := range s.alternatives {
 		a := &s.alternatives[i]
-		meets := ""
+		elsewhere := s.changesText(a)
 		if !a.Meets {
-			meets = st.bad("not enough")
+			elsewhere = strings.TrimPrefix(elsewhere+"; does not meet it", "; ")
 		}
-		s.rowText(b, a.What, s.sizesText(a), a.Reading, s.costsText(a), meets)
+		rows = append(rows, []string{a.What + ", " + s.sizesText(a), s.bare(a.Reading), s.alongText(a.Length), elsewhere})
+	}
+	b.WriteString("\n")
+	for i, line := range columns(rows) {
+		if i == 0 {
+			line = st.bold(line)
+		}
+		fmt.Fprintf(b, "  %s\n", line)
 	}
 }
 
-func (s *sizeQuestion) rowText(b *strings.Builder, what, sizes string, r sizing.Reading, costs, meets string) {
-	fmt.Fprintf(b, "  %-34s %s\n", what, sizes)
-	fmt.Fprintf(b, "    %s; %s", s.at(r), costs)
-	if meets != "" {
-		fmt.Fprintf(b, "; %s", meets)
+// columns lines up the cells of rows of the same length.
+func columns(rows [][]string) (lines []string) {
+	width := make([]int, len(rows[0]))
+	for _, r := range rows {
+		for i, cell := range r {
+			width[i] = max(width[i], utf8.RuneCountInString(cell))
+		}
 	}
-	b.WriteString("\n")
+	for _, r := range rows {
+		var b strings.Builder
+		for i, cell := range r {
+			b.WriteString(cell + strings.Repeat(" ", width[i]-utf8.RuneCountInString(cell)+2))
+		}
+		lines = append(lines, strings.TrimRight(b.String(), " "))
+	}
+	return lines
 }
 
 // sizesText writes the dimensions of an alternative; the one that was sought
@@ -197,16 +225,25 @@ func (s *sizeQuestion) lengthOf(z sizing.Size) string {
 }
 
 func (s *sizeQuestion) alongText(length float64) string {
-	return "takes " + number.Length(round(length, 3), s.shape.unit) + " along the axis"
+	return number.Length(round(length, 3), s.shape.unit)
 }
 
-// costsText says what an alternative takes.
-func (s *sizeQuestion) costsText(a *sizing.Alternative) string {
-	words := []string{s.alongText(a.Length)}
+// changesText says what an alternative changes elsewhere.
+func (s *sizeQuestion) changesText(a *sizing.Alternative) string {
+	var words []string
 	for _, z := range a.Changes {
 		words = append(words, z.Name+" "+signedText(round(z.Value, 3))+noBreakUnit(s.shape.unit))
 	}
 	return strings.Join(words, ", ")
+}
+
+// costsText says all that an alternative takes.
+func (s *sizeQuestion) costsText(a *sizing.Alternative) string {
+	text := s.alongText(a.Length) + " along the axis"
+	if more := s.changesText(a); more != "" {
+		text += ", " + more
+	}
+	return text
 }
 
 // givenText writes the dimensions as given, in the order of the family's list.

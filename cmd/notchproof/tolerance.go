@@ -48,6 +48,7 @@ func runTolerance(c *call) (int, error) {
 	if err != nil {
 		return 0, err
 	}
+	collectSometimes()
 	bar := c.progress()
 	question.Progress = bar.tell
 	answer, err := question.Find(c.ctx)
@@ -88,6 +89,9 @@ func (q *questions) tolerance(args []string) (*tolerance.Question, *shape, error
 	if err := s.family.Check(s.dims); err != nil {
 		return nil, nil, err
 	}
+	if s.family.Sharp(s.dims) {
+		return nil, nil, &inputError{text: "r=0: a sharp corner has no factor", hint: "give the radius it is made with"}
+	}
 	if len(words) == 0 {
 		return nil, nil, &inputError{text: "no tolerances", hint: "write them after the dimensions, as in r=±0.2mm or d=+0.05/-0"}
 	}
@@ -122,7 +126,7 @@ func cornerFault(err error, q *tolerance.Question) error {
 		words = append(words, fmt.Sprintf("%s=%.6g%s", d.Name, corner.Dims[d.Name], unitOf(q.Family, d.Name, q.Unit)))
 	}
 	return &inputError{
-		text: fmt.Sprintf("the tolerances allow %s, which cannot be drawn: %v", strings.Join(words, " "), corner.Err),
+		text: fmt.Sprintf("the tolerances allow %s, which has no factor: %v", strings.Join(words, " "), corner.Err),
 		hint: "narrow the tolerances",
 	}
 }

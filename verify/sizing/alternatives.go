@@ -39,7 +39,9 @@ type way struct {
 	what    string
 	sizes   []Size
 	sought  string
-	within  Interval
+	within  Interval // from the part as it is, towards what helps
+	guess   float64  // where to begin
+	known   *Reading // the measure at within.From, nil where it is not known
 	draw    func(x float64) (*specimen.Part, error)
 	changes func(x float64) []Size
 }
@@ -48,7 +50,10 @@ type way struct {
 // own make it as large as the limit asks for; the radius stays what the part has
 // now where that is not enough, else half of the answer.
 func (q *Question) Alternatives(ctx context.Context, a *Answer) ([]Alternative, error) {
-	ways := q.ways(a)
+	ways, err := q.ways(ctx, a)
+	if err != nil {
+		return nil, err
+	}
 	out, errs := make([]*Alternative, len(ways)), make([]error, len(ways))
 	var failed atomic.Bool
 	each(len(ways), q.workers(), func(i int) {
@@ -81,7 +86,7 @@ func (q *Question) try(ctx context.Context, w *way) (*Alternative, error) {
 	if w.sought == "" {
 		s, err = sub.sample(ctx, w.within.From, Effort{Target: q.target(), Workers: 1})
 	} else {
-		s, alt.Bar, err = sub.local(ctx, w.within)
+		s, alt.Bar, err = sub.local(ctx, w)
 		alt.Sizes = append(alt.Sizes, Size{w.sought, s.At})
 	}
 	if err != nil || !s.Decided {
@@ -98,28 +103,46 @@ func (q *Question) try(ctx context.Context, w *way) (*Alternative, error) {
 	return alt, nil
 }
 
-// local looks for the limit between two sizes, of which three are tried first;
-// where none keeps it the best is returned. It is enough to be at the limit
-// within the bar.
-func (q *Question) local(ctx context.Context, in Interval) (Sample, float64, error) {
+// local looks for the limit between two sizes, from the first, which is the
+// part as it is, towards the second. It begins at a guess and steps out until
+// the limit lies between two samples; where it never does the best is returned.
+func (q *Question) local(ctx context.Context, w *way) (Sample, float64, error) {
 	c := coordinate{}
 	s := &scan{}
-	for _, x := range []float64{in.From, math.Sqrt(in.From * in.To), in.To} {
-		sample, err := q.sample(ctx, x, Effort{Target: scanTarget, Workers: 1})
+	if w.known != nil {
+		s.add(q, c, Sample{w.within.From, *w.known})
+	}
+	from, to := c.of(w.within.From), c.of(w.within.To)
+	u, stride := c.of(w.guess), math.Copysign(0.2, to-from)
+	before := -1
+	for range 12 {
+		sample, err := q.sample(ctx, c.back(u), Effort{Target: scanTarget, Workers: 1})
 		if err != nil {
 			return Sample{}, 0, err
 		}
-		if s.add(q, c, sample); sample.Decided && len(s.nodes) > 1 && sample.Value <= q.Limit {
+		s.add(q, c, sample)
+		if before, _ = s.crossing(); before >= 0 {
 			break
 		}
+		next := u + stride // not enough, or not to be judged
+		if sample.Decided && sample.Value <= q.Limit {
+			next = u - stride
+		}
+		next = math.Max(math.Min(next, math.Max(from, to)), math.Min(from, to))
+		if next == u {
+			break
+		}
+		u, stride = next, 2*stride
 	}
-	if len(s.nodes) == 0 {
+	switch {
+	case len(s.nodes) == 0:
 		return Sample{}, 0, nil
-	}
-	before, _ := s.crossing()
-	if before < 0 {
-		best := s.nodes[s.best()].At
-		sample, err := q.sample(ctx, best, Effort{Target: q.target(), Workers: 1})
+	case before < 0:
+		x, err := q.lowest(ctx, s, c, 2)
+		if err != nil {
+			return Sample{}, 0, err
+		}
+		sample, err := q.sample(ctx, x, Effort{Target: q.target(), Workers: 1})
 		return sample, 0, err
 	}
 	left, right, beyond := s.ends(before)
@@ -160,7 +183,7 @@ func (q *Question) familyWay(what string, family *scf.Family, base scf.Dims, siz
 		return full
 	}
 	draw := func(x float64) (*specimen.Part, error) { return specimen.New(family, with(x), q.Unit, q.Options) }
-	w := way{what: what, sizes: sizes, sought: sought, within: within, draw: draw}
+	w := way{what: what, sizes: sizes, sought: sought, within: within, guess: math.Sqrt(within.From * within.To), draw: draw}
 	if sought == "" {
 		return w, family.Check(with(0)) == nil
 	}
@@ -169,6 +192,7 @@ func (q *Question) familyWay(what string, family *scf.Family, base scf.Dims, siz
 			break
 		}
 		w.within.To = math.Sqrt(w.within.From * w.within.To)
+		w.guess = w.within.To
 	}
 	return w, family.Check(with(w.within.From)) == nil && family.Check(with(w.within.To)) == nil && w.within.To != w.within.From
 }

@@ -84,7 +84,10 @@ func (q *Question) Find(ctx context.Context) (*Answer, error) {
 	case s.nodes[0].f <= 0:
 		err = q.finish(ctx, a, s.nodes[0].At, Throughout)
 	default:
-		err = q.least(ctx, a, s, c)
+		var x float64
+		if x, err = q.lowest(ctx, s, c, 8); err == nil {
+			err = q.finish(ctx, a, x, Beyond)
+		}
 	}
 	for _, n := range s.nodes {
 		a.Scanned = append(a.Scanned, n.Sample)
@@ -125,25 +128,29 @@ func (q *Question) bar(c coordinate, end node, others []node) float64 {
 	return (end.Uncertainty + math.Abs(end.Value-q.Limit)) / slope
 }
 
-// least finds the lowest measure there is, where none keeps the limit: by
-// thirds of the bracket around the lowest point of the scan, until the change is
-// below the bar of a scan.
-func (q *Question) least(ctx context.Context, a *Answer, s *scan, c coordinate) error {
+// lowest finds where the measure is lowest, when none keeps the limit: by
+// halves of the bracket around the lowest point known, until neither the value
+// nor its neighbours differ by more than the bars of a scan, or for a number of
+// rounds.
+func (q *Question) lowest(ctx context.Context, s *scan, c coordinate, rounds int) (float64, error) {
 	i := s.best()
-	for range 8 {
+	for range rounds {
 		if i == 0 || i == len(s.nodes)-1 {
 			break // at the end of what can be drawn
 		}
 		low, old := s.nodes[i], s.nodes[i].f
 		more, err := q.samples(ctx, []float64{c.back((s.nodes[i-1].u + low.u) / 2), c.back((low.u + s.nodes[i+1].u) / 2)}, scanTarget)
 		if err != nil {
-			return err
+			return 0, err
 		}
 		s.add(q, c, more...)
 		i = s.best()
+		if i == 0 || i == len(s.nodes)-1 {
+			break
+		}
 		if flat := math.Max(s.nodes[i-1].f, s.nodes[i+1].f) - s.nodes[i].f; old-s.nodes[i].f < 1e-3 && flat < 1e-3 {
 			break
 		}
 	}
-	return q.finish(ctx, a, s.nodes[i].At, Beyond)
+	return s.nodes[i].At, nil
 }

@@ -23,7 +23,7 @@ func (q *Question) Drawable() (Interval, error) {
 	lo, hi := q.stretch(trials)
 	if lo < 0 {
 		// What stands in the way is another dimension, or the given one.
-		x, given := q.Dims[q.Dimension]
+		x, given := q.given()
 		if !given {
 			x = trials[len(trials)/2]
 		}
@@ -59,7 +59,7 @@ func (q *Question) trials(kind scf.Dimension) []float64 {
 			xs = append(xs, -x)
 		}
 	}
-	if x, given := q.Dims[q.Dimension]; given && !slices.Contains(xs, x) {
+	if x, given := q.given(); given && !slices.Contains(xs, x) {
 		xs = append(xs, x)
 	}
 	slices.Sort(xs)
@@ -89,7 +89,7 @@ func (q *Question) ok(x float64) bool { return q.Family.Check(q.with(x)) == nil 
 // stretch is the run of trials that can be drawn: around the given value where
 // that is one of them, else the longest; lo is −1 where there is none.
 func (q *Question) stretch(trials []float64) (lo, hi int) {
-	given, has := q.Dims[q.Dimension]
+	given, has := q.given()
 	lo, hi = -1, -2
 	for i := 0; i < len(trials); i++ {
 		if !q.ok(trials[i]) {
@@ -164,7 +164,7 @@ func (q *Question) grid(kind scf.Dimension, in Interval) []float64 {
 			xs = append(xs, to-share*(to-from))
 		}
 	}
-	if x, given := q.Dims[q.Dimension]; given {
+	if x, given := q.given(); given {
 		xs = append(xs, x)
 	}
 	return apart(xs)

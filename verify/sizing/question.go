@@ -95,6 +95,13 @@ func (q *Question) kind() (scf.Dimension, error) {
 		Hint: "the dimensions of " + q.Family.Name + " are " + q.Family.Usage()}
 }
 
+// given is the value that the dimension has now. A sharp corner is none: it has
+// no factor to begin from.
+func (q *Question) given() (x float64, ok bool) {
+	x, ok = q.Dims[q.Dimension]
+	return x, ok && !(x == 0 && q.Family.Sharp(q.Dims))
+}
+
 // with are the dimensions with the one that is sought.
 func (q *Question) with(x float64) scf.Dims {
 	dims := maps.Clone(q.Dims)

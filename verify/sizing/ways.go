@@ -1,21 +1,27 @@
 package sizing
 
 import (
+	"context"
 	"math"
 
 	"notchproof/scf"
 )
 
 // ways lists what else a family offers.
-func (q *Question) ways(a *Answer) []way {
+func (q *Question) ways(ctx context.Context, a *Answer) (list []way, err error) {
 	if a.Outcome != Met && a.Outcome != Beyond {
-		return nil
+		return nil, nil
 	}
 	l := &wayList{q: q, answer: a.At.At, now: a.At.At / 2}
-	if x, given := q.Dims[q.Dimension]; given && (a.Outcome == Beyond || x < a.At.At) {
+	if x, given := q.given(); given && (a.Outcome == Beyond || x < a.At.At) {
 		l.now = x
 	} else if a.Outcome == Beyond {
-		return nil // nothing to keep
+		return nil, nil // nothing to keep
+	}
+	if q.ok(l.now) {
+		if l.known, err = q.knownAt(ctx, a, l.now); err != nil {
+			return nil, err
+		}
 	}
 	l.dims = q.Family.Complete(q.with(l.now))
 	switch {
@@ -28,14 +34,26 @@ func (q *Question) ways(a *Answer) []way {
 	default:
 		l.moreRadius()
 	}
-	return l.list
+	return l.list, nil
+}
+
+// knownAt is the measure of the part as it is, from the scan if it was there.
+func (q *Question) knownAt(ctx context.Context, a *Answer, x float64) (*Reading, error) {
+	for i := range a.Scanned {
+		if a.Scanned[i].At == x {
+			return &a.Scanned[i].Reading, nil
+		}
+	}
+	s, err := q.sample(ctx, x, Effort{Target: scanTarget, Workers: q.workers()})
+	return &s.Reading, err
 }
 
 // A wayList collects ways around the part as it is now.
 type wayList struct {
 	q      *Question
-	answer float64 // of the dimension that is sought
-	now    float64 // what the alternatives keep instead of it
+	answer float64  // of the dimension that is sought
+	now    float64  // what the alternatives keep instead of it
+	known  *Reading // the measure there
 	dims   scf.Dims
 	list   []way
 }
@@ -81,6 +99,7 @@ func (l *wayList) shrink(name, what string) {
 		keep = l.keep()
 	}
 	w, ok := l.q.familyWay(what, l.q.Family, l.dims, keep, name, Interval{x, x / 10})
+	w.known = l.known
 	w.changes = func(y float64) []Size { return []Size{{name, y - x}} }
 	l.add(w, ok)
 }
@@ -92,6 +111,7 @@ func (l *wayList) largerNet() {
 		return
 	}
 	w, ok := l.q.familyWay("larger net size", l.q.Family, l.dims, l.keep(), "d", Interval{d, D - 0.01*(D-d)})
+	w.known, w.guess = l.known, D-0.25*(D-d)
 	w.changes = func(x float64) []Size { return []Size{{"d", x - d}} }
 	l.add(w, ok)
 }
@@ -104,6 +124,10 @@ func (l *wayList) shoulder() {
 	if _, ok := q.Dims["ra"]; !ok {
 		given = l.now
 		w, ok := q.familyWay("elliptic fillet", q.Family, l.dims, l.keep(), "ra", Interval{l.now, 8 * l.now})
+		if longer := 1.1 * math.Sqrt(l.now*l.answer); longer > l.now && longer < w.within.To {
+			w.guess = longer
+		}
+		w.known = l.known
 		l.add(w, ok)
 		w, ok = q.familyWay("elliptic fillet, twice as long", q.Family, l.dims, []Size{{"r", l.now}, {"ra", 2 * l.now}}, "", Interval{})
 		l.add(w, ok)
@@ -119,8 +143,10 @@ func (l *wayList) shoulder() {
 		}
 		l.add(w, ok)
 	}
-	if most := 0.45 * step; l.dims["c"] == 0 && most > l.now/2 {
-		l.add(q.undercut(d, D, Interval{math.Min(l.now/2, most/4), most}), true)
+	if most := 0.45 * step; l.dims["c"] == 0 {
+		w := q.undercut(d, D, Interval{math.Min(l.now, most) / 4, most})
+		w.guess = math.Min(l.answer, most)
+		l.add(w, true)
 	}
 }
 
@@ -133,6 +159,7 @@ func (l *wayList) hole() {
 	a := l.now / 2
 	base := scf.Dims{"W": l.dims["W"], "a": a, "b": a}
 	w, ok := l.q.familyWay("elliptic hole of the same width", ellipse, base, []Size{{"a", a}}, "b", Interval{a, 8 * a})
+	w.known, w.guess = l.known, 1.2*a
 	l.add(w, ok)
 	w, ok = l.q.familyWay("elliptic hole, twice as long as wide", ellipse, base, []Size{{"a", a}, {"b", 2 * a}}, "", Interval{})
 	l.add(w, ok)
@@ -151,5 +178,6 @@ func (l *wayList) moreRadius() {
 		delete(base, "ra") // follows the radius
 	}
 	w, ok := l.q.familyWay("larger radius", l.q.Family, base, []Size{{l.q.Dimension, x}}, "r", Interval{r, 20 * r})
+	w.known, w.guess = l.known, math.Min(1.5*r, w.within.To)
 	l.add(w, ok)
 }

@@ -49,14 +49,14 @@ type Question struct {
 // defaultTarget is finer than a check's: differences between points are small.
 const defaultTarget = 2e-4
 
-// A CornerError is a place of the box that cannot be drawn.
+// A CornerError is a place of the box that cannot be drawn, or has no factor.
 type CornerError struct {
 	Dims scf.Dims
 	Err  error // a *scf.DimensionError
 }
 
 func (e *CornerError) Error() string {
-	return "within the tolerances lies a shape that cannot be drawn: " + e.Err.Error()
+	return "within the tolerances lies a shape that has no factor: " + e.Err.Error()
 }
 
 func (e *CornerError) Unwrap() error { return e.Err }
@@ -108,6 +108,9 @@ func (q *Question) solve(ctx context.Context, list [][]int) ([]Point, error) {
 		dims := q.dims(levels)
 		if parts[i], err = specimen.New(q.Family, dims, q.Unit, q.Options); err != nil {
 			return nil, &CornerError{dims, err}
+		}
+		if q.Family.Sharp(dims) {
+			return nil, &CornerError{dims, &scf.DimensionError{Name: "r", Reason: "a sharp corner has no factor, its stress grows without bound"}}
 		}
 	}
 	points, errs := make([]Point, len(list)), make([]error, len(list))
