@@ -47,6 +47,7 @@ type jsonSized struct {
 	Uncertainty       maybe   `json:"uncertainty"`
 	Stress            *maybe  `json:"stress,omitempty"` // in the unit of the limit
 	StressUncertainty *maybe  `json:"stressUncertainty,omitempty"`
+	Rough             bool    `json:"rough,omitempty"` // of one solve: the uncertainty is an allowance
 }
 
 type jsonInterval struct {
@@ -73,7 +74,7 @@ type jsonDimension struct {
 }
 
 func (s *sizeQuestion) sized(x sizing.Sample) jsonSized {
-	out := jsonSized{Value: x.At, Factor: maybe(x.Factor), Uncertainty: maybe(x.FactorBar)}
+	out := jsonSized{Value: x.At, Factor: maybe(x.Factor), Uncertainty: maybe(x.FactorBar), Rough: x.Rough}
 	if s.limit.Given() {
 		stress, bar := maybe(s.limit.Like(x.Value).Value()), maybe(s.limit.Like(x.Uncertainty).Value())
 		out.Stress, out.StressUncertainty = &stress, &bar

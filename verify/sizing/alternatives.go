@@ -84,7 +84,7 @@ func (q *Question) try(ctx context.Context, w *way) (*Alternative, error) {
 	var s Sample
 	var err error
 	if w.sought == "" {
-		s, err = sub.sample(ctx, w.within.From, Effort{Target: q.target(), Workers: 1})
+		s, err = sub.sample(ctx, w.within.From, sub.full())
 	} else {
 		s, alt.Bar, err = sub.local(ctx, w)
 		alt.Sizes = append(alt.Sizes, Size{w.sought, s.At})
@@ -116,7 +116,7 @@ func (q *Question) local(ctx context.Context, w *way) (Sample, float64, error) {
 	u, stride := c.of(w.guess), math.Copysign(0.2, to-from)
 	before := -1
 	for range 12 {
-		sample, err := q.sample(ctx, c.back(u), Effort{Target: scanTarget, Workers: 1})
+		sample, err := q.sample(ctx, c.back(u), q.rough())
 		if err != nil {
 			return Sample{}, 0, err
 		}
@@ -138,19 +138,18 @@ func (q *Question) local(ctx context.Context, w *way) (Sample, float64, error) {
 	case len(s.nodes) == 0:
 		return Sample{}, 0, nil
 	case before < 0:
-		x, err := q.lowest(ctx, s, c, 2)
+		x, err := q.lowest(ctx, s, c, q.rough(), 3)
 		if err != nil {
 			return Sample{}, 0, err
 		}
-		sample, err := q.sample(ctx, x, Effort{Target: q.target(), Workers: 1})
+		sample, err := q.sample(ctx, x, q.full())
 		return sample, 0, err
 	}
-	left, right, beyond := s.ends(before)
-	end, trail, err := q.refine(ctx, c, left, right, beyond)
-	if err != nil || !end.Decided {
-		return end.Sample, 0, err
+	end, others, ok, err := q.polish(ctx, c, s, before, q.rough())
+	if err != nil || !ok || !end.Decided {
+		return Sample{At: end.At}, 0, err
 	}
-	return end.Sample, q.bar(c, end, append(trail[:len(trail)-1:len(trail)-1], s.nodes...)), nil
+	return end.Sample, q.bar(c, end, others), nil
 }
 
 // Length is how far the notch reaches along the axis; of a shoulder, whose face

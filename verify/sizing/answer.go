@@ -67,7 +67,21 @@ func (q *Question) Find(ctx context.Context) (*Answer, error) {
 	if err != nil {
 		return nil, err
 	}
-	s, c, err := q.survey(ctx, kind, in)
+	a, err := q.search(ctx, kind, in, q.rough())
+	if err == nil && a == nil {
+		// What single solves promised did not hold.
+		a, err = q.search(ctx, kind, in, Effort{Target: scanTarget, Workers: q.workers()})
+	}
+	if err == nil && a == nil {
+		a = &Answer{Drawable: in, At: Sample{Reading: Reading{Why: "the measure jumps at the limit"}}}
+	}
+	return a, err
+}
+
+// search answers by a scan with the given effort. It gives nil where the full
+// ladders at the end do not bear out what the scan has shown.
+func (q *Question) search(ctx context.Context, kind scf.Dimension, in Interval, e Effort) (*Answer, error) {
+	s, c, err := q.survey(ctx, kind, in, e)
 	if err != nil {
 		return nil, err
 	}
@@ -78,47 +92,53 @@ func (q *Question) Find(ctx context.Context) (*Answer, error) {
 	}
 	a.Searched = Interval{s.nodes[0].At, s.nodes[len(s.nodes)-1].At}
 	before, falling := s.crossing()
+	ok := true
 	switch {
 	case before >= 0:
-		err = q.settle(ctx, kind, a, s, c, before, falling)
+		a.Falling = falling
+		ok, err = q.settle(ctx, kind, a, s, c, before, e)
 	case s.nodes[0].f <= 0:
-		err = q.finish(ctx, a, s.nodes[0].At, Throughout)
+		ok, err = q.finish(ctx, a, s.nodes[0].At, Throughout)
 	default:
 		var x float64
-		if x, err = q.lowest(ctx, s, c, 8); err == nil {
-			err = q.finish(ctx, a, x, Beyond)
+		if x, err = q.lowest(ctx, s, c, e, 8); err == nil {
+			ok, err = q.finish(ctx, a, x, Beyond)
 		}
 	}
 	for _, n := range s.nodes {
 		a.Scanned = append(a.Scanned, n.Sample)
 	}
+	if !ok {
+		return nil, err
+	}
 	return a, err
 }
 
-// finish solves the answer as well as was asked for.
-func (q *Question) finish(ctx context.Context, a *Answer, x float64, o Outcome) (err error) {
-	a.At, err = q.sample(ctx, x, Effort{Target: q.target(), Workers: q.workers()})
-	if err == nil && a.At.Decided {
-		a.Outcome = o
+// finish solves the answer as well as was asked for; false where it lies on the
+// other side of the limit than the scan had it.
+func (q *Question) finish(ctx context.Context, a *Answer, x float64, o Outcome) (ok bool, err error) {
+	a.At, err = q.sample(ctx, x, q.full())
+	if err != nil || !a.At.Decided {
+		return true, err
 	}
-	return err
+	a.Outcome = o
+	return (o == Throughout) == (a.At.Value <= q.Limit), nil
 }
 
 // settle finds the value in the bracket and rounds it.
-func (q *Question) settle(ctx context.Context, kind scf.Dimension, a *Answer, s *scan, c coordinate, before int, falling bool) error {
-	left, right, beyond := s.ends(before)
-	end, trail, err := q.refine(ctx, c, left, right, beyond)
-	a.At, a.Falling = end.Sample, falling
-	if err != nil || !end.Decided {
-		return err
+func (q *Question) settle(ctx context.Context, kind scf.Dimension, a *Answer, s *scan, c coordinate, before int, e Effort) (ok bool, err error) {
+	end, others, ok, err := q.polish(ctx, c, s, before, e)
+	a.At = end.Sample
+	if err != nil || !ok || !end.Decided {
+		return ok, err
 	}
-	others := append(trail[:len(trail)-1:len(trail)-1], s.nodes...)
 	a.Outcome, a.Bar = Met, q.bar(c, end, others)
 	a.Rounded, err = q.round(ctx, kind, a)
-	s.nodes = append(s.nodes, trail...)
+	end.f = 0 // the limit itself
+	s.nodes = append(s.nodes, end)
 	s.add(q, c)
 	a.Keeps = s.keeps(c)
-	return err
+	return true, err
 }
 
 // bar is how well the value at the limit is known: the bar of the measure there,
@@ -132,14 +152,14 @@ func (q *Question) bar(c coordinate, end node, others []node) float64 {
 // halves of the bracket around the lowest point known, until neither the value
 // nor its neighbours differ by more than the bars of a scan, or for a number of
 // rounds.
-func (q *Question) lowest(ctx context.Context, s *scan, c coordinate, rounds int) (float64, error) {
+func (q *Question) lowest(ctx context.Context, s *scan, c coordinate, e Effort, rounds int) (float64, error) {
 	i := s.best()
 	for range rounds {
 		if i == 0 || i == len(s.nodes)-1 {
 			break // at the end of what can be drawn
 		}
 		low, old := s.nodes[i], s.nodes[i].f
-		more, err := q.samples(ctx, []float64{c.back((s.nodes[i-1].u + low.u) / 2), c.back((low.u + s.nodes[i+1].u) / 2)}, scanTarget)
+		more, err := q.samples(ctx, []float64{c.back((s.nodes[i-1].u + low.u) / 2), c.back((low.u + s.nodes[i+1].u) / 2)}, e)
 		if err != nil {
 			return 0, err
 		}

@@ -12,13 +12,9 @@ import (
 // Factor measures the stress concentration factor under one load.
 func Factor(load scf.Load) Measure {
 	return func(ctx context.Context, p *specimen.Part, e Effort) (Reading, error) {
-		f, err := finding(ctx, p, load, e)
-		if err != nil {
-			return Reading{}, err
-		}
-		r := reading(f)
+		r, _, err := factor(ctx, p, load, e)
 		r.Value, r.Uncertainty = r.Factor, r.FactorBar
-		return r, nil
+		return r, err
 	}
 }
 
@@ -28,33 +24,44 @@ func Factor(load scf.Load) Measure {
 // unit of stress is the caller's.
 func PeakStress(load scf.Load, nominal, reference float64) Measure {
 	return func(ctx context.Context, p *specimen.Part, e Effort) (Reading, error) {
-		f, err := finding(ctx, p, load, e)
+		r, l, err := factor(ctx, p, load, e)
 		if err != nil {
-			return Reading{}, err
+			return r, err
 		}
-		r := reading(f)
-		stress := nominal * f.Load.Nominal.Net / reference
+		stress := nominal * l.Nominal.Net / reference
 		r.Value, r.Uncertainty = r.Factor*stress, r.FactorBar*stress
 		return r, nil
 	}
 }
 
-func finding(ctx context.Context, p *specimen.Part, load scf.Load, e Effort) (*verify.Finding, error) {
+// factor reads the factor of a part under one load.
+func factor(ctx context.Context, p *specimen.Part, load scf.Load, e Effort) (Reading, *specimen.Load, error) {
+	if e.Order > 0 {
+		return rough(ctx, p, load, e)
+	}
 	result, err := verify.Run(ctx, p, []scf.Load{load}, verify.Options{Target: e.Target, Workers: e.Workers})
 	if err != nil {
-		return nil, err
+		return Reading{}, nil, err
 	}
-	return &result.Findings[0], nil
-}
-
-// reading takes the factor off a finding.
-func reading(f *verify.Finding) Reading {
-	e := f.Computed.Factor
-	r := Reading{Factor: e.Value, FactorBar: e.Uncertainty, Decided: f.Verdict != verify.Undecided}
+	f := &result.Findings[0]
+	k := f.Computed.Factor
+	r := Reading{Factor: k.Value, FactorBar: k.Uncertainty, Decided: f.Verdict != verify.Undecided, Why: strings.Join(f.Warnings, "; ")}
 	if !r.Decided {
 		r.Why = strings.Join(f.Because, "; ")
-	} else {
-		r.Why = strings.Join(f.Warnings, "; ")
 	}
-	return r
+	return r, f.Load, nil
+}
+
+// rough reads the factor off one solve.
+func rough(ctx context.Context, p *specimen.Part, load scf.Load, e Effort) (Reading, *specimen.Load, error) {
+	value, err := verify.Rough(ctx, p, load, e.Order, e.Workers)
+	if err != nil {
+		return Reading{}, nil, err
+	}
+	allowance := scanAllowance
+	if e.Order >= rootOrder {
+		allowance = rootAllowance
+	}
+	l, _ := p.Load(load)
+	return Reading{Factor: value, FactorBar: allowance * value, Decided: true, Rough: true}, l, nil
 }

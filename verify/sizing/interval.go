@@ -138,6 +138,7 @@ func (q *Question) edge(good, bad float64) float64 {
 const (
 	leastSize = 1e-3
 	mostSize  = 10
+	almost    = 1e-3 // of the interval, left out before an end that another dimension sets
 )
 
 // grid is a coarse row of values that covers an interval: about one a decade
@@ -163,8 +164,10 @@ func (q *Question) grid(kind scf.Dimension, in Interval) []float64 {
 		for _, share := range []float64{0.5, 0.1, 0.01} {
 			xs = append(xs, to-share*(to-from))
 		}
+		// What is left between the last value and the end is less than anybody makes.
+		xs[n-1] = to - almost*(to-from)
 	}
-	if x, given := q.given(); given {
+	if x, given := q.given(); given && in.From <= x && x <= in.To {
 		xs = append(xs, x)
 	}
 	return apart(xs)

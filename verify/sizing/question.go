@@ -41,6 +41,9 @@ type Measure func(ctx context.Context, p *specimen.Part, e Effort) (Reading, err
 type Effort struct {
 	Target  float64 // relative uncertainty wished for
 	Workers int
+	// Order, when not 0, says that one solve of that order will do, for finding
+	// out where to look; a measure that has none solves the part as well as ever.
+	Order int
 }
 
 // A Reading is what a measure says of a part. Bars are absolute.
@@ -51,7 +54,9 @@ type Reading struct {
 	FactorBar   float64
 	Where       string // the place that governs, where there are several
 	Decided     bool   // the ladder has converged and the checks have passed
-	Why         string // why not, or what the factor does not tell
+	// Rough tells a value of one solve. Its Uncertainty is an allowance, no bar.
+	Rough bool
+	Why   string // why not decided, or what the factor does not tell
 }
 
 // Meets tells that a reading keeps a limit with its bar.
@@ -63,11 +68,17 @@ type Sample struct {
 	Reading
 }
 
+// Efforts of the search. One solve of order 3 is good to half a percent, of order
+// 4 to a tenth of that, on the meshes that ladders begin with; allowances are
+// several times that, and nothing is answered that a full ladder has not confirmed.
 const (
-	defaultTarget = 1e-3
-	// scanTarget is enough to bracket: three rungs, which every ladder has,
-	// reach it nearly always.
-	scanTarget = 1e-2
+	defaultTarget  = 1e-3
+	scanTarget     = 1e-2
+	scanOrder      = 3
+	rootOrder      = 4
+	scanAllowance  = 1e-2
+	rootAllowance  = 2e-3
+	rootResolution = 0.1 // of the target, to which the rough search is taken
 )
 
 func (q *Question) target() float64 {
@@ -146,12 +157,17 @@ func undecided(err error) Reading {
 
 // samples solves the part at several values, side by side and each on one
 // goroutine: that divides better than a factorisation does.
-func (q *Question) samples(ctx context.Context, xs []float64, target float64) ([]Sample, error) {
+func (q *Question) samples(ctx context.Context, xs []float64, e Effort) ([]Sample, error) {
 	out, errs := make([]Sample, len(xs)), make([]error, len(xs))
-	each(len(xs), q.workers(), func(i int) {
-		out[i], errs[i] = q.sample(ctx, xs[i], Effort{Target: target, Workers: 1})
-	})
+	e.Workers = 1
+	each(len(xs), q.workers(), func(i int) { out[i], errs[i] = q.sample(ctx, xs[i], e) })
 	return out, errors.Join(errs...)
+}
+
+// full is the effort of an answer, rough that of a scan.
+func (q *Question) full() Effort { return Effort{Target: q.target(), Workers: q.workers()} }
+func (q *Question) rough() Effort {
+	return Effort{Target: scanTarget, Workers: q.workers(), Order: scanOrder}
 }
 
 // each calls f for 0 … n−1 on a number of goroutines, in order of start.

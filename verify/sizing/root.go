@@ -56,12 +56,13 @@ const mostSteps = 50
 // b, or a itself where there is none.
 //
 // It ends when the measure is at the limit to a quarter of its own bar: what
-// is closer is not known. The trail holds all points that were solved.
-func (q *Question) refine(ctx context.Context, c coordinate, a, b, beyond node) (end node, trail []node, err error) {
+// is closer is not known. A rough measure is taken to a share of the target. The
+// trail holds all points that were solved.
+func (q *Question) refine(ctx context.Context, c coordinate, e Effort, a, b, beyond node) (end node, trail []node, err error) {
 	for range mostSteps {
 		t := fraction(a, b, beyond)
 		u := a.u + t*(b.u-a.u)
-		s, err := q.sample(ctx, c.back(u), Effort{Target: q.target(), Workers: q.workers()})
+		s, err := q.sample(ctx, c.back(u), e)
 		if err != nil {
 			return end, trail, err
 		}
@@ -70,7 +71,11 @@ func (q *Question) refine(ctx context.Context, c coordinate, a, b, beyond node) 
 		}
 		end = q.node(c, s)
 		trail = append(trail, end)
-		if math.Abs(s.Value-q.Limit) <= s.Uncertainty/4 || math.Abs(b.u-a.u) <= 1e-12*math.Max(1, math.Abs(u)) {
+		enough, closed := s.Uncertainty/4, 1e-12
+		if s.Rough {
+			enough, closed = rootResolution*q.target()*q.Limit, 1e-4
+		}
+		if math.Abs(s.Value-q.Limit) <= enough || math.Abs(b.u-a.u) <= closed*math.Max(1, math.Abs(u)) {
 			return end, trail, nil
 		}
 		if (end.f > 0) == (a.f > 0) {
@@ -80,6 +85,47 @@ func (q *Question) refine(ctx context.Context, c coordinate, a, b, beyond node) 
 		}
 	}
 	return end, trail, nil
+}
+
+// polish closes a bracket of a scan: by single solves first, then by full
+// ladders, which begin where those ended and go on by the slope. ok is false
+// when the ladders do not bear the bracket out. others are all points known.
+// Where the scan itself was one of full ladders so are the first steps.
+func (q *Question) polish(ctx context.Context, c coordinate, s *scan, before int, scanned Effort) (end node, others []node, ok bool, err error) {
+	a, b, beyond := s.ends(before)
+	e := q.full()
+	if scanned.Order > 0 {
+		e.Order = rootOrder
+	}
+	end, trail, err := q.refine(ctx, c, e, a, b, beyond)
+	others = append(trail, s.nodes...)
+	if err != nil || !end.Decided || !end.Rough {
+		return end, others, err == nil, err
+	}
+	slope, last := steepness(end, others), end
+	for range 5 {
+		next, err := q.sample(ctx, c.back(last.u), q.full())
+		if err != nil || !next.Decided {
+			return node{Sample: next}, others, err == nil, err
+		}
+		end = q.node(c, next)
+		if math.Abs(end.Value-q.Limit) <= end.Uncertainty/4 {
+			return end, others, true, nil
+		}
+		for _, o := range others { // the secant of full ladders where there are two
+			if !o.Rough && math.Abs(o.f-end.f) > 2*(o.Uncertainty+end.Uncertainty)/q.Limit {
+				slope = (o.f - end.f) / (o.u - end.u)
+				break
+			}
+		}
+		others = append([]node{end}, others...)
+		step := -end.f / slope
+		if !(math.Abs(step) < math.Abs(b.u-a.u)/4) {
+			break
+		}
+		last.u = math.Min(math.Max(end.u+step, s.nodes[0].u), s.nodes[len(s.nodes)-1].u)
+	}
+	return end, others, false, nil
 }
 
 // fraction of the way from a to b at which to look next.
@@ -98,13 +144,20 @@ func fraction(a, b, c node) float64 {
 }
 
 // steepness is df/du at a node, from the parabola through it and the two
-// nearest of the others that differ from it by more than their bars: closer
-// ones would show the noise of the meshes.
+// nearest of the others that differ from it by more than the noise of the
+// meshes; where there is but one, or none, from the one that differs most.
 func steepness(at node, others []node) float64 {
-	var x, y *node
+	const noise = 0.03 // several times the error of a single solve
+	var x, y, most *node
 	for i := range others {
 		o := &others[i]
-		if !o.Decided || math.Abs(o.f-at.f) < 5*(o.Uncertainty/o.Value+at.Uncertainty/at.Value) {
+		if !o.Decided || o.u == at.u {
+			continue
+		}
+		if most == nil || math.Abs(o.f-at.f) > math.Abs(most.f-at.f) {
+			most = o
+		}
+		if math.Abs(o.f-at.f) < noise {
 			continue
 		}
 		gap := math.Abs(o.u - at.u)
@@ -117,10 +170,10 @@ func steepness(at node, others []node) float64 {
 	}
 	slope := func(p, q *node) float64 { return (p.f - q.f) / (p.u - q.u) }
 	switch {
-	case x == nil:
+	case most == nil:
 		return 0
 	case y == nil:
-		return slope(&at, x)
+		return slope(&at, most)
 	}
 	return slope(&at, x) + slope(&at, y) - slope(x, y)
 }

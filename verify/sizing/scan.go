@@ -30,15 +30,15 @@ func (s *scan) add(q *Question, c coordinate, samples ...Sample) {
 
 // survey solves the part on the coarse grid, and closer where the measure has
 // an extremum that may reach over the limit unseen.
-func (q *Question) survey(ctx context.Context, kind scf.Dimension, in Interval) (*scan, coordinate, error) {
+func (q *Question) survey(ctx context.Context, kind scf.Dimension, in Interval, e Effort) (*scan, coordinate, error) {
 	c := coordinate{linear: kind.Angle || kind.Zero || kind.Signed}
 	s := &scan{}
-	samples, err := q.samples(ctx, q.grid(kind, in), scanTarget)
+	samples, err := q.samples(ctx, q.grid(kind, in), e)
 	if err != nil {
 		return nil, c, err
 	}
 	s.add(q, c, samples...)
-	if err := q.extend(ctx, s, c, in); err != nil {
+	if err := q.extend(ctx, s, c, in, e); err != nil {
 		return nil, c, err
 	}
 	for range 2 {
@@ -46,7 +46,7 @@ func (q *Question) survey(ctx context.Context, kind scf.Dimension, in Interval) 
 		if len(more) == 0 {
 			break
 		}
-		samples, err := q.samples(ctx, more, scanTarget)
+		samples, err := q.samples(ctx, more, e)
 		if err != nil {
 			return nil, c, err
 		}
@@ -57,7 +57,7 @@ func (q *Question) survey(ctx context.Context, kind scf.Dimension, in Interval) 
 
 // extend goes on beyond the grid, decade by decade, down while all values keep
 // the limit and up while none does.
-func (q *Question) extend(ctx context.Context, s *scan, c coordinate, in Interval) error {
+func (q *Question) extend(ctx context.Context, s *scan, c coordinate, in Interval, e Effort) error {
 	for !c.linear && len(s.nodes) > 0 {
 		low, high := s.nodes[0], s.nodes[len(s.nodes)-1]
 		before, _ := s.crossing()
@@ -67,12 +67,12 @@ func (q *Question) extend(ctx context.Context, s *scan, c coordinate, in Interva
 			return nil
 		case low.f <= 0 && low.At > in.From:
 			x = math.Max(low.At/10, in.From)
-		case low.f > 0 && high.At < in.To:
+		case low.f > 0 && high.At < in.To-2*almost*(in.To-in.From):
 			x = math.Min(high.At*10, in.To)
 		default:
 			return nil
 		}
-		next, err := q.sample(ctx, x, Effort{Target: scanTarget, Workers: q.workers()})
+		next, err := q.sample(ctx, x, e)
 		if err != nil {
 			return err
 		}

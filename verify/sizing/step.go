@@ -53,7 +53,7 @@ func (q *Question) round(ctx context.Context, kind scf.Dimension, a *Answer) (*S
 		if !q.ok(at) {
 			break
 		}
-		s, err := q.sample(ctx, at, Effort{Target: q.target(), Workers: q.workers()})
+		s, err := q.sample(ctx, at, q.full())
 		if err != nil {
 			return nil, err
 		}

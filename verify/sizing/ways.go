@@ -44,7 +44,7 @@ func (q *Question) knownAt(ctx context.Context, a *Answer, x float64) (*Reading,
 			return &a.Scanned[i].Reading, nil
 		}
 	}
-	s, err := q.sample(ctx, x, Effort{Target: scanTarget, Workers: q.workers()})
+	s, err := q.sample(ctx, x, q.rough())
 	return &s.Reading, err
 }
 
