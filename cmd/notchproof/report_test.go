@@ -258,3 +258,34 @@ func TestSheetOfADeveloper(t *testing.T) {
 		t.Errorf("between versions the way to the factor is free: %q", faults)
 	}
 }
+
+// TestReportRefuses: one line, a hint, status 2, and no file.
+func TestReportRefuses(t *testing.T) {
+	folder := t.TempDir()
+	file := filepath.Join(folder, "x.html")
+	for _, row := range []struct {
+		words []string
+		says  string
+	}{
+		{with(steppedShaft), "no file"},
+		{with(steppedShaft, "-o", "sheet.pdf"), ".html"},
+		{with(steppedShaft, "-o", filepath.Join(folder, "no", "x.html")), "folder"},
+		{with(steppedShaft, "--text", "--json"), "both"},
+		{with(steppedShaft, "-o", file, "--title", strings.Repeat("x", 201)), "--title"},
+		{with(steppedShaft, "-o", file, "--by", "a\xffb"), "UTF-8"},
+		{with(steppedShaft, "-o", file, "--claim", "2"), "for which load"},
+		{[]string{"no-such.json", "-o", file}, "no such file"},
+		{[]string{"--check", filepath.Join(folder, "none.html")}, "no such file"},
+		{[]string{"--check", folder}, "cannot be read"},
+		{with(steppedShaft, "--check", file), "goes alone"},
+		{[]string{"--check", file, "--json"}, "goes alone"},
+	} {
+		status, out, errs := typed(append([]string{"report"}, row.words...)...)
+		if status != exitUsage || out != "" || !strings.Contains(errs, row.says) || !strings.Contains(errs, "\nhint: ") || strings.Count(errs, "\n") != 2 {
+			t.Errorf("%q: exit status %d, want %q\n%s%s", row.words, status, row.says, out, errs)
+		}
+	}
+	if left, _ := os.ReadDir(folder); len(left) > 0 {
+		t.Errorf("%s was written by a run that failed", left[0].Name())
+	}
+}
