@@ -63,12 +63,17 @@ func TestSheetsAreWellFormed(t *testing.T) {
 			[]string{"12.0\u00a0% too low", "2.1012\u00a0±\u00a00.0005", "tipton-1996", "chart, by eye", "not an approval"}},
 		{with(steppedShaft, "--title", wicked, "--by", wicked, "--date", wicked), exitDisagrees, []string{`<a href="#torsion">`, "Summary"}},
 		{with(steppedShaft, "--load", "torsion", "--claim", "1.5", "--claim-from", wicked), exitAgrees, []string{"√3"}},
+		{with(steppedShaft, "--load", "bending", "--claim", "1.53"), exitDisagrees, []string{"Torsion read for bending"}},
 		{[]string{link}, exitAgrees, []string{"o&#39;link &lt;&amp;&#34; ü.json", "part file below"}},
 		{[]string{"bar-notch", "D=2", "d=1", "r=0.1", "angle=30", "--load", "tension"}, exitDisagrees, []string{"one unnamed unit", "°"}},
 		{[]string{"bar-collar", "D=60mm", "d=40mm", "r=4mm", "L=30mm", "--load", "bending"}, exitAgrees, []string{"hint from a neighbouring shape"}},
+		{[]string{"bar-shoulder", "D=60mm", "d=40mm", "r=0mm", "--load", "tension"}, exitUndecided, []string{"no factor: diverging", "270°"}},
 		{nil, exitAgrees, []string{"demonstration"}},
 	} {
-		_, page := sheetOf(t, row.status, row.words...)
+		file, page := sheetOf(t, row.status, row.words...)
+		if status, out, errs := typed("report", "--check", file); status != exitAgrees {
+			t.Errorf("%q: does not hold: %s%s", row.words, out, errs)
+		}
 		for _, fault := range markup(page) {
 			t.Errorf("%q: %s", row.words, fault)
 		}

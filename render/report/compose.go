@@ -121,7 +121,8 @@ func texts(list []string) []string { return append([]string{}, list...) }
 
 func computedOf(c *verify.Computed, p *specimen.Part) Computed {
 	out := Computed{
-		Settled: c.Factor.Status.Settled(), Status: c.Factor.Status.String(),
+		Settled: c.Factor.Status.Settled(), Status: c.State(), Trend: c.Factor.Status.String(),
+		Signals:  Signals{numberOf(c.Factor.Signals.Ladder), numberOf(c.Factor.Signals.Second), numberOf(c.Factor.Signals.Witness)},
 		Factor:   Value{numberOf(c.Factor.Value), numberOf(c.Factor.Uncertainty)},
 		VonMises: Value{numberOf(c.VonMises.Value), numberOf(c.VonMises.Uncertainty)},
 		Gross:    Value{numberOf(c.Gross), numberOf(c.Gross / c.Factor.Value * c.Factor.Uncertainty)},

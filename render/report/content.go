@@ -85,7 +85,9 @@ type Nominal struct {
 // Computed is what the ladder gave. Without Settled its numbers mean nothing.
 type Computed struct {
 	Settled     bool    `json:"settled"`
-	Status      string  `json:"status"`
+	Status      string  `json:"status"` // of the evidence: converged, undecided, diverging …
+	Trend       string  `json:"trend"`  // of the ladder's values
+	Signals     Signals `json:"signals"`
 	Factor      Value   `json:"factor"`
 	VonMises    Value   `json:"vonMises"`
 	Gross       Value   `json:"gross"`
@@ -94,6 +96,13 @@ type Computed struct {
 	Others      []Place `json:"others"`
 	Ladder      []Rung  `json:"ladder"`
 	TargetShare float64 `json:"target"` // uncertainty wished for, relative
+}
+
+// Signals are what each piece of evidence leaves open, absolute.
+type Signals struct {
+	Ladder     Number `json:"ladder"`
+	SecondMesh Number `json:"secondMesh"`
+	Traction   Number `json:"surfaceTraction"`
 }
 
 // Value is a number with its uncertainty.
@@ -166,8 +175,8 @@ type MeshReading struct {
 type Misreading struct {
 	What   string  `json:"what"`
 	Factor float64 `json:"factor"`
-	From   string  `json:"from"`
-	Chance float64 `json:"chance"` // of meeting some slip as well by accident
+	From   string  `json:"from"`   // the chart that gives it, or "computed"
+	Chance float64 `json:"chance"` // share of claims wrong for no such reason that are met as well
 }
 
 // Check is a condition without which no factor is judged.

@@ -5,6 +5,7 @@ import (
 	"io"
 	"strings"
 	"unicode"
+	"unicode/utf8"
 
 	"notchproof/render/number"
 )
@@ -110,7 +111,7 @@ func (t *textSheet) finding(f *Finding, no int, unit string) {
 		t.line("  %-14s %s", "von Mises", c.VonMises.String())
 		t.line("  %-14s %s", "gross section", c.Gross.String())
 	} else {
-		t.line("  %-14s none: the ladder is %s", "factor", c.Status)
+		t.line("  %-14s none: %s", "factor", c.Status)
 	}
 	t.line("  %-14s %s (%s)", "nominal stress", f.Nominal.Formula, f.Nominal.Section)
 	t.line("  %-14s on the %s at x = %s, y = %s, %s° %s", "peak", c.At.Side, coordinate(c.At.X, unit), coordinate(c.At.Y, unit),
@@ -177,7 +178,11 @@ func judged(v Verdict, unsafe bool) string {
 }
 
 func (t *textSheet) evidence(f *Finding) {
-	t.line("\n  %-44s %12s %14s  %s", "check", "value", "limit", "result")
+	longest := len("check")
+	for _, k := range f.Checks {
+		longest = max(longest, utf8.RuneCountInString(k.Name))
+	}
+	t.line("\n  %-*s %12s %14s  %s", longest, "check", "value", "limit", "result")
 	for _, k := range f.Checks {
 		sign, result := "≤", "passed"
 		if k.Above {
@@ -186,9 +191,13 @@ func (t *textSheet) evidence(f *Finding) {
 		if !k.Passed {
 			result = "FAILED"
 		}
-		t.line("  %-44s %12s %14s  %s", k.Name, scientific(k.Value), sign+" "+scientific(k.Limit), result)
+		t.line("  %-*s %12s %14s  %s", longest, k.Name, scientific(k.Value), sign+" "+scientific(k.Limit), result)
 	}
-	t.line("\n  ladder, %s\n  %5s %10s %10s %12s %12s %14s", f.Computed.Status, "order", "triangles", "unknowns", "factor", "change", "traction left")
+	if s := f.Computed.Signals; f.Computed.Settled {
+		t.line("\n  its bar: ladder %s, second mesh %s, surface traction %s", number.Significant(float64(s.Ladder), 1),
+			number.Significant(float64(s.SecondMesh), 1), number.Significant(float64(s.Traction), 1))
+	}
+	t.line("\n  ladder, %s\n  %5s %10s %10s %12s %12s %14s", f.Computed.Trend, "order", "triangles", "unknowns", "factor", "change", "traction left")
 	for _, r := range f.Computed.Ladder {
 		t.line("  %5d %10d %10d %12s %12s %14s", r.Order, r.Triangles, r.Unknowns, number.Decimal(float64(r.Factor), 6), scientific(r.Change), scientific(r.Traction))
 	}
