@@ -100,6 +100,67 @@ func TestOneSolveOfBothLoads(t *testing.T) {
 	}
 }
 
+// TestFullTensors: an independent route around a shaft. The six stresses of every
+// load at the surface, amplitudes turned to the angle θ, are added as tensors in
+// space; von Mises and the largest principal stress of the sum are those of the
+// three surface stresses. The tensors come from derivatives across the surface
+// as well, which are less sharp: what they leave as traction bounds the difference.
+func TestFullTensors(t *testing.T) {
+	p := family(t, "shaft-groove", scf.Dims{"D": 60, "d": 46, "r": 4})
+	q := Question{Part: p, Axial: quantity.Newtons(2e4), Bending: quantity.NewtonMillimetres(3e5), Torque: quantity.NewtonMillimetres(4e5)}
+	r := answer(t, q)
+	s, err := q.superpose(context.Background(), &r.Checked)
+	if err != nil {
+		t.Fatal(err)
+	}
+	f := &s.fine
+	rng := rand.New(rand.NewPCG(5, 5))
+	sheared := 0.0 // by bending alone
+	for i, e := range f.parts[0].solution.Problem.Shape.Mesh.Boundary {
+		if int(e.Side) != p.Notch[0] {
+			continue
+		}
+		at, theta := rng.Float64(), 2*math.Pi*rng.Float64()
+		point := f.parts[0].solution.Surface(i, at)
+		a := f.amplitudes(point)
+		got := a.at(point, theta)
+		sin, cos := math.Sincos(theta)
+		var bary [3]float64
+		bary[(e.Opposite+1)%3], bary[(e.Opposite+2)%3] = 1-at, at
+		var sum fem.Stress
+		left := 0.0
+		for _, c := range f.parts {
+			x := c.solution.Amplitude(int(e.Triangle), bary[1], bary[2])
+			direct, shear := c.nominal, c.nominal
+			if c.turning {
+				direct, shear = c.nominal*cos, c.nominal*sin
+				sheared = math.Max(sheared, math.Abs(c.solution.SurfaceAmplitude(i, at).Shear))
+			}
+			sum = fem.Stress{XX: sum.XX + direct*x.XX, YY: sum.YY + direct*x.YY, ZZ: sum.ZZ + direct*x.ZZ,
+				XY: sum.XY + direct*x.XY, XZ: sum.XZ + shear*x.XZ, YZ: sum.YZ + shear*x.YZ}
+			left += math.Abs(c.nominal) * math.Hypot(c.solution.Leftover(point))
+		}
+		room := 5*left + 1e-4*sum.VonMises()
+		if gap := math.Abs(got.VonMises() - sum.VonMises()); gap > room {
+			t.Errorf("edge %d, θ = %g: von Mises %g, of the full tensor %g", i, theta, got.VonMises(), sum.VonMises())
+		}
+		if gap := math.Abs(got.FirstPrincipal() - sum.Principal()[0]); gap > room {
+			t.Errorf("edge %d, θ = %g: principal stress %g, of the full tensor %g", i, theta, got.FirstPrincipal(), sum.Principal()[0])
+		}
+		// Nothing on a fine round is above what worst finds.
+		worst, _ := f.worst(point, fem.SurfacePoint.VonMises)
+		for k := range 720 {
+			turned := a.at(point, float64(k)*math.Pi/360)
+			if turned.VonMises() > worst.VonMises()*(1+1e-9) {
+				t.Errorf("edge %d: %g at %d°/2 above the worst, %g", i, turned.VonMises(), k, worst.VonMises())
+			}
+		}
+	}
+	if sheared < 0.02 {
+		t.Errorf("bending shears this surface by %g at most: the test says nothing of sinθ", sheared)
+	}
+}
+
 // TestBothEdgesOfABar: in half a bar bending turns its sign across the line of
 // symmetry, so that axial force and bending always meet on one of the edges.
 func TestBothEdgesOfABar(t *testing.T) {
@@ -161,4 +222,14 @@ func TestBarIsCalibrated(t *testing.T) {
 		}
 	}
 	t.Logf("the largest error of %d is %.2g of its bar", shapes, worst)
+}
+
+// BenchmarkRun measures a whole question: three ladders, their fields on one
+// mesh, all places.
+func BenchmarkRun(b *testing.B) {
+	p := family(b, "shaft-shoulder", scf.Dims{"D": 72, "d": 48, "r": 3})
+	q := Question{Part: p, Axial: quantity.Newtons(2e4), Bending: quantity.NewtonMillimetres(3e5), Torque: quantity.NewtonMillimetres(4e5)}
+	for b.Loop() {
+		answer(b, q)
+	}
 }
