@@ -1,6 +1,7 @@
 package strength
 
 import (
+	"notchproof/fem"
 	"notchproof/scf"
 	"notchproof/verify"
 	"notchproof/verify/specimen"
@@ -13,6 +14,7 @@ type Result struct {
 	Strength float64       // what stresses are held against
 	Checked  verify.Result // the ladders, one finding a load that acts
 	Nominal  []Nominal     // in the order of the findings
+	Fields   []Field       // in the order of the findings, all on one mesh
 	// Settled tells that every factor is; without that nothing is decided.
 	Settled bool
 	Hand    []Hand  // by hand: with the computed factors, the handbook's, and the user's where there are some
@@ -34,6 +36,13 @@ type Result struct {
 type Nominal struct {
 	Load   scf.Load
 	Stress float64
+}
+
+// A Field is the solution of one load at unit nominal stress.
+type Field struct {
+	Load     *specimen.Load
+	Solution *fem.Solution
+	Nominal  float64 // MPa, signed
 }
 
 // A Place is one where the part may fail.

@@ -42,6 +42,9 @@ func Run(ctx context.Context, q Question) (*Result, error) {
 	if err != nil {
 		return nil, err
 	}
+	for i, c := range s.fine.parts {
+		r.Fields = append(r.Fields, Field{checked.Findings[i].Load, c.solution, c.nominal})
+	}
 	r.Places = q.places(s)
 	if r.Brittle {
 		at, _ := s.fine.worst(s.fine.maxima(q.Part.Notch, pressed)[0], pressed)
