@@ -5,6 +5,7 @@ import (
 	"math"
 	"strings"
 
+	"notchproof/scf"
 	"notchproof/verify"
 	"notchproof/verify/specimen"
 	"notchproof/verify/strength"
@@ -21,6 +22,9 @@ func Equivalent(q strength.Question) Measure {
 		now := q
 		now.Part = p
 		now.Options = verify.Options{Target: e.Target, Workers: e.Workers}
+		if e.Order > 0 {
+			return roughEquivalent(ctx, now, e)
+		}
 		result, err := strength.Run(ctx, now)
 		if err != nil {
 			return Reading{}, err
@@ -38,12 +42,26 @@ func Equivalent(q strength.Question) Measure {
 	}
 }
 
+// roughEquivalent is the same from one solve of each load.
+func roughEquivalent(ctx context.Context, q strength.Question, e Effort) (Reading, error) {
+	result, err := strength.Rough(ctx, q, e.Order)
+	if err != nil {
+		return Reading{}, err
+	}
+	g, nominal := result.Governing(), nominalEquivalent(result)
+	return Reading{
+		Value: g.Equivalent, Uncertainty: e.allowance() * g.Equivalent, Where: g.Name,
+		Factor: g.Equivalent / nominal, FactorBar: e.allowance() * g.Equivalent / nominal,
+		Decided: true, Rough: true,
+	}, nil
+}
+
 // nominalEquivalent adds the nominal stresses of the net section as if they
 // met in one point.
 func nominalEquivalent(r *strength.Result) float64 {
 	direct, shear := 0.0, 0.0
-	for i, n := range r.Nominal {
-		if r.Checked.Findings[i].Load.Shear {
+	for _, n := range r.Nominal {
+		if n.Load == scf.Torsion {
 			shear += math.Abs(n.Stress)
 		} else {
 			direct += math.Abs(n.Stress)

@@ -58,10 +58,6 @@ func rough(ctx context.Context, p *specimen.Part, load scf.Load, e Effort) (Read
 	if err != nil {
 		return Reading{}, nil, err
 	}
-	allowance := scanAllowance
-	if e.Order >= rootOrder {
-		allowance = rootAllowance
-	}
 	l, _ := p.Load(load)
-	return Reading{Factor: value, FactorBar: allowance * value, Decided: true, Rough: true}, l, nil
+	return Reading{Factor: value, FactorBar: e.allowance() * value, Decided: true, Rough: true}, l, nil
 }

@@ -46,6 +46,15 @@ type Effort struct {
 	Order int
 }
 
+// allowance is what a rough value of this effort is taken to be good for,
+// relative.
+func (e Effort) allowance() float64 {
+	if e.Order >= rootOrder {
+		return rootAllowance
+	}
+	return scanAllowance
+}
+
 // A Reading is what a measure says of a part. Bars are absolute.
 type Reading struct {
 	Value       float64 // the measure: a factor, or a stress
