@@ -2,17 +2,84 @@ package render
 
 import "math"
 
-// contours traces the lines on which a raster takes a level, by marching over
-// squares of four pixel centres. Lines end at the edge of the material; closed
-// ones end where they begin. Positions are linear between centres.
-func contours(r *raster, level float64) [][]point {
-	t := tracer{r: r, level: level, w: r.area.Dx(), links: make(map[int][2]int)}
-	for y := 0; y+1 < r.area.Dy(); y++ {
-		for x := 0; x+1 < t.w; x++ {
-			t.square(x, y)
+// contours traces the lines on which a raster takes each of some levels, in
+// rising order, by marching over squares of four pixel centres. Lines end at
+// the edge of the material; closed ones end where they begin. Positions are
+// linear between centres.
+//
+// All levels are found in one pass: every pixel is given the number of levels
+// that it reaches, and only squares whose corners differ in it are looked at.
+func contours(r *raster, levels []float64) [][][]point {
+	reached := ranks(r, levels)
+	w, h := r.area.Dx(), r.area.Dy()
+	const band = 32
+	bands := (h + band - 1) / band
+	crossed := make([][][]int, bands) // by band and level: the squares, by their first pixel
+	concurrently(bands, func() func(i int) {
+		return func(i int) {
+			crossed[i] = make([][]int, len(levels))
+			for y := i * band; y < min((i+1)*band, h-1); y++ {
+				upper, lower := reached[y*w:(y+1)*w], reached[(y+1)*w:(y+2)*w]
+				for x := range w - 1 {
+					a, b, c, d := upper[x], upper[x+1], lower[x+1], lower[x]
+					if a == b && b == c && c == d {
+						continue
+					}
+					lo, hi := min(a, b, c, d), max(a, b, c, d)
+					if hi == noMaterial {
+						continue
+					}
+					for l := lo; l < hi; l++ {
+						crossed[i][l] = append(crossed[i][l], y*w+x)
+					}
+				}
+			}
 		}
+	})
+	lines := make([][][]point, len(levels))
+	concurrently(len(levels), func() func(l int) {
+		return func(l int) {
+			t := tracer{r: r, level: levels[l], w: w, links: make(map[int][2]int)}
+			for _, squares := range crossed {
+				for _, i := range squares[l] {
+					t.square(i)
+				}
+			}
+			lines[l] = t.chain()
+		}
+	})
+	return lines
+}
+
+const noMaterial = math.MaxUint8
+
+// ranks counts the levels that each pixel reaches.
+func ranks(r *raster, levels []float64) []uint8 {
+	if len(levels) >= noMaterial {
+		panic("render: too many levels")
 	}
-	return t.chain()
+	out := make([]uint8, len(r.values))
+	const piece = 1 << 14
+	concurrently((len(out)+piece-1)/piece, func() func(i int) {
+		return func(i int) {
+			l := 0 // neighbours differ by little: on from the last one
+			for k := i * piece; k < min((i+1)*piece, len(out)); k++ {
+				v := r.values[k]
+				if v != v {
+					out[k] = noMaterial
+					continue
+				}
+				for l < len(levels) && levels[l] <= v {
+					l++
+				}
+				for l > 0 && levels[l-1] > v {
+					l--
+				}
+				out[k] = uint8(l)
+			}
+		}
+	})
+	return out
 }
 
 // A tracer links the crossings of sides of squares. A side is numbered 2i for
@@ -26,28 +93,23 @@ type tracer struct {
 }
 
 // square ties the crossings of one square together in pairs.
-func (t *tracer) square(x, y int) {
-	i := y*t.w + x
+func (t *tracer) square(i int) {
 	v := t.r.values
-	a, b, c, d := v[i], v[i+1], v[i+t.w+1], v[i+t.w] // clockwise from the top left
-	// Comparisons with NaN are false, so that squares at the rim drop out here.
-	lo, hi := math.Min(math.Min(a, b), math.Min(c, d)), math.Max(math.Max(a, b), math.Max(c, d))
-	if !(lo < t.level && hi >= t.level) {
-		return
-	}
+	ends := [5]float64{v[i], v[i+1], v[i+t.w+1], v[i+t.w], v[i]} // clockwise from the top left
 	top, right, bottom, left := 2*i, 2*(i+1)+1, 2*(i+t.w), 2*i+1
 	above := func(v float64) bool { return v >= t.level }
-	var cut []int
+	var cut [4]int
+	n := 0
 	for k, s := range [4]int{top, right, bottom, left} {
-		ends := [5]float64{a, b, c, d, a}
 		if above(ends[k]) != above(ends[k+1]) {
-			cut = append(cut, s)
+			cut[n] = s
+			n++
 		}
 	}
 	switch {
-	case len(cut) == 2:
+	case n == 2:
 		t.tie(cut[0], cut[1])
-	case above((a+b+c+d)/4) == above(a): // saddle: a and c are joined
+	case above((ends[0]+ends[1]+ends[2]+ends[3])/4) == above(ends[0]): // saddle: top left and bottom right are joined
 		t.tie(top, right)
 		t.tie(bottom, left)
 	default:

@@ -11,27 +11,38 @@ type contour struct {
 	level float64
 	lines [][]point
 	gaps  []box // where labels stand
+	bare  bool  // the line itself is not drawn
 }
 
-// trace finds the contours of a raster. A level at which a whole stretch of the
-// part lies, as the nominal stress in a plain bar, has no line: its place would
-// be made of the solution's last digits. Such a level is known by more than a
-// twentieth of the material lying within a fiftieth of a step of it, where an
-// even spread would put a twenty-fifth of a step's share.
+// trace finds the contours of a raster at levels a step apart. A level at which
+// a whole stretch of the part lies, as the nominal stress in a plain bar, has
+// no line: its place would be made of the solution's last digits. Such a level
+// is known by more than a twentieth of the material lying within a fiftieth of
+// a step of it, where an even spread would put a twenty-fifth of a step's
+// share.
 func trace(r *raster, list []float64) []contour {
-	cs := make([]contour, len(list))
 	if len(list) == 0 {
-		return cs
+		return nil
 	}
-	step := list[0] // the first level is one step above zero
-	concurrently(len(list), func() func(i int) {
-		return func(i int) {
-			cs[i].level = list[i]
-			if r.share(list[i], step/50) < 0.05 {
-				cs[i].lines = contours(r, list[i])
+	step := math.Inf(1)
+	for i, level := range list {
+		if before := 0.0; i > 0 || level > 0 {
+			if i > 0 {
+				before = list[i-1]
 			}
+			step = math.Min(step, level-before)
 		}
-	})
+	}
+	var traced []float64
+	for i, share := range r.shares(list, step/50) {
+		if share < 0.05 {
+			traced = append(traced, list[i])
+		}
+	}
+	cs := make([]contour, len(traced))
+	for i, lines := range contours(r, traced) {
+		cs[i] = contour{level: traced[i], lines: lines}
+	}
 	return cs
 }
 
@@ -39,10 +50,10 @@ func trace(r *raster, list []float64) []contour {
 // ones in the narrowest places. A label stands on its line, upright, where all of it
 // is on the material and clear of other lettering; a line without such a place
 // has none. most is the number of labels a level.
-func (s *sheet) label(v *view, r *raster, cs []contour, most int) {
+func (s *sheet) label(v *view, r *raster, cs []contour, most int, k look) {
 	for i := len(cs) - 1; i >= 0; i-- {
 		c := &cs[i]
-		text := levelText(c.level)
+		text, _ := k.label(c.level)
 		for _, line := range longestFirst(c.lines) {
 			if len(c.gaps) == most {
 				break
@@ -73,22 +84,37 @@ func (s *sheet) spot(v *view, r *raster, line []point, text string) (box, bool) 
 	return box{}, false
 }
 
-// contours strokes the lines, but not where labels and islands are.
-func (s *sheet) contours(cs []contour, top float64) {
+// contours strokes the lines, but not where labels and islands are: that of
+// zero wide, those below it dashed.
+func (s *sheet) contours(cs []contour, k look) {
 	for _, c := range cs {
-		s.pen(over(c.level/top), 1)
+		if c.bare {
+			continue
+		}
+		s.pen(k.over(c.level), lineOf(c.level))
+		if c.level < 0 {
+			s.dashed()
+		}
 		for _, line := range c.lines {
 			s.gapped(line, append(c.gaps, s.islands...))
 		}
 		s.dc.Stroke()
 	}
+	s.dc.SetDash()
 }
 
 // letter writes the labels into their gaps.
-func (s *sheet) letter(cs []contour, top float64) {
+func (s *sheet) letter(cs []contour, k look) {
 	for _, c := range cs {
 		for _, b := range c.gaps {
-			s.text(point{b.X0, b.Y0}, 0, 0, levelText(c.level), small, over(c.level/top))
+			text, below := k.label(c.level)
+			if below != nil {
+				w := b.grown(s.u(2))
+				s.dc.SetColor(below)
+				s.dc.DrawRectangle(w.X0, w.Y0, w.width(), w.height())
+				s.dc.Fill()
+			}
+			s.text(point{b.X0, b.Y0}, 0, 0, text, small, k.over(c.level))
 		}
 	}
 }

@@ -22,7 +22,7 @@ func filled(w, h int, f func(x, y float64) float64) *raster {
 func TestContourOfCone(t *testing.T) {
 	const cx, cy, radius = 60.3, 58.7, 31.4
 	r := filled(110, 100, func(x, y float64) float64 { return math.Hypot(x-cx, y-cy) })
-	lines := contours(r, radius)
+	lines := contours(r, []float64{radius})[0]
 	if len(lines) != 1 {
 		t.Fatalf("%d lines instead of one", len(lines))
 	}
@@ -50,7 +50,7 @@ func TestContourOfPlane(t *testing.T) {
 		}
 		return 0.3*x + 0.7*y
 	})
-	lines := contours(r, 47)
+	lines := contours(r, []float64{47})[0]
 	if len(lines) != 2 {
 		t.Fatalf("%d lines instead of two beside a hole", len(lines))
 	}
@@ -67,7 +67,7 @@ func TestContourOfPlane(t *testing.T) {
 func TestContourOfSaddle(t *testing.T) {
 	f := func(x, y float64) float64 { return (x - 40.2) * (y - 40.4) }
 	for _, level := range []float64{-3, -0.01, 0.01, 3} {
-		lines := contours(filled(70, 70, f), level)
+		lines := contours(filled(70, 70, f), []float64{level})[0]
 		if len(lines) != 2 {
 			t.Errorf("level %g: %d branches instead of two", level, len(lines))
 		}

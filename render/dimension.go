@@ -21,6 +21,10 @@ const (
 // (pixels). The value stands in a gap of the line, off its middle, where the
 // axis runs.
 func (s *sheet) across(v *view, a, b r2.Vec, x float64, text string) {
+	if v.half && math.Min(a.Y, b.Y) < 0 {
+		s.acrossHalf(v, a, b, x, text)
+		return
+	}
 	p, q := v.at(a), v.at(b)
 	if p.Y > q.Y {
 		p, q = q, p
@@ -46,6 +50,24 @@ func (s *sheet) across(v *view, a, b r2.Vec, x float64, text string) {
 	s.arrow(top, up, ink)
 	s.arrow(bottom, down, ink)
 	s.value(point{x, p.Y + 0.3*(q.Y-p.Y)}, text)
+}
+
+// acrossHalf dimensions across the line of symmetry of a half view: the line
+// runs on a little beyond it, without an arrow there (ISO 129-1).
+func (s *sheet) acrossHalf(v *view, a, b r2.Vec, x float64, text string) {
+	const beyond = 16
+	if a.Y < b.Y {
+		a = b
+	}
+	p, axis := v.at(a), v.at(r2.Vec{}).Y
+	s.pen(ink, narrow)
+	if math.Abs(x-p.X) >= 1 {
+		sign := math.Copysign(1, x-p.X)
+		s.line(p.plus(sign*s.u(extensionGap), 0), point{x + sign*s.u(extensionPast), p.Y})
+	}
+	s.line(point{x, p.Y}, point{x, axis + s.u(beyond)})
+	s.arrow(point{x, p.Y}, point{0, -1}, ink)
+	s.value(point{x, p.Y + 0.42*(axis-p.Y)}, text)
 }
 
 // along dimensions the distance in x between two points, with its line at y
@@ -110,6 +132,7 @@ func (s *sheet) leader(tip, away point, text string, material [][]point) {
 	knee, b := shelf(best)
 	s.pen(ink, narrow)
 	s.line(tip, knee)
+	s.takeLine(tip, knee)
 	s.line(knee, knee.plus(side*(w+s.u(8)), 0))
 	s.arrow(tip, point{-away.X, -away.Y}, ink)
 	s.text(point{b.X0 + s.u(4), b.Y0}, 0, 0, text, normal, ink)

@@ -2,12 +2,7 @@ package render
 
 import (
 	"image"
-	"image/color"
-	"image/draw"
 	"math"
-
-	"github.com/fogleman/gg"
-	"golang.org/x/image/font"
 )
 
 // A Figure is a drawing made of lines and letters, a plot or a sketch, that can
@@ -60,7 +55,7 @@ func (f *Figure) sheet(o FigureOptions) *sheet {
 	wide := o.units()
 	scale := float64(width) / wide
 	im := blank(width, int(math.Round(f.height(wide)*scale)))
-	s := newSheetOn(pixels{gg.NewContextForRGBA(im)}, scale, sizeOf(im))
+	s := newSheetOn(newPixels(im), scale, sizeOf(im))
 	s.im = im
 	f.drawOn(s)
 	return s
@@ -101,15 +96,18 @@ func (f *Figure) drawOn(s *sheet) {
 	f.draw(s)
 }
 
-// blank is empty paper.
+// blank is empty paper: white, all bytes are alike.
 func blank(width, height int) *image.RGBA {
 	im := image.NewRGBA(image.Rect(0, 0, width, height))
-	draw.Draw(im, im.Bounds(), image.NewUniform(color.White), image.Point{}, draw.Src)
+	im.Pix[0] = 255
+	for n := 1; n < len(im.Pix); n *= 2 {
+		copy(im.Pix[n:], im.Pix[:n])
+	}
 	return im
 }
 
 func newSheetOn(dc plotter, scale float64, size point) *sheet {
-	return &sheet{dc: dc, scale: scale, paper: box{0, 0, size.X, size.Y}, faces: make(map[lettering]font.Face)}
+	return &sheet{ruler: rulerOf(scale), dc: dc, paper: box{0, 0, size.X, size.Y}}
 }
 
 func sizeOf(im image.Image) point {

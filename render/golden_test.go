@@ -91,7 +91,7 @@ func readImage(path string) (image.Image, error) {
 
 func TestGoldenPicture(t *testing.T) {
 	part := newPart(t, "shaft-shoulder", scf.Dims{"D": 60, "d": 40, "r": 5})
-	im, err := Picture(solved(t, part, scf.Bending, 6), part, PictureOptions{Width: 480})
+	im, err := Picture(solved(t, part, scf.Bending, 6), part, PictureOptions{Width: 800, DPI: 95})
 	if err != nil {
 		t.Fatal(err)
 	}

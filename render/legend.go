@@ -1,50 +1,80 @@
 package render
 
 import (
+	"image/color"
 	"math"
 
 	"notchproof/render/number"
 )
 
-// legend draws the ramp with the levels of the contours as its ticks.
-func (s *sheet) legend(area box, title, note string, top float64, list []float64) {
-	s.text(point{area.X0, area.Y0}, 0, 0, title, strong, ink)
+// A scale is what a legend shows: a ramp with the levels of the contours.
+type scale struct {
+	low, high float64
+	levels    []float64
+	paint     func(v float64) color.RGBA
+	over      func(v float64) color.NRGBA
+	text, end func(v float64) string // of a level and of an end
+	unruled   bool                   // levels have no line across the ramp
+}
+
+// legend draws a scale with the levels of the contours as its ticks.
+func (s *sheet) legend(area box, title, note string, sc scale) {
 	defer s.take(area)
-	if note != "" {
-		s.text(point{area.X1, area.Y0}, 1, 0, s.fit(note, small, area.width()-s.measure(title, strong)-s.u(24)), small, grey)
+	s.text(point{area.X0, area.Y0}, 0, 0, s.fit(title, strong, area.width()), strong, ink)
+	room := area.width() - s.measure(title, strong) - s.u(24)
+	switch {
+	case note == "":
+	case s.measure(note, small) <= room:
+		s.text(point{area.X1, area.Y0}, 1, 0, note, small, grey)
+	default:
+		s.text(point{area.X0, area.Y0 + s.u(72)}, 0, 0, s.fit(note, small, area.width()), small, grey)
 	}
-	bar := box{area.X0, area.Y0 + s.u(28), area.X1, area.Y0 + s.u(52)}
-	columns := int(math.Round(bar.width()))
-	for i := range columns {
-		s.dc.SetColor(tone((float64(i) + 0.5) / float64(columns)))
-		s.dc.DrawRectangle(math.Round(bar.X0)+float64(i), bar.Y0, 1, bar.height())
-		s.dc.Fill()
+	bar := box{area.X0, area.Y0 + s.u(26), area.X1, area.Y0 + s.u(47)}
+	at := func(v float64) float64 { return bar.X0 + bar.width()*(v-sc.low)/(sc.high-sc.low) }
+	for y := int(math.Round(bar.Y0)); y < int(math.Round(bar.Y1)); y++ {
+		for x := int(math.Round(bar.X0)); x < int(math.Round(bar.X1)); x++ {
+			s.im.SetRGBA(x, y, sc.paint(sc.low+(float64(x)+0.5-bar.X0)/bar.width()*(sc.high-sc.low)))
+		}
 	}
 	s.rectangle(bar, narrow, ink)
-	peak := s.tick(bar, 1, number.Decimal(top, 2), strong)
-	s.tick(bar, 0, "0", small)
-	for _, level := range list {
-		at := bar.X0 + bar.width()*level/top
-		s.pen(over(level/top), 1)
-		s.line(point{at, bar.Y0}, point{at, bar.Y1})
-		text := levelText(level)
-		if b := s.place(point{at, bar.Y1 + s.u(10)}, 0.5, 0, text, small); !b.grown(s.u(6)).meets(peak) {
-			s.tick(bar, level/top, text, small)
+	ends := [2]box{
+		s.tick(bar, bar.X0, 0, sc.end(sc.low), small),
+		s.tick(bar, bar.X1, 1, sc.end(sc.high), strong),
+	}
+	last := ends[0]
+	for _, level := range sc.levels {
+		x := at(level)
+		if !sc.unruled {
+			s.pen(sc.over(level), lineOf(level))
+			s.line(point{x, bar.Y0}, point{x, bar.Y1})
+		}
+		text := sc.text(level)
+		b := s.place(point{x, bar.Y1 + s.u(8)}, 0.5, 0, text, small).grown(s.u(5))
+		if !b.meets(ends[0]) && !b.meets(ends[1]) && !b.meets(last) {
+			last = s.tick(bar, x, 0.5, text, small)
 		}
 	}
 }
 
-// tick marks a place below the ramp; the ends keep their lettering inside it.
-func (s *sheet) tick(bar box, t float64, text string, l lettering) box {
-	x := bar.X0 + t*bar.width()
-	s.pen(ink, narrow)
-	s.line(point{x, bar.Y1}, point{x, bar.Y1 + s.u(7)})
-	anchor := 0.5
-	switch t {
-	case 0:
-		anchor = 0
-	case 1:
-		anchor = 1
+// rangeText writes an end of the ramp.
+func rangeText(v float64) string {
+	if v == 0 {
+		return "0"
 	}
-	return s.text(point{x, bar.Y1 + s.u(10)}, anchor, 0, text, l, ink)
+	return number.Decimal(v, 2)
+}
+
+// tick marks a place below the ramp; the ends keep their lettering inside it.
+func (s *sheet) tick(bar box, x, anchor float64, text string, l lettering) box {
+	s.pen(ink, narrow)
+	s.line(point{x, bar.Y1}, point{x, bar.Y1 + s.u(6)})
+	return s.text(point{x, bar.Y1 + s.u(8)}, anchor, 0, text, l, ink)
+}
+
+// lineOf is the width of a contour: that of zero is wide.
+func lineOf(level float64) float64 {
+	if level == 0 {
+		return 2.2
+	}
+	return 1
 }

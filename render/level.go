@@ -16,6 +16,24 @@ func levels(top float64, count int) []float64 {
 	return list
 }
 
+// levelsBetween gives round values between a low and a high value of which the
+// low one may be negative; zero is one of them then.
+func levelsBetween(low, high float64, count int) []float64 {
+	if low == 0 {
+		return levels(high, count)
+	}
+	span := high - low
+	if !(span > 0) || math.IsInf(span, 0) {
+		return nil
+	}
+	step := roundStep(span / float64(count))
+	var list []float64
+	for k := math.Ceil(low/step + 0.05); k*step < high-step/20; k++ {
+		list = append(list, math.Abs(k)*math.Copysign(step, k+0.5)) // no negative zero
+	}
+	return list
+}
+
 // roundStep is the least of 1, 2, 2.5, 5 times a power of ten that is not
 // below a wish.
 func roundStep(wish float64) float64 {

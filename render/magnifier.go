@@ -2,10 +2,12 @@ package render
 
 import (
 	"math"
+	"sort"
 
 	"gonum.org/v1/gonum/spatial/r2"
 
 	"notchproof/mesh/outline"
+	"notchproof/render/number"
 	"notchproof/verify/specimen"
 )
 
@@ -23,9 +25,10 @@ func detail(part *specimen.Part, peak r2.Vec, main *view, center point, radius f
 	v = &view{scale: times * main.scale, window: circle(center, radius)}
 	v.origin = point{center.X - v.scale*about.X, center.Y + v.scale*about.Y}
 	// Near the axis of a half model the mirror image comes into view.
-	if v.mirror = part.Half && about.Y < radius/v.scale; v.mirror {
-		v.origin.Y = math.Round(v.origin.Y)
+	if main.mirror && about.Y < radius/v.scale {
+		v.mirror, v.origin.Y = true, math.Round(v.origin.Y)
 	}
+	v.half = main.half
 	return v, times
 }
 
@@ -60,12 +63,13 @@ func (s *sheet) magnified(main, v *view, letter string) {
 	s.dc.DrawCircle(mid.X, mid.Y, r)
 	s.dc.Stroke()
 	s.take(box{mid.X - r, mid.Y - r, mid.X + r, mid.Y + r})
-	for _, dir := range [4]point{{0.6, -0.8}, {-0.6, -0.8}, {0.8, 0.6}, {-0.8, 0.6}} {
+	for _, dir := range [6]point{{0.6, -0.8}, {-0.6, -0.8}, {0.8, 0.6}, {-0.8, 0.6}, {0, -1}, {0.95, -0.3}} {
 		for reach := r + s.u(14); reach < r+s.u(130); reach += s.u(10) {
 			at := mid.toward(dir, reach)
-			if box := s.place(at, 0.5, 0.5, letter, head); s.free(box.grown(s.u(4))) {
+			from, to := mid.toward(dir, r), mid.toward(dir, reach-s.u(14))
+			if box := s.place(at, 0.5, 0.5, letter, head); s.free(box.grown(s.u(4))) && s.open(mid.toward(dir, r+s.u(4)), to) {
 				s.pen(ink, narrow)
-				s.line(mid.toward(dir, r), mid.toward(dir, reach-s.u(14)))
+				s.line(from, to)
 				s.text(at, 0.5, 0.5, letter, head, ink)
 				return
 			}
@@ -73,12 +77,98 @@ func (s *sheet) magnified(main, v *view, letter string) {
 	}
 }
 
-// peak marks the place of the factor: a ring on the surface.
-func (s *sheet) peak(at point) {
-	s.pen(accent, 2)
-	s.dc.DrawCircle(at.X, at.Y, s.u(6))
-	s.dc.Stroke()
-	s.dc.SetColor(accent)
-	s.dc.DrawCircle(at.X, at.Y, s.u(2.2))
-	s.dc.Fill()
+// markPeak marks the place of the factor in the magnified view by a ring on the
+// surface, and says outside the circle what is there and where.
+func (p *plate) markPeak(v *view) {
+	at := v.at(p.peak)
+	p.pen(accent, 2)
+	p.dc.DrawCircle(at.X, at.Y, p.u(6))
+	p.dc.Stroke()
+	p.dc.SetColor(accent)
+	p.dc.DrawCircle(at.X, at.Y, p.u(2.2))
+	p.dc.Fill()
+	texts := p.peakTexts()
+	b := v.bounds()
+	cx, cy := b.middle()
+	center, radius := point{cx, cy}, b.width()/2
+	p.take(box{at.X, at.Y, at.X, at.Y}.grown(p.u(8)))
+	for _, place := range p.around(v, at) {
+		clear := true
+		for i, t := range texts {
+			b := p.place(place.line(p.sheet, i, len(texts)), place.anchor, 0, t, strong).grown(p.u(3))
+			clear = clear && p.free(b) && outside(b, center, radius)
+		}
+		if !clear {
+			continue
+		}
+		p.pen(accent, narrow)
+		p.line(at.toward(place.dir, p.u(8)), place.at)
+		for i, t := range texts {
+			p.text(place.line(p.sheet, i, len(texts)), place.anchor, 0, t, strong, ink)
+		}
+		return
+	}
+}
+
+// A callout is a place for a few lines of lettering beside a circle.
+type callout struct {
+	dir    point   // from the peak outwards
+	at     point   // end of the leader, just outside the circle
+	anchor float64 // 0: the lettering is to the right of it, 1: to the left
+	cost   float64
+}
+
+// line is where line i of n begins, or ends.
+func (c callout) line(s *sheet, i, n int) point {
+	high := s.u(strong.Size + 1)
+	return c.at.plus(s.u(6)*(1-2*c.anchor), high*(float64(i)-float64(n)/2))
+}
+
+// around lists places for a callout all round a circle, seen from a point in it:
+// the nearest first, those through the material after those through the air.
+func (p *plate) around(v *view, from point) []callout {
+	const places = 48
+	b := v.bounds()
+	x, y := b.middle()
+	radius := b.width()/2 + p.u(14)
+	var list []callout
+	for k := range places {
+		sin, cos := math.Sincos(2 * math.Pi * float64(k) / places)
+		at := point{x, y}.plus(radius*cos, radius*sin)
+		d := distance(from, at)
+		c := callout{dir: point{(at.X - from.X) / d, (at.Y - from.Y) / d}, at: at, cost: d}
+		if cos < 0 {
+			c.anchor = 1
+		}
+		if p.part.Region.Contains(v.model(from.toward(c.dir, p.u(10)))) {
+			c.cost += 4 * radius
+		}
+		list = append(list, c)
+	}
+	sort.SliceStable(list, func(i, j int) bool { return list[i].cost < list[j].cost })
+	return list
+}
+
+// outside tells whether a box keeps clear of a circle.
+func outside(b box, center point, radius float64) bool {
+	x := math.Max(b.X0, math.Min(b.X1, center.X))
+	y := math.Max(b.Y0, math.Min(b.Y1, center.Y))
+	return distance(point{x, y}, center) > radius
+}
+
+// peakTexts is the value at the peak, and the angle at which it sits.
+func (p *plate) peakTexts() []string {
+	e := p.finding.Computed.Factor
+	texts := []string{number.Decimal(p.top, 3)}
+	if p.plain() && e.Status.Settled() {
+		v, bar := number.UncertainParts(e.Value, e.Uncertainty)
+		texts = []string{v}
+		if bar != "" {
+			texts = append(texts, "± "+bar)
+		}
+	}
+	if len(p.options.Terms) == 0 {
+		texts = append(texts, "at "+number.Decimal(p.finding.Computed.Peak.ArcDegrees, 1)+"°")
+	}
+	return texts
 }

@@ -36,11 +36,26 @@ func extentOf(part *specimen.Part) extent {
 // broken off so that what is shown on either side of the notch is between
 // least and most heights long; left and right are where.
 func mainView(part *specimen.Part, area box, scale float64) (v *view, left, right float64) {
-	const least, most = 0.75, 1.7
+	return partView(part, area, true, scale)
+}
+
+// partView fits the part into an area, whole or, where a half is modelled, down
+// to the line of symmetry. In a narrow area less of the plain ends is shown.
+func partView(part *specimen.Part, area box, whole bool, scale float64) (v *view, left, right float64) {
+	const most = 1.7
+	least := 0.75
+	if area.width() < 800*scale {
+		least = 0.4
+	}
 	e := extentOf(part)
 	height := e.high - e.low
 	notch := e.notch1 - e.notch0
-	pixels := math.Min(area.height()/height, area.width()/(notch+2*least*height))
+	v = &view{mirror: part.Half && whole, half: part.Half && !whole}
+	low := e.low
+	if v.half {
+		low = 0
+	}
+	pixels := math.Min(area.height()/(e.high-low), area.width()/(notch+2*least*height))
 	reach := math.Min(most*height, (area.width()/pixels-notch)/2)
 	left, right = e.notch0-reach, e.notch1+reach
 	inside := 2 * breakSwing * scale / pixels // a break lies inside the plain stretch
@@ -51,20 +66,24 @@ func mainView(part *specimen.Part, area box, scale float64) (v *view, left, righ
 			right = math.Min(right, p.To-inside)
 		}
 	}
-	middle := r2.Vec{X: (left + right) / 2, Y: (e.low + e.high) / 2}
+	middle := r2.Vec{X: (left + right) / 2, Y: (low + e.high) / 2}
 	x, y := area.middle()
-	v = &view{scale: pixels, mirror: part.Half}
+	v.scale = pixels
 	// The axis lies between two rows of pixels, so that the mirror image of a
 	// row is a row.
 	v.origin = point{x - pixels*middle.X, math.Round(y + pixels*middle.Y)}
-	v.window = broken(v.at(r2.Vec{X: left, Y: e.high}), v.at(r2.Vec{X: right, Y: e.low}), scale)
+	v.window = broken(v.at(r2.Vec{X: left, Y: e.high}), v.at(r2.Vec{X: right, Y: low}), scale)
 	return v, left, right
 }
+
+// viewSpare is what a view's window is higher than the part, at the top and at
+// the bottom, in units.
+const viewSpare = 3
 
 // broken is the window of a view whose left and right ends are break lines. It
 // is higher than the part by the room that quills need.
 func broken(topLeft, bottomRight point, scale float64) []point {
-	spare := 3 * scale
+	spare := viewSpare * scale
 	top, bottom := topLeft.Y-spare, bottomRight.Y+spare
 	left, right := waves(topLeft.X, top, bottom, scale), waves(bottomRight.X, bottom, top, scale)
 	return append(left, right...)
@@ -111,6 +130,10 @@ func (s *sheet) breaks(v *view, part *specimen.Part, left, right float64) {
 		x := right
 		if p.To < p.From {
 			x = left
+		}
+		if v.half {
+			s.breakLine(v, x, p.Low, p.High)
+			continue
 		}
 		if part.Half && p.Low > 0 {
 			s.breakLine(v, x, p.Low, p.High)

@@ -76,7 +76,7 @@ func loadText(l *specimen.Load) string {
 func nominalText(l *specimen.Load) string {
 	text := "nominal stress " + l.Nominal.Formula
 	if l.Nominal.Section != "" {
-		text += "   (" + l.Nominal.Section + ")"
+		text += " (" + l.Nominal.Section + ")"
 	}
 	return text
 }
@@ -94,3 +94,5 @@ func verdictText(v verify.Verdict) string {
 	}
 	return "undecided"
 }
+
+func capitals(text string) string { return strings.ToUpper(text) }

@@ -1,28 +1,14 @@
 package render
 
-import (
-	"math"
-
-	"notchproof/mesh/lagrange"
-)
+import "math"
 
 // A painter fills rows of a raster from facets.
 type painter struct {
 	field  *field
 	raster *raster
+	up     tensor
+	down   tensor
 	axis   int // the rows from here on are the mirror images of those above; beyond the raster: none are
-	phi    []float64
-	line   *lagrange.Line
-	nodes  [][4]float64 // stresses at the nodes of the line
-	along  []float64
-}
-
-func newPainter(f *field, r *raster, axis int) *painter {
-	n := f.element.Order + 1
-	return &painter{
-		field: f, raster: r, axis: axis, phi: make([]float64, f.element.Count),
-		line: lagrange.NewLine(f.element.Order), nodes: make([][4]float64, n), along: make([]float64, n),
-	}
 }
 
 // rows fills the rows from y0 up to y1 and their mirror images. Facets are in
@@ -44,7 +30,8 @@ func (p *painter) rows(facets []facet, y0, y1 int) {
 // span fills what a facet covers of row y and of the mirror image of that row,
 // which is a row of pixels because the axis lies between two rows.
 func (p *painter) span(t *facet, y int) {
-	if t.twice() == 0 {
+	twice := t.twice()
+	if twice == 0 {
 		return
 	}
 	x0, x1 := t.cross(float64(y) + 0.5)
@@ -64,60 +51,37 @@ func (p *painter) span(t *facet, y int) {
 	if image := 2*p.axis - 1 - y; p.axis < area.Max.Y && image < area.Max.Y && image >= area.Min.Y {
 		lower = p.raster.values[p.raster.index(first, image):]
 	}
-	at := p.stresses(t, float64(y)+0.5, first, last)
+	// The reference coordinates are linear along the row.
+	xi, eta := t.reference(float64(first)+0.5, float64(y)+0.5)
+	dxi, deta := t.slope(twice)
+	c := &p.field.cells[t.cell]
 	for k := range last - first + 1 {
-		here, mirrored := p.field.read.value(at(k))
+		here, image := p.field.values(c, xi+float64(k)*dxi, eta+float64(k)*deta, lower != nil, &p.up, &p.down)
 		if upper != nil {
 			upper[k] = here
 		}
 		if lower != nil {
-			lower[k] = mirrored
+			lower[k] = image
 		}
 	}
 }
 
-// stresses gives the stresses at the pixels of a span, counted from its first.
-// Along a straight line through a facet the stress is a polynomial of the
-// element's order, so that on a long span order+1 evaluations give it exactly
-// everywhere.
-func (p *painter) stresses(t *facet, y float64, first, last int) func(k int) [4]float64 {
-	from := float64(first) + 0.5
-	if last-first < 2*len(p.nodes) {
-		return func(k int) [4]float64 { return p.stress(t, from+float64(k), y) }
-	}
-	length := float64(last - first)
-	for i, s := range p.line.Nodes {
-		p.nodes[i] = p.stress(t, from+s*length, y)
-	}
-	return func(k int) (s [4]float64) {
-		p.line.Basis(float64(k)/length, p.along)
-		for i, w := range p.along {
-			n := &p.nodes[i]
-			s[0] += w * n[0]
-			s[1] += w * n[1]
-			s[2] += w * n[2]
-			s[3] += w * n[3]
-		}
-		return s
-	}
-}
-
-// stress evaluates the stresses at a place in a facet.
-func (p *painter) stress(t *facet, x, y float64) (s [4]float64) {
+// reference gives the reference coordinates of a place in a facet.
+func (t *facet) reference(x, y float64) (xi, eta float64) {
 	a, b, c := t.corner[0], t.corner[1], t.corner[2]
 	twice := t.twice()
 	lb := ((x-a.X)*(c.Y-a.Y) - (c.X-a.X)*(y-a.Y)) / twice
 	lc := ((b.X-a.X)*(y-a.Y) - (x-a.X)*(b.Y-a.Y)) / twice
 	la := 1 - lb - lc
-	p.field.element.Basis(la*t.xi[0]+lb*t.xi[1]+lc*t.xi[2], la*t.eta[0]+lb*t.eta[1]+lc*t.eta[2], p.phi)
-	for k, v := range p.field.cells[t.cell].stress {
-		w := p.phi[k]
-		s[0] += w * v[0]
-		s[1] += w * v[1]
-		s[2] += w * v[2]
-		s[3] += w * v[3]
-	}
-	return s
+	return la*t.xi[0] + lb*t.xi[1] + lc*t.xi[2], la*t.eta[0] + lb*t.eta[1] + lc*t.eta[2]
+}
+
+// slope gives the change of the reference coordinates from pixel to pixel.
+func (t *facet) slope(twice float64) (dxi, deta float64) {
+	a, b, c := t.corner[0], t.corner[1], t.corner[2]
+	lb, lc := (c.Y-a.Y)/twice, -(b.Y-a.Y)/twice
+	la := -lb - lc
+	return la*t.xi[0] + lb*t.xi[1] + lc*t.xi[2], la*t.eta[0] + lb*t.eta[1] + lc*t.eta[2]
 }
 
 // twice is double the area of a facet, with a sign.
@@ -135,7 +99,7 @@ func (t *facet) cross(y float64) (x0, x1 float64) {
 			continue
 		}
 		x := a.X + (b.X-a.X)*(y-a.Y)/(b.Y-a.Y)
-		x0, x1 = math.Min(x0, x), math.Max(x1, x)
+		x0, x1 = min(x0, x), max(x1, x)
 	}
 	return x0, x1
 }

@@ -4,29 +4,53 @@ import (
 	"errors"
 	"fmt"
 	"image"
-	"image/draw"
-	"image/png"
-	"io"
 	"math"
 
 	"gonum.org/v1/gonum/spatial/r2"
 
-	"notchproof/scf"
 	"notchproof/verify"
 	"notchproof/verify/specimen"
 )
 
 // PictureOptions say how a picture is drawn. The zero value is the default.
 type PictureOptions struct {
-	Width int  // pixels; 0: 1600
-	Mesh  bool // draw the edges of the elements
+	Width int     // pixels; 0: 1600
+	DPI   float64 // pixels an inch, from which the size of letters follows; 0: 190, which puts 1600 on A4
+	Field string  // one of Fields(); "": first principal stress, in torsion the shear
+	Style string  // one of Styles(); "": wash
+	Whole bool    // both halves of a part of which one is modelled
+	Mesh  bool    // draw the edges of the elements
+
+	// Terms are the loads whose stresses are added up, each times its scale, all
+	// on the mesh of the finding; nil: the finding's own, once. Reference is what
+	// the sum is a multiple of; "": nominal.
+	Terms     []Term
+	Reference string
+
+	Edition string // the program with its version, for the title block; "": its name alone
 }
 
-// Picture draws the stresses of a finding: the whole part to scale with its
+// The styles of a picture.
+const (
+	StyleWash   = "wash"   // tones with contour lines
+	StyleFringe = "fringe" // dark-field isochromatic fringes of a photoelastic model
+)
+
+// Styles lists the styles by name, the default first.
+func Styles() []string { return []string{StyleWash, StyleFringe} }
+
+func (o PictureOptions) dpi() float64 {
+	if o.DPI > 0 {
+		return o.DPI
+	}
+	return usualDPI
+}
+
+// Picture draws the stresses of a finding: the part to scale with its
 // dimensions, the field as the ratio of stress to nominal stress with contour
 // lines, the stress along the surface of the notch as quills, the root
 // magnified, and a title block. The finding must hold the solution of its last
-// rung.
+// rung. Errors are a *FieldError where the part has no such field.
 func Picture(f *verify.Finding, part *specimen.Part, o PictureOptions) (image.Image, error) {
 	s, err := picture(f, part, o)
 	if err != nil {
@@ -35,17 +59,21 @@ func Picture(f *verify.Finding, part *specimen.Part, o PictureOptions) (image.Im
 	return s.im, nil
 }
 
-// WritePNG writes an image as PNG.
-func WritePNG(w io.Writer, im image.Image) error {
-	e := png.Encoder{CompressionLevel: png.BestSpeed}
-	return e.Encode(w, im)
+// A plate is a picture being drawn.
+type plate struct {
+	*sheet
+	part     *specimen.Part
+	finding  *verify.Finding
+	options  PictureOptions
+	layout   layout
+	terms    []Term
+	field    *field
+	surfaces []surface
+	peak     r2.Vec
+	top      float64 // the field at the peak
+	quill    float64 // its largest size along the notch
+	look     look
 }
-
-// The parts of a picture's sheet, in units.
-const (
-	detailX, detailY, detailRadius = 300, 852, 226
-	blockLeft, blockTop            = 620, 672
-)
 
 func picture(f *verify.Finding, part *specimen.Part, o PictureOptions) (*sheet, error) {
 	c := &f.Computed
@@ -55,49 +83,188 @@ func picture(f *verify.Finding, part *specimen.Part, o PictureOptions) (*sheet, 
 	case !(c.Peak.Factor > 0) || math.IsInf(c.Peak.Factor, 0):
 		return nil, fmt.Errorf("picture: peak factor %g cannot be drawn", c.Peak.Factor)
 	}
-	s := newSheet(o.Width, landscape)
-	p := &plate{sheet: s, part: part, finding: f, options: o, top: c.Peak.Factor}
-	p.levels = levels(p.top, 8)
-	antisymmetric := part.Half && f.Load.Name == scf.Bending
-	p.field = newField(c.Last, principal(antisymmetric))
-	if f.Load.Shear {
-		p.field = newField(c.Last, torsional())
+	p := &plate{part: part, finding: f, options: o, terms: o.Terms, top: c.Peak.Factor}
+	p.peak = r2.Vec{X: c.Peak.X, Y: c.Peak.Y}
+	if len(p.terms) == 0 {
+		p.terms = []Term{{Solution: c.Last, Load: f.Load, Scale: 1}}
 	}
-	p.surfaces = surfaces(c.Last, part, f.Load)
-
-	s.titleBlock(box{s.u(blockLeft), s.u(blockTop), s.frame.X1, s.frame.Y1}, f, part)
-	s.legend(s.area(blockLeft, blockTop-96, defaultWidth-frameMargin-20, blockTop), p.title(), p.note(antisymmetric), p.top, p.levels)
+	if err := p.read(); err != nil {
+		return nil, err
+	}
+	p.survey()
+	p.spread()
+	p.legend(p.box(p.layout.legend), p.title(), p.note(), p.look.scale())
+	p.titleBlock(p.box(p.layout.block))
 	p.draw()
-	return s, nil
+	return p.sheet, nil
 }
 
-// A plate is a picture being drawn.
-type plate struct {
-	*sheet
-	part     *specimen.Part
-	finding  *verify.Finding
-	options  PictureOptions
-	field    *field
-	surfaces []surface
-	top      float64
-	levels   []float64
-}
-
-func (p *plate) title() string {
-	if p.finding.Load.Shear {
-		return "shear stress ÷ nominal"
+// read finds the field and how it looks.
+func (p *plate) read() error {
+	o := p.options
+	name := o.Field
+	if name == "" {
+		name = FieldPrincipal
 	}
-	return "first principal stress ÷ nominal"
-}
-
-func (p *plate) note(antisymmetric bool) string {
+	read, err := readingOf(name, round(p.part), p.twistAlone())
 	switch {
-	case antisymmetric:
-		return "lower half: the same stresses with the opposite sign"
-	case p.part.Half:
-		return "lower half is the mirror image"
+	case err != nil:
+		return err
+	case o.Style == StyleFringe && o.Field != "":
+		return &FieldError{o.Field, "fringes show the difference of the principal stresses alone"}
+	case o.Style == StyleFringe && p.twistAlone():
+		read = reading{of: twistDifference}
+	case o.Style == StyleFringe:
+		read = reading{of: principalDifference}
+	case o.Style != "" && o.Style != StyleWash:
+		return fmt.Errorf("picture: no style %q", o.Style)
 	}
-	return ""
+	if p.field, err = newField(p.terms, p.part.Half, o.Whole, read); err != nil {
+		return err
+	}
+	low, high := p.field.low, p.field.high
+	if p.plain() {
+		high = p.top
+	}
+	if !(high > low) || math.IsInf(high, 0) || math.IsInf(low, 0) {
+		return &FieldError{name, "the stress is the same everywhere"}
+	}
+	if o.Style == StyleFringe {
+		p.look = newFringes(high)
+		return nil
+	}
+	if !read.signed {
+		low = 0
+	}
+	p.look = newWash(math.Min(low, 0), math.Max(high, 0))
+	return nil
+}
+
+// survey reads the field along the notch. Of one load the peak is where the
+// factor sits, of several where the field is highest.
+func (p *plate) survey() {
+	p.surfaces = surfaces(p.terms, p.part, p.field.read)
+	if len(p.options.Terms) > 0 {
+		best := math.Inf(-1)
+		for i := range p.surfaces {
+			if n := p.surfaces[i].highest(); n.Value > best {
+				best, p.peak = n.Value, n.At
+			}
+		}
+	}
+	e := extentOf(p.part)
+	list := p.along((e.high-e.low)/400, 0.5*(e.high-e.low))
+	for _, n := range list {
+		if n.behind == 0 && !p.plain() {
+			p.top = n.Value
+		}
+		p.quill = math.Max(p.quill, math.Abs(n.Value))
+	}
+}
+
+// plain tells that the field is the one whose peak is the factor.
+func (p *plate) plain() bool {
+	o := p.options
+	return (o.Field == "" || o.Field == FieldPrincipal) && o.Style != StyleFringe && len(o.Terms) == 0
+}
+
+// twistAlone tells that nothing but torsion acts.
+func (p *plate) twistAlone() bool {
+	for _, t := range p.terms {
+		if !(strandOf(t, false).twist) {
+			return false
+		}
+	}
+	return true
+}
+
+// antisymmetric tells that the half that is not modelled carries the opposite
+// stresses.
+func (p *plate) antisymmetric() bool {
+	for _, t := range p.terms {
+		if !strandOf(t, p.part.Half).odd {
+			return false
+		}
+	}
+	return true
+}
+
+// spread lays out the sheet and takes the paper.
+func (p *plate) spread() {
+	width := p.options.Width
+	if width == 0 {
+		width = defaultWidth
+	}
+	wide := unitsAcross(float64(width) / p.options.dpi() * millimetresPerInch)
+	scale := float64(width) / wide
+	ruler := rulerOf(scale)
+	main, _, _ := partView(p.part, partRoom(wide), p.options.Whole, 1)
+	high := main.bounds().height() - 2*viewSpare
+	block := heightOf(p.rows(ruler, blockWidth(wide)*scale)) / scale
+	p.layout = arrange(wide, high, dimensionRows(main, p.part), block)
+	p.sheet = newSheetOf(width, wide, p.layout.high)
+}
+
+func (s *sheet) box(b box) box { return s.area(b.X0, b.Y0, b.X1, b.Y1) }
+
+func (s *sheet) point(p point) point { return point{s.u(p.X), s.u(p.Y)} }
+
+func (p *plate) reference() string {
+	if p.options.Reference != "" {
+		return p.options.Reference
+	}
+	return "nominal"
+}
+
+// title says what the tones mean.
+func (p *plate) title() string {
+	ratio := " ÷ " + p.reference()
+	twist := p.twistAlone()
+	if p.options.Style == StyleFringe {
+		return p.look.title(p.reference())
+	}
+	switch p.options.Field {
+	case FieldMises:
+		if twist {
+			return "von Mises stress ÷ √3 " + p.reference()
+		}
+		return "von Mises stress" + ratio
+	case FieldShear:
+		if !twist {
+			return "largest shear in the drawn plane" + ratio
+		}
+	case FieldAxial:
+		return "axial stress" + ratio
+	case FieldTransverse:
+		if round(p.part) {
+			return "radial stress" + ratio
+		}
+		return "transverse stress" + ratio
+	case FieldShearXY:
+		return "shear stress xy" + ratio
+	case FieldHoop:
+		return "hoop stress" + ratio
+	}
+	if twist {
+		return "shear stress" + ratio
+	}
+	return "first principal stress" + ratio
+}
+
+// note says what else a reader must know of the field.
+func (p *plate) note() string {
+	text := p.look.note(p)
+	if p.part.Half && p.options.Whole {
+		half := "lower half: mirror image"
+		if p.antisymmetric() {
+			half = "lower half: the same stresses with the opposite sign"
+		}
+		if text != "" {
+			text += "; "
+		}
+		text += half
+	}
+	return text
 }
 
 // Quills: the distance between them and the length of the largest, in units.
@@ -107,15 +274,13 @@ const (
 )
 
 func (p *plate) draw() {
-	main, left, right := mainView(p.part, p.area(165, 112, 1435, 512), p.scale)
-	peak := r2.Vec{X: p.finding.Computed.Peak.X, Y: p.finding.Computed.Peak.Y}
-	close, times := detail(p.part, peak, main, point{p.u(detailX), p.u(detailY)}, p.u(detailRadius))
-	p.text(point{p.u(50), p.u(blockTop - 96)}, 0, 0, "A", head, ink)
-	p.text(point{p.u(50) + p.u(24), p.u(blockTop - 94)}, 0, 0, levelText(times)+" : 1 of the view above", normal, grey)
+	main, left, right := partView(p.part, p.box(p.layout.main), p.options.Whole, p.scale)
+	close, times := detail(p.part, p.peak, main, p.point(p.layout.detail), p.u(p.layout.radius))
+	p.captions(times)
 
 	field := p.paint(main)
 	e := extentOf(p.part)
-	p.quills(main, p.needles(main, peak, 0.5*(e.high-e.low)), p.u(mainQuill)/p.top, p.u(mainStep))
+	p.quills(main, p.needles(main, 0.5*(e.high-e.low)), p.u(mainQuill)/p.quill, p.u(mainStep))
 	p.annotate(main, p.part, left, right, false)
 	p.magnified(main, close, "A")
 	p.lines(main, field, 2)
@@ -123,78 +288,79 @@ func (p *plate) draw() {
 	if p.part.Half {
 		p.symmetry(main, 18)
 	}
-	p.load(main, p.part, p.finding.Load.Name, left, right)
+	for _, t := range p.terms {
+		p.load(main, p.part, t.Load.Name, left, right)
+	}
+	p.closeUp(close)
+}
 
-	p.closeUp(close, peak)
+func (p *plate) captions(times float64) {
+	at := p.point(p.layout.caption)
+	a := p.text(at, 0, 0, "A", head, ink)
+	p.text(point{a.X1 + p.u(10), at.Y + p.u(3)}, 0, 0, levelText(times)+" : 1 of the view above", normal, grey)
 }
 
 // closeUp draws the magnified root in its circle.
-func (p *plate) closeUp(v *view, peak r2.Vec) {
+func (p *plate) closeUp(v *view) {
 	b := v.bounds()
 	x, y := b.middle()
 	field := p.paint(v)
-	needles := p.needles(v, peak, 1.5*b.width()/v.scale)
+	needles := p.needles(v, 1.5*b.width()/v.scale)
 	p.within(v)
-	p.quills(v, needles, p.u(closeQuill)/p.top, p.u(closeStep))
+	p.quills(v, needles, p.u(closeQuill)/p.quill, p.u(closeStep))
 	p.dc.ResetClip()
 	p.lines(v, field, 1)
 	p.pen(ink, wide)
 	p.dc.DrawCircle(x, y, b.width()/2)
 	p.dc.Stroke()
-	p.peak(v.at(peak))
+	p.markPeak(v)
 }
 
 // paint lays the field of a view on the sheet, with soft edges, and gives its
 // values.
 func (p *plate) paint(v *view) *raster {
 	r := p.field.shade(v)
-	soft := r.bled(2)
 	mask := coverage(r.area, v.loops(p.part)...)
 	multiply(mask, coverage(r.area, v.window))
-	draw.DrawMask(p.im, r.area, soft.picture(p.top), r.area.Min, mask, r.area.Min, draw.Over)
+	r.lay(p.im, mask, p.look.painter(r))
 	return r
 }
 
 // lines draws elements, contours and edges over the field of a view; most is
 // the number of labels a level.
 func (p *plate) lines(v *view, r *raster, most int) {
-	cs := trace(r, p.shown(r))
-	p.label(v, r, cs, most)
+	cs := p.look.contours(r)
+	p.label(v, r, cs, most, p.look)
 	p.within(v)
 	if p.options.Mesh {
 		p.elements(v, p.finding.Computed.Last.Problem.Shape)
 	}
-	p.contours(cs, p.top)
+	p.contours(cs, p.look)
 	p.edges(v, p.part, wide, ink)
 	p.dc.ResetClip()
-	p.letter(cs, p.top)
+	p.letter(cs, p.look)
 }
 
-// shown gives the levels of the contours of a view: those of the legend, and a
-// finer set where the view shows little but the lower end of the ramp.
-func (p *plate) shown(r *raster) []float64 {
-	const most, few = 0.98, 0.4
-	if high := r.quantile(most, p.top); high < few*p.top {
-		return levels(high, 6)
-	}
-	return p.levels
+// needles gives the field along the surface that the peak lies on, as far as
+// reach (a length of the part) to both sides of the peak, fine enough for a view.
+func (p *plate) needles(v *view, reach float64) []needle {
+	const spacing = 1.5 // units
+	return p.along(p.u(spacing)/v.scale, reach)
 }
 
-// needles gives the stress along the surface that the peak lies on, as far as
-// reach (a length of the part) to both sides of the peak.
-func (p *plate) needles(v *view, peak r2.Vec, reach float64) []needle {
+// along is needles at steps of a length of the part.
+func (p *plate) along(step, reach float64) []needle {
 	var on *surface
 	at, gap := 0.0, math.Inf(1)
 	for i := range p.surfaces {
-		if a, g := p.surfaces[i].nearest(peak); g < gap {
+		if a, g := p.surfaces[i].nearest(p.peak); g < gap {
 			on, at, gap = &p.surfaces[i], a, g
 		}
 	}
 	if on == nil {
 		return nil
 	}
-	const spacing = 1.5 // units
-	return on.needles(at, p.u(spacing)/v.scale, reach)
+	return on.needles(at, step, reach)
 }
 
 func multiply(a, b *image.Alpha) {

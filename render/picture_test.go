@@ -1,6 +1,7 @@
 package render
 
 import (
+	"io"
 	"testing"
 
 	"gonum.org/v1/gonum/spatial/r2"
@@ -46,11 +47,12 @@ func TestPictureTwice(t *testing.T) {
 func TestPictureTones(t *testing.T) {
 	part := newPart(t, "bar-shoulder", scf.Dims{"D": 60, "d": 40, "r": 5})
 	f := solved(t, part, scf.Tension, 4)
-	s, err := picture(f, part, PictureOptions{Width: 800})
+	s, err := picture(f, part, PictureOptions{Width: 800, DPI: 95, Whole: true})
 	if err != nil {
 		t.Fatal(err)
 	}
-	v, left, right := mainView(part, s.area(165, 112, 1435, 512), s.scale)
+	room := partRoom(1600)
+	v, left, right := partView(part, s.box(room), true, s.scale)
 	for i, x := range []float64{left, right} {
 		p := v.at(r2.Vec{X: x, Y: part.Dims["d"] / 4})
 		p.X += []float64{20, -20}[i]
@@ -63,20 +65,36 @@ func TestPictureTones(t *testing.T) {
 	}
 }
 
+// BenchmarkPicture is all that a picture takes beyond the solve: drawing it at
+// the default width and writing the PNG.
 func BenchmarkPicture(b *testing.B) {
 	part := newPart(b, "shaft-shoulder", scf.Dims{"D": 60, "d": 40, "r": 3})
 	f := solved(b, part, scf.Bending, 7)
-	for b.Loop() {
-		if _, err := Picture(f, part, PictureOptions{}); err != nil {
-			b.Fatal(err)
-		}
+	for _, c := range []struct {
+		name string
+		o    PictureOptions
+	}{{"half", PictureOptions{}}, {"whole", PictureOptions{Whole: true}}, {"mesh", PictureOptions{Mesh: true}}, {"fringe", PictureOptions{Style: StyleFringe}}} {
+		b.Run(c.name, func(b *testing.B) {
+			for b.Loop() {
+				im, err := Picture(f, part, c.o)
+				if err != nil {
+					b.Fatal(err)
+				}
+				if err := WritePNG(io.Discard, im); err != nil {
+					b.Fatal(err)
+				}
+			}
+		})
 	}
 }
 
 func BenchmarkShade(b *testing.B) {
 	part := newPart(b, "shaft-shoulder", scf.Dims{"D": 60, "d": 40, "r": 3})
 	f := solved(b, part, scf.Bending, 7)
-	field := newField(f.Computed.Last, principal(true))
+	field, err := newField([]Term{{f.Computed.Last, f.Load, 1}}, true, true, reading{of: firstPrincipal})
+	if err != nil {
+		b.Fatal(err)
+	}
 	v, _, _ := mainView(part, box{165, 112, 1435, 512}, 1)
 	for b.Loop() {
 		field.shade(v)

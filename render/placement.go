@@ -115,12 +115,15 @@ func radiusBelow(name string) func(g geometry) (a, b r2.Vec) {
 	}
 }
 
+// dimensionRow is the distance of dimension lines below the part, in units.
+const dimensionRow = 34
+
 // annotate draws all dimensions of a part in a view; named puts before each the
 // name that it goes by on the command line.
 func (s *sheet) annotate(v *view, part *specimen.Part, left, right float64, named bool) {
 	g := geometry{part.Dims, part, left, right, extentOf(part)}
 	material := v.loops(part)
-	rows := 0
+	below, above := 0, 0
 	for _, p := range placementsOf(part) {
 		if p.Skip != nil && p.Skip(part.Dims) {
 			continue
@@ -138,9 +141,17 @@ func (s *sheet) annotate(v *view, part *specimen.Part, left, right float64, name
 		case acrossInside:
 			s.across(v, a, b, v.at(a).X, text)
 		case alongBelow:
-			s.along(v, a, b, v.bounds().Y1+s.u(30+34*float64(rows)), text)
-			rows++
+			if v.half && a.Y < 0 { // in the half that is left out
+				s.along(v, mirrored(a), mirrored(b), v.bounds().Y0-s.u(aboveQuills+dimensionRow*float64(above)), text)
+				above++
+				continue
+			}
+			s.along(v, a, b, v.bounds().Y1+s.u(30+dimensionRow*float64(below)), text)
+			below++
 		case leaderTo:
+			if v.half && a.Y < 0 {
+				a, b = mirrored(a), mirrored(b)
+			}
 			p, q := v.at(a), v.at(b)
 			away := point{0.6, 0.8} // where there is no direction to come from
 			if l := distance(p, q); l > 0 {
@@ -149,6 +160,25 @@ func (s *sheet) annotate(v *view, part *specimen.Part, left, right float64, name
 			s.leader(p, away, text, material)
 		}
 	}
+}
+
+// aboveQuills is the distance of a dimension line above the part, in units.
+const aboveQuills = 82
+
+// dimensionRows counts the dimension lines along the part, above it and below.
+func dimensionRows(v *view, part *specimen.Part) (rows [2]int) {
+	g := geometry{part.Dims, part, 0, 0, extentOf(part)}
+	for _, p := range placementsOf(part) {
+		if p.Kind != alongBelow || p.Skip != nil && p.Skip(part.Dims) {
+			continue
+		}
+		if a, _ := p.At(g); v.half && a.Y < 0 {
+			rows[0]++
+		} else {
+			rows[1]++
+		}
+	}
+	return rows
 }
 
 // lettered is the text of a dimension: its value, or what is measured between

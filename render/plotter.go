@@ -1,10 +1,13 @@
 package render
 
 import (
+	"image"
 	"image/color"
+	"math"
 
 	"github.com/fogleman/gg"
 	"golang.org/x/image/font"
+	"golang.org/x/image/math/fixed"
 )
 
 // A plotter is what a sheet is drawn on. There are two kinds: pixels, and SVG
@@ -36,9 +39,40 @@ type plotter interface {
 }
 
 // pixels is the plotter of pictures.
-type pixels struct{ *gg.Context }
+type pixels struct {
+	*gg.Context
+	im      *image.RGBA
+	ink     *image.Uniform
+	clipped bool
+}
 
-func (c pixels) letter(text string, p point, _ float64, _ lettering, face font.Face) {
-	c.SetFontFace(face)
-	c.DrawString(text, p.X, p.Y)
+func newPixels(im *image.RGBA) *pixels {
+	return &pixels{Context: gg.NewContextForRGBA(im), im: im, ink: image.Black}
+}
+
+func (c *pixels) SetColor(k color.Color) {
+	c.Context.SetColor(k)
+	c.ink = image.NewUniform(k)
+}
+
+func (c *pixels) Clip() {
+	c.Context.Clip()
+	c.clipped = true
+}
+
+func (c *pixels) ResetClip() {
+	c.Context.ResetClip()
+	c.clipped = false
+}
+
+// letter draws glyphs straight, to a quarter of a pixel; gg turns and scales
+// each of them, which takes five times as long.
+func (c *pixels) letter(text string, p point, _ float64, _ lettering, face font.Face) {
+	if c.clipped {
+		c.SetFontFace(face)
+		c.DrawString(text, p.X, p.Y)
+		return
+	}
+	d := font.Drawer{Dst: c.im, Src: c.ink, Face: face, Dot: fixed.Point26_6{X: fixed.Int26_6(math.Round(p.X * 64)), Y: fixed.Int26_6(math.Round(p.Y * 64))}}
+	d.DrawString(text)
 }

@@ -21,6 +21,45 @@ const (
 	rampSteps         = 1024
 )
 
+// A ramp takes values to tones. Where a field has a sign the lightness falls
+// in the same straight line from the lowest value, through zero, to the highest:
+// one tone is one value in grey print too, which no ramp that darkens both ways
+// can say. On top of that what is below zero is sand, and what is above is
+// petrol, and the zero line is drawn.
+type ramp struct {
+	low, high float64
+	table     *rampTable
+}
+
+type rampTable [rampSteps + 1]color.RGBA
+
+// newRamp gives the ramp from a low to a high value, low ≤ 0 < high.
+func newRamp(low, high float64) *ramp {
+	if low == 0 {
+		return &ramp{0, high, plainRamp()}
+	}
+	table, zero := new(rampTable), -low/(high-low)
+	curve := func(t float64) oklab { return signedCurve(t, zero) }
+	table.walk(curve, 0, zero)
+	table.walk(curve, zero, 1)
+	return &ramp{low, high, table}
+}
+
+// tone gives the colour of a value; what is beyond takes the end of the ramp.
+func (r *ramp) tone(v float64) color.RGBA {
+	t := (v - r.low) / (r.high - r.low)
+	switch {
+	case !(t > 0): // and what is no number
+		return r.table[0]
+	case t >= 1:
+		return r.table[rampSteps]
+	}
+	return r.table[int(t*rampSteps+0.5)]
+}
+
+// over is the ink for lines and lettering on top of a value's tone.
+func (r *ramp) over(v float64) color.NRGBA { return inkOver(r.tone(v)) }
+
 // rampCurve is the path through the space of colours, t from 0 (light) to 1.
 // Its speed is not yet even.
 func rampCurve(t float64) oklab {
@@ -28,18 +67,43 @@ func rampCurve(t float64) oklab {
 	return polar(lightEnd+t*(darkEnd-lightEnd), chromaEnds+chromaSwell*swell, hueStart+hueTurn*t)
 }
 
-// rampTable walks the curve in steps of equal length, so that equal steps of
-// stress look equal.
-var rampTable = sync.OnceValue(func() *[rampSteps + 1]color.RGBA {
-	const fine = 8 * rampSteps
-	var along [fine + 1]float64
-	for i := 1; i <= fine; i++ {
-		along[i] = along[i-1] + rampCurve(float64(i)/fine).distance(rampCurve(float64(i-1)/fine))
+// signedCurve is the path with zero at a share of it. Both hues are without
+// colour at zero, where they meet; below it chroma is kept within what the
+// screen has of a light sand.
+func signedCurve(t, zero float64) oklab {
+	const sand, sandSwell = 70, 0.075 // hue in degrees, chroma
+	lightness := lightEnd + t*(darkEnd-lightEnd)
+	if t < zero {
+		away := (zero - t) / zero
+		return polar(lightness, sandSwell*math.Min(1, 1.6*zero)*away*(1-0.45*away*away), sand)
 	}
-	table := new([rampSteps + 1]color.RGBA)
+	away := (t - zero) / (1 - zero)
+	swell := math.Sin(math.Pi * math.Pow(away, 0.85))
+	return polar(lightness, chromaSwell*swell*(1-0.35*zero)+chromaEnds*away, hueStart+hueTurn*t)
+}
+
+// plainRamp walks the curve of fields without a sign.
+var plainRamp = sync.OnceValue(func() *rampTable {
+	table := new(rampTable)
+	table.walk(rampCurve, 0, 1)
+	return table
+})
+
+// walk goes along a piece of a curve in steps of equal length, so that equal
+// steps of stress look equal.
+func (table *rampTable) walk(curve func(t float64) oklab, from, to float64) {
+	const fine = 4 * rampSteps
+	piece := func(i float64) oklab { return curve(from + (to-from)*i/fine) }
+	along := make([]float64, fine+1)
+	last := piece(0)
+	for i := 1; i <= fine; i++ {
+		c := piece(float64(i))
+		along[i] = along[i-1] + c.distance(last)
+		last = c
+	}
 	k := 0
-	for i := range table {
-		want := along[fine] * float64(i) / rampSteps
+	for i := int(math.Ceil(from * rampSteps)); i <= int(to*rampSteps); i++ {
+		want := along[fine] * (float64(i)/rampSteps - from) / (to - from)
 		for k < fine && along[k+1] < want {
 			k++
 		}
@@ -47,22 +111,20 @@ var rampTable = sync.OnceValue(func() *[rampSteps + 1]color.RGBA {
 		if k < fine && along[k+1] > along[k] {
 			t += (want - along[k]) / (along[k+1] - along[k])
 		}
-		table[i] = rampCurve(t / fine).rgba()
+		table[i] = piece(t).rgba()
 	}
-	return table
-})
-
-// tone gives the colour of a value between 0 and 1; what is beyond takes the
-// end of the ramp.
-func tone(v float64) color.RGBA {
-	return rampTable()[int(math.Round(math.Max(0, math.Min(1, v))*rampSteps))]
 }
 
-// over is the ink for lines and lettering on top of a tone: black or white,
-// whichever has the higher contrast. By the ratio of WCAG 2.1 both are equal,
-// at 4.6 : 1, on a tone of 0.179 of white's luminance.
-func over(v float64) color.NRGBA {
-	c := tone(v)
+// tone gives the colour of a value between 0 and 1 on the plain ramp.
+func tone(v float64) color.RGBA { return newRamp(0, 1).tone(v) }
+
+// over is the ink on top of that tone.
+func over(v float64) color.NRGBA { return inkOver(tone(v)) }
+
+// inkOver is black or white, whichever has the higher contrast to a tone. By
+// the ratio of WCAG 2.1 both are equal, at 4.6 : 1, on a tone of 0.179 of
+// white's luminance.
+func inkOver(c color.RGBA) color.NRGBA {
 	luminance := 0.2126*decode(c.R) + 0.7152*decode(c.G) + 0.0722*decode(c.B)
 	if luminance < 0.179 {
 		return color.NRGBA{255, 255, 255, 255}

@@ -2,6 +2,7 @@ package render
 
 import (
 	"image"
+	"image/color"
 	"math"
 )
 
@@ -51,19 +52,32 @@ func (r *raster) covers(b box) bool {
 	return true
 }
 
-// share is the part of the material that is within a distance of a level.
-func (r *raster) share(level, within float64) float64 {
-	near, all := 0, 0
+// shares is, for each level, the part of the material that is within a distance
+// of it.
+func (r *raster) shares(levels []float64, within float64) []float64 {
+	near, all := make([]float64, len(levels)), 0
+	l := 0 // the level next to the last pixel's value
 	for _, v := range r.values {
-		if math.IsNaN(v) {
+		if v != v {
 			continue
 		}
 		all++
-		if math.Abs(v-level) <= within {
-			near++
+		for l+1 < len(levels) && levels[l+1] <= v {
+			l++
+		}
+		for l > 0 && levels[l] > v {
+			l--
+		}
+		for k := l; k < min(l+2, len(levels)); k++ {
+			if math.Abs(v-levels[k]) <= within {
+				near[k]++
+			}
 		}
 	}
-	return float64(near) / float64(max(1, all))
+	for k := range near {
+		near[k] /= float64(max(1, all))
+	}
+	return near
 }
 
 // quantile gives the value that a share q of the material does not exceed, to
@@ -87,49 +101,59 @@ func (r *raster) quantile(q, top float64) float64 {
 	return top
 }
 
-// bled gives a raster in which pixels beside the material have the value of
-// their neighbours, so that pixels which the boundary cuts have one.
-func (r *raster) bled(steps int) *raster {
-	w, h := r.area.Dx(), r.area.Dy()
-	wider := &raster{r.area, append([]float64(nil), r.values...)}
-	for range steps {
-		old := append([]float64(nil), wider.values...)
-		for y := range h {
-			for x := range w {
-				if i := y*w + x; math.IsNaN(old[i]) {
-					wider.values[i] = beside(old, w, h, x, y)
+// nearby gives the value of a pixel beside the material, that the boundary cuts:
+// the mean of those around it, NaN when there are none within two pixels.
+func (r *raster) nearby(x, y int) float64 {
+	for reach := 1; reach <= 2; reach++ {
+		sum, n := 0.0, 0
+		for j := max(r.area.Min.Y, y-reach); j <= min(r.area.Max.Y-1, y+reach); j++ {
+			for i := max(r.area.Min.X, x-reach); i <= min(r.area.Max.X-1, x+reach); i++ {
+				if v := r.values[r.index(i, j)]; v == v {
+					sum += v
+					n++
 				}
 			}
 		}
+		if n > 0 {
+			return sum / float64(n)
+		}
 	}
-	return wider
+	return math.NaN()
 }
 
-// beside is the mean of the values around a pixel, NaN when there are none.
-func beside(values []float64, w, h, x, y int) float64 {
-	sum, n := 0.0, 0
-	for j := max(0, y-1); j <= min(h-1, y+1); j++ {
-		for i := max(0, x-1); i <= min(w-1, x+1); i++ {
-			if v := values[j*w+i]; !math.IsNaN(v) {
-				sum += v
-				n++
+// lay paints the values on a picture where a mask, of the raster's own area,
+// lets them through.
+func (r *raster) lay(im *image.RGBA, mask *image.Alpha, paint func(x, y int, v float64) color.RGBA) {
+	area := r.area.Intersect(im.Bounds())
+	concurrently(area.Dy(), func() func(i int) {
+		return func(i int) {
+			y := area.Min.Y + i
+			row := im.Pix[im.PixOffset(area.Min.X, y):]
+			for x := area.Min.X; x < area.Max.X; x++ {
+				a := uint32(mask.Pix[mask.PixOffset(x, y)])
+				if a == 0 {
+					continue
+				}
+				v := r.values[r.index(x, y)]
+				if v != v {
+					if v = r.nearby(x, y); v != v {
+						continue
+					}
+				}
+				c, to := paint(x, y, v), row[4*(x-area.Min.X):][:3]
+				if a == 255 {
+					to[0], to[1], to[2] = c.R, c.G, c.B
+					continue
+				}
+				to[0] = mixed(c.R, to[0], a)
+				to[1] = mixed(c.G, to[1], a)
+				to[2] = mixed(c.B, to[2], a)
 			}
 		}
-	}
-	if n == 0 {
-		return math.NaN()
-	}
-	return sum / float64(n)
+	})
 }
 
-// picture colours the values, top being the dark end of the ramp.
-func (r *raster) picture(top float64) *image.RGBA {
-	im := image.NewRGBA(r.area)
-	for i, v := range r.values {
-		if !math.IsNaN(v) {
-			c := tone(v / top)
-			im.Pix[4*i], im.Pix[4*i+1], im.Pix[4*i+2], im.Pix[4*i+3] = c.R, c.G, c.B, c.A
-		}
-	}
-	return im
+// mixed lays one part in 255 of a colour over another.
+func mixed(over, under uint8, a uint32) uint8 {
+	return uint8((uint32(over)*a + uint32(under)*(255-a) + 127) / 255)
 }

@@ -4,8 +4,6 @@ import (
 	"image"
 	"math"
 	"sort"
-
-	"gonum.org/v1/gonum/spatial/r2"
 )
 
 // shade reads a field at the centre of every pixel of a view's window. A
@@ -24,7 +22,7 @@ func (f *field) shade(v *view) *raster {
 	}
 	const band = 16
 	concurrently((end-top+band-1)/band, func() func(i int) {
-		p := newPainter(f, r, axis)
+		p := &painter{field: f, raster: r, axis: axis}
 		return func(i int) {
 			y := top + i*band
 			p.rows(facets, y, min(y+band, end))
@@ -51,8 +49,7 @@ func (f *field) facets(v *view, area image.Rectangle) []facet {
 	}
 	lists := make([][]facet, len(f.cells))
 	concurrently(len(f.cells), func() func(i int) {
-		phi := make([]float64, f.element.Count)
-		return func(i int) { lists[i] = f.cut(v, i, reach, phi) }
+		return func(i int) { lists[i] = f.cut(v, i, reach) }
 	})
 	var all []facet
 	for _, l := range lists {
@@ -63,7 +60,7 @@ func (f *field) facets(v *view, area image.Rectangle) []facet {
 }
 
 // cut gives the facets of one triangle that meet an area.
-func (f *field) cut(v *view, i int, reach box, phi []float64) []facet {
+func (f *field) cut(v *view, i int, reach box) []facet {
 	c := &f.cells[i]
 	hull := box{math.Inf(1), math.Inf(1), math.Inf(-1), math.Inf(-1)}
 	for _, n := range c.nodes {
@@ -80,34 +77,43 @@ func (f *field) cut(v *view, i int, reach box, phi []float64) []facet {
 		const wide, most = 4, 256
 		n = max(1, min(most, int(math.Ceil(size/wide))))
 	}
-	grid := func(a, b int) (p point, xi, eta float64) {
-		xi, eta = float64(a)/float64(n), float64(b)/float64(n)
-		f.element.Basis(xi, eta, phi)
-		var at r2.Vec
-		for k, w := range phi {
-			at = r2.Add(at, r2.Scale(w, c.nodes[k]))
+	// The corners of a row are those of the row before, one further on.
+	row := func(b int) []facetCorner {
+		ps := make([]facetCorner, n-b+1)
+		for a := range ps {
+			xi, eta := float64(a)/float64(n), float64(b)/float64(n)
+			ps[a] = facetCorner{v.at(f.at(c, xi, eta)), xi, eta}
 		}
-		return v.at(at), xi, eta
+		return ps
 	}
 	var list []facet
-	add := func(corners ...[2]int) {
+	add := func(corners ...facetCorner) {
 		t := facet{cell: i}
 		for k, g := range corners {
-			t.corner[k], t.xi[k], t.eta[k] = grid(g[0], g[1])
+			t.corner[k], t.xi[k], t.eta[k] = g.at, g.xi, g.eta
 		}
-		ys := [3]float64{t.corner[0].Y, t.corner[1].Y, t.corner[2].Y}
-		t.top, t.low = math.Min(ys[0], math.Min(ys[1], ys[2])), math.Max(ys[0], math.Max(ys[1], ys[2]))
+		t.top = min(t.corner[0].Y, t.corner[1].Y, t.corner[2].Y)
+		t.low = max(t.corner[0].Y, t.corner[1].Y, t.corner[2].Y)
 		if t.top <= reach.Y1 && t.low >= reach.Y0 {
 			list = append(list, t)
 		}
 	}
+	below := row(0)
 	for b := range n {
+		above := row(b + 1)
 		for a := range n - b {
-			add([2]int{a, b}, [2]int{a + 1, b}, [2]int{a, b + 1})
+			add(below[a], below[a+1], above[a])
 			if a+b+1 < n {
-				add([2]int{a + 1, b}, [2]int{a + 1, b + 1}, [2]int{a, b + 1})
+				add(below[a+1], above[a+1], above[a])
 			}
 		}
+		below = above
 	}
 	return list
+}
+
+// A facetCorner is a point of a triangle on the sheet.
+type facetCorner struct {
+	at      point
+	xi, eta float64
 }

@@ -4,9 +4,6 @@ import (
 	"image"
 	"image/color"
 	"math"
-
-	"github.com/fogleman/gg"
-	"golang.org/x/image/font"
 )
 
 // Inks. The one accent stands for what was measured at the surface; nothing
@@ -32,12 +29,11 @@ const (
 
 // A sheet is the paper being drawn on, with a record of the places taken.
 type sheet struct {
+	*ruler
 	dc    plotter
 	im    *image.RGBA // what dc draws on; nil where that is not made of pixels
-	scale float64     // pixels per unit
 	paper box         // all of it
 	frame box
-	faces map[lettering]font.Face
 	taken []box   // places that lettering keeps clear of
 	texts []label // all lettering, in order
 	// islands are pieces of paper on top of the part that carry dimensions.
@@ -64,20 +60,20 @@ func newSheet(width int, height float64) *sheet {
 		width = defaultWidth
 	}
 	width = max(width, leastWidth)
-	scale := float64(width) / defaultWidth
-	im := blank(width, int(math.Round(height*scale)))
-	s := newSheetOn(pixels{gg.NewContextForRGBA(im)}, scale, sizeOf(im))
+	return newSheetOf(width, defaultWidth, height)
+}
+
+// newSheetOf gives an empty sheet with its frame, of a width in pixels and of
+// so many units across and up.
+func newSheetOf(width int, across, up float64) *sheet {
+	scale := float64(width) / across
+	im := blank(width, int(math.Round(up*scale)))
+	s := newSheetOn(newPixels(im), scale, sizeOf(im))
 	s.im = im
 	s.frame = s.paper.grown(-s.u(frameMargin))
 	s.rectangle(s.frame, wide, ink)
 	return s
 }
-
-// landscape is the height in units of a sheet 1 : √2.
-var landscape = math.Round(defaultWidth / math.Sqrt2)
-
-// u gives units in pixels.
-func (s *sheet) u(units float64) float64 { return units * s.scale }
 
 // pen sets the colour and the width of strokes, in units.
 func (s *sheet) pen(c color.Color, width float64) {

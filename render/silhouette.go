@@ -150,12 +150,23 @@ func (s *sheet) edges(v *view, part *specimen.Part, width float64, c color.Color
 	s.dc.Stroke()
 }
 
-// symmetry draws the chain line y = 0 over the width of a view.
+// symmetry draws the chain line y = 0 over the width of a view. Where the other
+// half is left out it ends in the two short strokes that say so (ISO 128-3).
 func (s *sheet) symmetry(v *view, overshoot float64) {
 	b := v.bounds()
 	y := v.at(r2.Vec{}).Y
 	s.pen(ink, narrow)
 	s.chain()
-	s.line(point{b.X0 - s.u(overshoot), y}, point{b.X1 + s.u(overshoot), y})
+	left, right := b.X0-s.u(overshoot), b.X1+s.u(overshoot)
+	s.line(point{left, y}, point{right, y})
 	s.dc.SetDash()
+	if !v.half {
+		return
+	}
+	for _, x := range [2]float64{left + s.u(4), right - s.u(4)} {
+		for _, d := range [2]float64{-2.5, 2.5} {
+			at := point{x + s.u(d), y}
+			s.line(at.plus(0, -s.u(8)), at.plus(0, s.u(8)))
+		}
+	}
 }

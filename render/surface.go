@@ -28,19 +28,15 @@ type station struct {
 
 // surface is the chain of free surface that a notch lies on.
 type surface struct {
-	solution *fem.Solution
-	of       fem.Quantity
+	terms    []Term
+	read     reading
 	stations []station
 	length   float64
 	closed   bool
 }
 
 // surfaces lists the chains of free sides that hold sides of the notch.
-func surfaces(s *fem.Solution, part *specimen.Part, load *specimen.Load) []surface {
-	of := fem.SurfacePoint.FirstPrincipal
-	if load.Shear {
-		of = fem.SurfacePoint.ShearSize
-	}
+func surfaces(terms []Term, part *specimen.Part, read reading) []surface {
 	notch := make(map[int]bool)
 	for _, side := range part.Notch {
 		notch[side] = true
@@ -58,7 +54,7 @@ func surfaces(s *fem.Solution, part *specimen.Part, load *specimen.Load) []surfa
 				notched = notched || notch[first+i]
 			}
 			if notched {
-				list = append(list, newSurface(s, of, sides, len(run) == n))
+				list = append(list, newSurface(terms, read, sides, len(run) == n))
 			}
 		}
 		first += n
@@ -109,14 +105,14 @@ func runs(n int, ok func(i int) bool) [][]int {
 	return list
 }
 
-func newSurface(s *fem.Solution, of fem.Quantity, sides []int, closed bool) surface {
-	m := s.Problem.Shape.Mesh
+func newSurface(terms []Term, read reading, sides []int, closed bool) surface {
+	m := terms[0].Solution.Problem.Shape.Mesh
 	all := m.Region.Sides()
 	byside := make(map[int][]int)
 	for i, e := range m.Boundary {
 		byside[int(e.Side)] = append(byside[int(e.Side)], i)
 	}
-	c := surface{solution: s, of: of, closed: closed}
+	c := surface{terms: terms, read: read, closed: closed}
 	for _, side := range sides {
 		for _, i := range byside[side] {
 			e := m.Boundary[i]
@@ -138,19 +134,57 @@ func (c *surface) needle(at float64) needle {
 		k++
 	}
 	st := c.stations[k]
-	p := c.solution.Surface(st.edge, math.Max(0, math.Min(1, (at-st.from)/(st.to-st.from))))
-	return needle{At: p.At, Normal: p.Normal, Value: c.of(p)}
+	return c.value(st.edge, math.Max(0, math.Min(1, (at-st.from)/(st.to-st.from))))
 }
+
+// value reads the field on the surface from the stresses that follow from the
+// strains within it: the sharpest there are, and free of tractions.
+func (c *surface) value(edge int, s float64) needle {
+	var sum tensor
+	var n needle
+	for _, t := range c.terms {
+		p := t.Solution.Surface(edge, s)
+		at := onSurface(p)
+		for k := range sum {
+			sum[k] += t.Scale * at[k]
+		}
+		n.At, n.Normal = p.At, p.Normal
+	}
+	n.Value = c.read.of(&sum)
+	return n
+}
+
+// onSurface is the tensor of a surface's stresses in the axes of the part.
+func onSurface(p fem.SurfacePoint) tensor {
+	n := p.Normal
+	tx, ty := -n.Y, n.X
+	return tensor{p.Tangential * tx * tx, p.Tangential * ty * ty, p.Tangential * tx * ty, p.Hoop, p.Shear * tx, p.Shear * ty}
+}
+
+// highest is the place of the largest value, to a part in twenty of an element.
+func (c *surface) highest() needle {
+	best := needle{Value: math.Inf(-1)}
+	for _, st := range c.stations {
+		for k := range stationPieces + 1 {
+			if n := c.value(st.edge, float64(k)/stationPieces); n.Value > best.Value {
+				best = n
+			}
+		}
+	}
+	return best
+}
+
+const stationPieces = 20
 
 // nearest gives the distance along the surface at which it comes closest to a
 // point, to a part in twenty of an element.
 func (c *surface) nearest(to r2.Vec) (at, gap float64) {
-	const pieces = 20
+	solution := c.terms[0].Solution
 	gap = math.Inf(1)
 	for _, st := range c.stations {
-		for k := range pieces + 1 {
-			s := float64(k) / pieces
-			p := c.solution.Surface(st.edge, s)
+		for k := range stationPieces + 1 {
+			s := float64(k) / stationPieces
+			p := solution.Surface(st.edge, s)
 			if d := r2.Norm(r2.Sub(p.At, to)); d < gap {
 				gap, at = d, st.from+s*(st.to-st.from)
 			}

@@ -2,125 +2,230 @@ package render
 
 import (
 	"fmt"
+	"image/color"
 	"slices"
-	"strings"
 
 	"notchproof/render/number"
 	"notchproof/verify"
 	"notchproof/verify/specimen"
 )
 
-// titleBlock draws the table in the corner of the sheet: what the part is, how
-// it is loaded, what came out and how far it may be trusted.
-func (s *sheet) titleBlock(b box, f *verify.Finding, part *specimen.Part) {
+// The title block says what the part is, how it is loaded, what came out and
+// how far it may be trusted. It is a list of rows, each with lines of its own,
+// which take as much room as their texts need at the width of the sheet.
+
+// A row is ruled off from the next one.
+type row struct {
+	lines []line
+	high  float64 // pixels
+}
+
+// A line is lettered at the top left corner of its place.
+type line struct {
+	high float64 // pixels
+	draw func(s *sheet, at point)
+}
+
+const (
+	cellMargin = 14
+	rowMargin  = 7
+	lineSpace  = 5
+)
+
+func heightOf(rows []row) float64 {
+	sum := 0.0
+	for _, r := range rows {
+		sum += r.high
+	}
+	return sum
+}
+
+// titleBlock draws the rows from the top of a box down.
+func (p *plate) titleBlock(b box) {
+	s := p.sheet
+	rows := p.rows(s.ruler, b.width())
+	spare := (b.height() - heightOf(rows)) / float64(len(rows))
 	s.rectangle(b, wide, ink)
-	defer s.take(b)
-	t := table{s, b, b.Y0}
-	t.row(62, titleText(part), strong, dimensionText(part), normal)
-	t.row(62, loadText(f.Load), normal, nominalText(f.Load), normal)
-	t.factor(96, f)
-	t.comparisons(f)
-	t.row(62, meshText(f), normal, peakText(f, part), normal)
-	t.foot()
-}
-
-// A table is filled from the top; y is where the next row begins.
-type table struct {
-	s   *sheet
-	box box
-	y   float64
-}
-
-const cellMargin = 14
-
-// rule closes a row of a height in units.
-func (t *table) rule(height float64) {
-	t.y += t.s.u(height)
-	t.s.pen(ink, narrow)
-	t.s.line(point{t.box.X0, t.y}, point{t.box.X1, t.y})
-}
-
-// row letters two lines in one row.
-func (t *table) row(height float64, first string, a lettering, second string, b lettering) {
-	width := t.box.width() - 2*t.s.u(cellMargin)
-	x := t.box.X0 + t.s.u(cellMargin)
-	t.s.text(point{x, t.y + t.s.u(7)}, 0, 0, t.s.fit(first, a, width), a, ink)
-	t.s.text(point{x, t.y + t.s.u(height-7)}, 0, 1, t.s.fit(second, b, width), b, ink)
-	t.rule(height)
-}
-
-// factor letters the answer large, with the verdict on its right.
-func (t *table) factor(height float64, f *verify.Finding) {
-	s, x := t.s, t.box.X0+t.s.u(cellMargin)
-	right := t.box.X1 - s.u(cellMargin)
-	middle := t.y + s.u(height)/2
-	e := f.Computed.Factor
-	answer := "no factor: " + e.Status.String()
-	if e.Status.Settled() {
-		answer = "= " + number.Uncertain(e.Value, e.Uncertainty)
-		x = s.symbol(point{x, t.y + s.u(14)}, f.Load) + s.u(12)
-	}
-	stamp := strings.ToUpper(verdictText(f.Verdict))
-	w := s.measure(stamp, head)
-	s.text(point{x, t.y + s.u(14)}, 0, 0, s.fit(answer, figure, right-w-s.u(60)-x), figure, ink)
-	x = t.box.X0 + s.u(cellMargin)
-	s.text(point{x, t.y + s.u(height-12)}, 0, 1, s.fit(sideText(f), normal, right-w-s.u(60)-x), normal, grey)
-	frame := s.place(point{right - s.u(12), middle}, 1, 0.5, stamp, head).grown(s.u(9))
-	if f.Verdict == verify.Disagrees {
-		s.rectangle(frame, wide, accent)
-		s.text(point{right - s.u(12), middle}, 1, 0.5, stamp, head, accent)
-	} else {
-		s.rectangle(frame, wide, ink)
-		s.text(point{right - s.u(12), middle}, 1, 0.5, stamp, head, ink)
-	}
-	t.rule(height)
-}
-
-// comparisons letters what the factor was held against and, in the room that is
-// left above the two rows that follow, warnings,
-// conventions and reasons.
-func (t *table) comparisons(f *verify.Finding) {
-	const line, below = 25, 62 + 36
-	room := t.box.Y1 - t.s.u(below+10) - t.y
-	lines := comparisonTexts(f)
-	most := int(room / t.s.u(line))
-	if len(lines) > most {
-		left := len(lines) - most + 1
-		lines = append(lines[:most-1:most-1], [4]string{fmt.Sprintf("and %d more", left)})
-	}
-	for _, remark := range slices.Concat(f.Warnings, f.Load.Nominal.Notes, f.Because) {
-		for _, part := range t.s.wrap(remark, normal, t.box.width()-2*t.s.u(cellMargin), most-len(lines)) {
-			lines = append(lines, [4]string{part})
+	y := b.Y0
+	for i, r := range rows {
+		at := point{b.X0 + s.u(cellMargin), y + s.u(rowMargin) + spare/2}
+		for _, l := range r.lines {
+			l.draw(s, at)
+			at.Y += l.high
+		}
+		if y += r.high + spare; i+1 < len(rows) {
+			s.pen(ink, narrow)
+			s.line(point{b.X0, y}, point{b.X1, y})
 		}
 	}
-	for i, l := range lines {
-		t.columns(t.y+t.s.u(6+line*float64(i)), l)
-	}
-	t.y = t.box.Y1 - t.s.u(below)
-	t.rule(0)
+	s.take(b)
 }
 
-// columns letters one comparison: who, factor, difference, verdict. A line with
-// nothing but its first text has the whole width.
-func (t *table) columns(y float64, c [4]string) {
-	s := t.s
-	x := t.box.X0 + s.u(cellMargin)
-	width := t.box.width() - 2*s.u(cellMargin)
-	if c[1] == "" {
-		s.text(point{x, y}, 0, 0, s.fit(c[0], normal, width), normal, ink)
-		return
+// rows gives the block's rows for a width in pixels.
+func (p *plate) rows(r *ruler, width float64) []row {
+	w := writer{r, width - 2*r.u(cellMargin)}
+	f, part := p.finding, p.part
+	return []row{
+		w.row(w.texts(titleText(part), strong, 2), w.texts(dimensionText(part), normal, 4)),
+		w.row(w.texts(p.loadText(), normal, 2), w.texts(nominalText(f.Load), normal, 2)),
+		w.row(w.factor(f), w.texts(sideText(f), normal, 3)),
+		w.row(w.comparisons(f), w.remarks(f)),
+		w.row(w.texts(meshText(f), normal, 2), w.texts(peakText(f, part), normal, 2)),
+		w.row(w.foot(p.options.Edition)),
 	}
-	s.text(point{x, y}, 0, 0, s.fit(c[0], normal, 0.49*width), normal, ink)
-	s.text(point{x + 0.59*width, y}, 1, 0, c[1], normal, ink)
-	s.text(point{x + 0.71*width, y}, 1, 0, c[2], normal, ink)
-	s.text(point{x + 0.74*width, y}, 0, 0, s.fit(c[3], normal, 0.26*width), normal, ink)
 }
 
-func (t *table) foot() {
-	s := t.s
-	middle := (t.y + t.box.Y1) / 2
-	s.text(point{t.box.X0 + s.u(cellMargin), middle}, 0, 0.5, "elastic factor, not an approval", strong, ink)
-	s.text(point{t.box.X1 - s.u(cellMargin), middle}, 1, 0.5, "notchproof", strong, ink)
+// loadText says what acts: one load, or several with their shares.
+func (p *plate) loadText() string {
+	if len(p.options.Terms) == 0 {
+		return loadText(p.finding.Load)
+	}
+	text := ""
+	for i, t := range p.terms {
+		if i > 0 {
+			text += " + "
+		}
+		text += number.Compact(t.Scale, 4) + " × " + string(t.Load.Name)
+	}
+	return "stress field of " + text
+}
+
+// A writer makes lines for a width.
+type writer struct {
+	*ruler
+	width float64
+}
+
+func (w writer) row(parts ...[]line) row {
+	r := row{lines: slices.Concat(parts...), high: 2*w.u(rowMargin) - w.u(lineSpace)}
+	for _, l := range r.lines {
+		r.high += l.high
+	}
+	return r
+}
+
+func (w writer) high(l lettering) float64 { return w.u(l.Size + lineSpace) }
+
+// texts breaks a text into at most n lines.
+func (w writer) texts(text string, l lettering, n int) []line {
+	return w.inked(text, l, n, ink)
+}
+
+func (w writer) inked(text string, l lettering, n int, c color.Color) []line {
+	var lines []line
+	for _, part := range w.wrap(text, l, w.width, n) {
+		lines = append(lines, line{w.high(l), func(s *sheet, at point) { s.text(at, 0, 0, part, l, c) }})
+	}
+	return lines
+}
+
+// factor letters the answer large, with the verdict in a frame on its right or,
+// where there is no room, below.
+func (w writer) factor(f *verify.Finding) []line {
+	const stampMargin = 9
+	stamp, c := capitals(verdictText(f.Verdict)), ink
+	if f.Verdict == verify.Disagrees {
+		c = accent
+	}
+	room := w.width - w.measure(stamp, head) - w.u(4*stampMargin)
+	framed := func(s *sheet, right, middle float64) {
+		b := s.place(point{right - s.u(stampMargin), middle}, 1, 0.5, stamp, head)
+		s.rectangle(b.grown(s.u(stampMargin)), wide, c)
+		s.text(point{b.X1, middle}, 1, 0.5, stamp, head, c)
+	}
+	e := f.Computed.Factor
+	settled := e.Status.Settled()
+	answer := "no factor: " + e.Status.String()
+	if settled {
+		answer = "= " + number.Uncertain(e.Value, e.Uncertainty)
+	}
+	need := w.measure("Kts", figure) + w.u(16) + w.measure(answer, figure)
+	if !settled {
+		need = w.measure(answer, figure)
+	}
+	beside := need <= room
+	letters := line{w.u(figure.Size + 14), func(s *sheet, at point) {
+		x, width := at.X, w.width
+		if beside {
+			framed(s, at.X+w.width, at.Y+s.u(figure.Size/2+5))
+			width = room
+		}
+		if settled {
+			x = s.symbol(at.plus(0, s.u(2)), f.Load) + s.u(12)
+		}
+		s.text(point{x, at.Y + s.u(2)}, 0, 0, s.fit(answer, figure, at.X+width-x), figure, ink)
+	}}
+	if beside {
+		return []line{letters}
+	}
+	return []line{letters, {w.u(head.Size + 2*stampMargin + 8), func(s *sheet, at point) {
+		wide := s.measure(stamp, head) + 2*s.u(stampMargin)
+		framed(s, at.X+wide, at.Y+s.u(head.Size/2+stampMargin+1))
+	}}}
+}
+
+// comparisons gives a line each to what the factor was held against: who,
+// factor, difference, verdict, in columns as wide as their texts. Where that
+// leaves too little for the first, it stands on a line of its own.
+func (w writer) comparisons(f *verify.Finding) []line {
+	texts := comparisonTexts(f)
+	gap := w.u(16)
+	var wide [4]float64
+	for _, c := range texts {
+		for k := range c {
+			wide[k] = max(wide[k], w.measure(c[k], normal))
+		}
+	}
+	numbers := wide[1] + wide[2] + wide[3] + 2*gap
+	beside := numbers+gap+min(wide[0], w.u(230)) <= w.width
+	left := w.width - numbers // where the columns begin
+	var lines []line
+	for _, c := range texts {
+		whole := w.width
+		if beside {
+			whole = left - gap
+		}
+		who := w.fit(c[0], normal, whole)
+		columns := func(s *sheet, at point) {
+			x := at.X + left + wide[1]
+			s.text(point{x, at.Y}, 1, 0, c[1], normal, ink)
+			x += gap + wide[2]
+			s.text(point{x, at.Y}, 1, 0, c[2], normal, ink)
+			s.text(point{x + gap, at.Y}, 0, 0, s.fit(c[3], normal, at.X+w.width-x-gap), normal, ink)
+		}
+		first := func(s *sheet, at point) { s.text(at, 0, 0, who, normal, ink) }
+		if beside {
+			lines = append(lines, line{w.high(normal), func(s *sheet, at point) { first(s, at); columns(s, at) }})
+		} else {
+			lines = append(lines, line{w.high(normal), first}, line{w.high(normal), columns})
+		}
+	}
+	return lines
+}
+
+// remarks are warnings, conventions and reasons.
+func (w writer) remarks(f *verify.Finding) []line {
+	const most, each = 9, 3 // lines
+	var lines []line
+	for _, remark := range slices.Concat(f.Warnings, f.Load.Nominal.Notes, f.Because) {
+		lines = append(lines, w.texts(remark, normal, min(each, most-len(lines)))...)
+	}
+	return lines
+}
+
+// foot says who drew this and what it is not.
+func (w writer) foot(name string) []line {
+	const caution = "elastic factor, not an approval"
+	if name == "" {
+		name = "notchproof"
+	}
+	if w.measure(caution, strong)+w.u(30)+w.measure(name, strong) <= w.width {
+		return []line{{w.high(strong), func(s *sheet, at point) {
+			s.text(at, 0, 0, caution, strong, ink)
+			s.text(at.plus(w.width, 0), 1, 0, name, strong, ink)
+		}}}
+	}
+	return slices.Concat(w.texts(caution, strong, 1), w.texts(name, strong, 1))
 }
 
 // symbol letters the factor's symbol, K with its subscript, and gives where it
@@ -140,7 +245,7 @@ func sideText(f *verify.Finding) string {
 	if !c.Factor.Status.Settled() {
 		return ""
 	}
-	return fmt.Sprintf("von Mises %s   gross section %s   ladder %s",
+	return fmt.Sprintf("von Mises %s; on the gross section %s; ladder %s",
 		number.Uncertain(c.VonMises.Value, c.VonMises.Uncertainty),
 		number.Uncertain(c.Gross, c.Gross/c.Factor.Value*c.Factor.Uncertainty), c.Factor.Status)
 }

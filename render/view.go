@@ -14,6 +14,7 @@ type view struct {
 	origin point   // where the part's (0, 0) comes to lie
 	window []point // closed polygon that bounds what is shown
 	mirror bool    // the part is drawn with its mirror image in y = 0
+	half   bool    // the part is drawn down to y = 0, its mirror image left out
 }
 
 func (v *view) at(p r2.Vec) point {

@@ -1,8 +1,12 @@
 package main
 
 import (
+	"errors"
 	"fmt"
 	"io"
+	"strings"
+
+	"github.com/spf13/pflag"
 
 	"notchproof/render"
 	"notchproof/verify"
@@ -20,17 +24,44 @@ and a title block with factor, uncertainty, verdict and mesh.
 
   notchproof picture shaft-shoulder D=72mm d=48mm r=3mm --load bending -o shaft.png
 
+--field chooses the stress: principal (the first principal stress; in torsion the
+shear), mises, shear (the largest in the drawn plane), axial, transverse (radial
+in shafts), shear-xy, or hoop of shafts. --style fringe draws the dark-field
+isochromatic fringes that a photoelastic model of the part would show, bands of
+equal principal stress difference, from which many charts were once measured.
+
+Where one half of the part is modelled, that half is drawn; --whole adds the
+other. The width is in pixels or, with a unit, on paper: --width 160mm --dpi 300.
+Letters keep a readable height: on narrow paper the sheet has one column.
+
 Exit status as that of check.
 `,
 		run: runPicture,
 	}
 }
 
+// drawing are the flags of a picture.
+type drawing struct {
+	file  string
+	width string
+	dpi   float64
+	o     render.PictureOptions
+}
+
+func (d *drawing) flags(f *pflag.FlagSet) {
+	f.StringVarP(&d.file, "output", "o", "", "the PNG file to write")
+	f.StringVar(&d.o.Field, "field", "", "stress to draw: "+strings.Join(render.Fields(), ", ")+" (default principal)")
+	f.StringVar(&d.o.Style, "style", render.StyleWash, "how: "+strings.Join(render.Styles(), " or "))
+	f.BoolVar(&d.o.Whole, "whole", false, "draw both halves of a symmetric part")
+	f.BoolVar(&d.o.Mesh, "mesh", false, "draw the edges of the elements too")
+	f.StringVar(&d.width, "width", "1600", "width in pixels, 400 to 6000, or on paper, as in 160mm")
+	f.Float64Var(&d.dpi, "dpi", 0, "pixels an inch, 72 to 1200 (default 300 for a width on paper, else 190)")
+}
+
 func runPicture(c *call) (int, error) {
 	var q questions
-	file := c.flags.StringP("output", "o", "", "the PNG file to write")
-	width := c.flags.Int("width", 1600, "width of the picture in pixels, 400 to 6000")
-	mesh := c.flags.Bool("mesh", false, "draw the edges of the elements too")
+	var d drawing
+	d.flags(c.flags)
 	q.loadFlag(c.flags)
 	q.claimFlags(c.flags)
 	q.targetFlag(c.flags)
@@ -39,13 +70,7 @@ func runPicture(c *call) (int, error) {
 	if err != nil {
 		return 0, err
 	}
-	if *file == "" {
-		return 0, &inputError{text: "no file to draw to", hint: "name one with -o, as in -o part.png"}
-	}
-	if *width < 400 || *width > 6000 {
-		return 0, &inputError{text: fmt.Sprintf("--width %d: too small or too large", *width), hint: "give 400 to 6000 pixels"}
-	}
-	if err := checkOutput(*file, ".png"); err != nil {
+	if err := d.check(); err != nil {
 		return 0, err
 	}
 	job, load, err := q.one(args)
@@ -57,20 +82,24 @@ func runPicture(c *call) (int, error) {
 	result, err := verify.Run(c.ctx, job.part, job.loads, job.options)
 	if err == nil {
 		bar.tell("drawing")
-		err = draw(*file, result, render.PictureOptions{Width: *width, Mesh: *mesh})
+		err = d.draw(result)
 	}
 	bar.clear()
 	if err != nil {
 		return 0, err
 	}
-	fmt.Fprintf(c.stdout, "%s, %s: picture written to %s\n", job.part.Name, load.Name, *file)
+	fmt.Fprintf(c.stdout, "%s, %s: picture written to %s\n", job.part.Name, load.Name, d.file)
 	return statusOf(result), nil
 }
 
-func draw(file string, r *verify.Result, o render.PictureOptions) error {
-	im, err := render.Picture(&r.Findings[0], r.Part, o)
+// draw draws and writes the picture.
+func (d *drawing) draw(r *verify.Result) error {
+	im, err := render.Picture(&r.Findings[0], r.Part, d.o)
+	if fault := (*render.FieldError)(nil); errors.As(err, &fault) {
+		return &inputError{text: "--field " + fault.Field + ": " + fault.Reason, hint: "leave --field out, or choose another of " + strings.Join(render.Fields(), ", ")}
+	}
 	if err != nil {
 		return err
 	}
-	return writeFile(file, func(w io.Writer) error { return render.WritePNG(w, im) })
+	return writeFile(d.file, func(w io.Writer) error { return render.WritePNGAt(w, im, d.o.DPI) })
 }
