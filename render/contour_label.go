@@ -2,6 +2,7 @@ package render
 
 import (
 	"math"
+	"slices"
 
 	"notchproof/render/number"
 )
@@ -42,9 +43,16 @@ func trace(r *raster, list []float64) []contour {
 	cs := make([]contour, len(traced))
 	for i, lines := range contours(r, traced) {
 		cs[i] = contour{level: traced[i], lines: lines}
+		if traced[i] == 0 {
+			cs[i].lines = slices.DeleteFunc(lines, func(l []point) bool { return lengthOf(l) < speck })
+		}
 	}
 	return cs
 }
+
+// speck is the length in pixels below which a line of zero is left out: on a
+// free surface where a stress vanishes it would be strewn with them.
+const speck = 12
 
 // label finds places for the levels of contours, highest first, which are the
 // ones in the narrowest places. A label stands on its line, upright, where all of it

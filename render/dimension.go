@@ -144,10 +144,15 @@ func (s *sheet) value(center point, text string) {
 	b := s.place(center, 0.5, 0.5, text, normal)
 	room := s.frame.grown(-s.u(6))
 	center.X += math.Max(0, room.X0-b.X0) - math.Max(0, b.X1-room.X1)
-	b = s.place(center, 0.5, 0.5, text, normal).grown(s.u(3))
+	s.island(s.place(center, 0.5, 0.5, text, normal))
+	s.text(center, 0.5, 0.5, text, normal, ink)
+}
+
+// island lays a piece of paper under lettering; contours stop at it.
+func (s *sheet) island(b box) {
+	b = b.grown(s.u(3))
 	s.dc.SetColor(paper)
 	s.dc.DrawRectangle(b.X0, b.Y0, b.width(), b.height())
 	s.dc.Fill()
-	s.text(center, 0.5, 0.5, text, normal, ink)
 	s.islands = append(s.islands, b)
 }

@@ -20,7 +20,7 @@ type fringes struct {
 
 // fringesAtRoot is about how many bands lie between nothing and the root: few
 // enough to be counted, enough for half an order to matter little.
-const fringesAtRoot = 8
+const fringesAtRoot = 10
 
 func newFringes(high float64) *fringes {
 	f := &fringes{value: roundStep(high / fringesAtRoot), high: high}
@@ -94,9 +94,17 @@ func (f *fringes) scale() scale {
 		low: 0, high: f.high, levels: f.orders(),
 		paint:   func(v float64) color.RGBA { return f.shade(intensity(v/f.value, 0, 0)) },
 		text:    func(v float64) string { return number.Compact(v/f.value, 3) },
-		end:     func(v float64) string { return number.Decimal(v/f.value, 1) },
+		end:     f.order,
 		unruled: true,
 	}
+}
+
+// order writes an order to a tenth.
+func (f *fringes) order(v float64) string {
+	if v == 0 {
+		return "0"
+	}
+	return number.Decimal(v/f.value, 1)
 }
 
 // contours gives the lines of the whole orders for their numbers to stand on.
@@ -109,6 +117,8 @@ func (f *fringes) contours(r *raster) []contour {
 }
 
 func (f *fringes) over(float64) color.NRGBA { return ink }
+
+func (f *fringes) mark() color.NRGBA { return ink }
 
 func (f *fringes) label(level float64) (string, color.Color) {
 	return number.Compact(level/f.value, 3), paper

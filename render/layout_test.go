@@ -1,6 +1,7 @@
 package render
 
 import (
+	"fmt"
 	"strings"
 	"testing"
 
@@ -53,16 +54,66 @@ func letters(s *sheet, text string) bool {
 	return strings.Contains(all, legible(text))
 }
 
+// papers are the widths that pictures are laid out for: the default, a column of
+// a page, and 80 mm, at a resolution that keeps the test short.
+var papers = []PictureOptions{
+	{Width: 800, DPI: 95}, {Width: 800, DPI: 95, Whole: true, Mesh: true},
+	{Width: 630, DPI: 100}, {Width: 315, DPI: 100},
+}
+
 func TestPictureLayout(t *testing.T) {
-	for _, c := range proportions {
-		t.Run(c.name, func(t *testing.T) {
-			part := newPart(t, c.family, c.dims)
-			s, err := picture(solved(t, part, c.load, 3), part, PictureOptions{Width: 800})
-			if err != nil {
-				t.Fatal(err)
+	for _, c := range append(proportions, extremes...) {
+		part := newPart(t, c.family, c.dims)
+		f := solved(t, part, c.load, 3)
+		for _, o := range papers {
+			t.Run(fmt.Sprintf("%s on %d", c.name, o.Width), func(t *testing.T) {
+				s, err := picture(f, part, o)
+				if err != nil {
+					t.Fatal(err)
+				}
+				checkLayout(t, s)
+				checkReadable(t, s, o)
+			})
+		}
+	}
+}
+
+// checkReadable holds the height of capitals on paper against the 1.6 mm below
+// which lettering is not reproduced well (ISO 3098 begins at 1.8 mm).
+func checkReadable(t *testing.T, s *sheet, o PictureOptions) {
+	t.Helper()
+	for _, l := range s.texts {
+		face := s.face(l.Type)
+		bounds, _, ok := face.GlyphBounds('H')
+		if !ok {
+			t.Fatal("no H")
+		}
+		high := float64(bounds.Max.Y-bounds.Min.Y) / 64 / o.dpi() * millimetresPerInch
+		if high < 1.55 {
+			t.Errorf("%q has capitals of %.2f mm on %.0f mm", l.Text, high, float64(o.Width)/o.dpi()*millimetresPerInch)
+			return
+		}
+	}
+}
+
+// The part fills its room, whatever its proportions: in one direction all of it,
+// and in the other a third where the part is not much longer than high.
+func TestPartFillsTheSheet(t *testing.T) {
+	for _, c := range append(proportions, extremes...) {
+		part := newPart(t, c.family, c.dims)
+		for _, wide := range []float64{1600, 1200, 610} {
+			for _, whole := range []bool{false, true} {
+				room := partRoom(wide)
+				v, _, _ := partView(part, room, whole, 1)
+				b := v.bounds()
+				if b.width() < 0.6*room.width() && b.height() < 0.95*room.height() {
+					t.Errorf("%s on %g: %.0f × %.0f of %.0f × %.0f", c.name, wide, b.width(), b.height(), room.width(), room.height())
+				}
+				if b.width() > room.width()+2*breakSwing+1 || b.height() > room.height()+2*viewSpare+1 {
+					t.Errorf("%s on %g: %.0f × %.0f leaves its room", c.name, wide, b.width(), b.height())
+				}
 			}
-			checkLayout(t, s)
-		})
+		}
 	}
 }
 

@@ -1,6 +1,7 @@
 package render
 
 import (
+	"image/color"
 	"math"
 
 	"gonum.org/v1/gonum/spatial/r2"
@@ -12,52 +13,56 @@ import (
 // load draws the load's symbol beside both broken ends, on the line along which
 // it acts: an arrow for a force, a bent one for a moment, a double-headed one
 // for a torque (the vector of the right-hand rule).
-func (s *sheet) load(v *view, part *specimen.Part, load scf.Load, left, right float64) {
+func (s *sheet) load(v *view, part *specimen.Part, load scf.Load, left, right float64, c color.Color) {
 	line := 0.0
 	if load == scf.Tension {
 		line = part.ForceLine
 	}
 	for _, end := range [2]struct{ x, sign float64 }{{left, -1}, {right, 1}} {
-		root := v.at(r2.Vec{X: end.x, Y: line}).plus(end.sign*s.u(2+breakSwing), 0)
+		from := 2.0 + breakSwing
+		if v.half && line == 0 {
+			from = symmetryPast + 4 // beyond the strokes that end the line of symmetry
+		}
+		root := v.at(r2.Vec{X: end.x, Y: line}).plus(end.sign*s.u(from), 0)
 		out := point{end.sign, 0}
 		letter := root.toward(out, s.u(loadLength/2))
-		s.pen(accent, wide)
+		s.pen(c, wide)
 		switch load {
 		case scf.Tension:
-			s.force(root, out, 1)
-			s.loadLetter("P", letter.plus(0, -s.u(10)))
+			s.force(root, out, 1, c)
+			s.loadLetter("P", letter.plus(0, -s.u(10)), c)
 		case scf.Torsion:
-			s.force(root, out, 2)
-			s.loadLetter("T", letter.plus(0, -s.u(10)))
+			s.force(root, out, 2, c)
+			s.loadLetter("T", letter.plus(0, -s.u(10)), c)
 		case scf.Bending:
-			s.moment(root.toward(out, s.u(4)), end.sign, part.Opposite)
-			s.loadLetter("M", letter.plus(0, -s.u(28)))
+			s.moment(root.toward(out, s.u(4)), end.sign, part.Opposite, c)
+			s.loadLetter("M", letter.plus(0, -s.u(28)), c)
 		}
 	}
 }
 
-const loadLength = 44
+const loadLength = 38
 
 // loadLetter letters a load's letter above its arrow, where there is room.
-func (s *sheet) loadLetter(letter string, p point) {
+func (s *sheet) loadLetter(letter string, p point, c color.Color) {
 	if s.free(s.place(p, 0.5, 1, letter, small)) {
-		s.text(p, 0.5, 1, letter, small, accent)
+		s.text(p, 0.5, 1, letter, small, c)
 	}
 }
 
 // force draws an arrow from root along out with a number of heads.
-func (s *sheet) force(root, out point, heads int) {
+func (s *sheet) force(root, out point, heads int, c color.Color) {
 	tip := root.toward(out, s.u(loadLength))
 	s.line(root, tip.toward(out, -s.u(8)))
 	for i := range heads {
-		s.arrow(tip.toward(out, -s.u(11*float64(i))), out, accent)
+		s.arrow(tip.toward(out, -s.u(11*float64(i))), out, c)
 	}
 }
 
 // moment draws the arrow of a moment. The one that stretches the upper side
 // turns clockwise at the right end and the other way round at the left one: at
 // both from the top outwards and down. The opposite moment turns up.
-func (s *sheet) moment(center point, sign float64, opposite bool) {
+func (s *sheet) moment(center point, sign float64, opposite bool, c color.Color) {
 	radius := s.u(26)
 	const from, to, pieces = -70.0, 70.0, 24 // degrees below the horizontal
 	turn := 1.0
@@ -75,5 +80,5 @@ func (s *sheet) moment(center point, sign float64, opposite bool) {
 	s.polyline(ps)
 	s.dc.Stroke()
 	sin, cos := math.Sincos((to - 8) * math.Pi / 180)
-	s.arrow(at(to), point{-sign * sin, turn * cos}, accent)
+	s.arrow(at(to), point{-sign * sin, turn * cos}, c)
 }

@@ -16,6 +16,8 @@ type look interface {
 	contours(r *raster) []contour
 	// over is the ink on top of a value.
 	over(v float64) color.NRGBA
+	// mark is the colour of quills, loads and the peak.
+	mark() color.NRGBA
 	// lettering of a level's label, and the paper that it needs below it, nil:
 	// none.
 	label(level float64) (text string, below color.Color)
@@ -29,8 +31,11 @@ type wash struct {
 	levels []float64
 }
 
+// levelCount is about how many contour lines a picture has.
+const levelCount = 10
+
 func newWash(low, high float64) *wash {
-	return &wash{newRamp(low, high), levelsBetween(low, high, 8)}
+	return &wash{newRamp(low, high), levelsBetween(low, high, levelCount)}
 }
 
 func (w *wash) scale() scale {
@@ -45,6 +50,8 @@ func (w *wash) painter(*raster) func(x, y int, v float64) color.RGBA {
 }
 
 func (w *wash) over(v float64) color.NRGBA { return w.ramp.over(v) }
+
+func (w *wash) mark() color.NRGBA { return accent }
 
 func (w *wash) label(level float64) (string, color.Color) { return levelText(level), nil }
 

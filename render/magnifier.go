@@ -25,10 +25,9 @@ func detail(part *specimen.Part, peak r2.Vec, main *view, center point, radius f
 	v = &view{scale: times * main.scale, window: circle(center, radius)}
 	v.origin = point{center.X - v.scale*about.X, center.Y + v.scale*about.Y}
 	// Near the axis of a half model the mirror image comes into view.
-	if main.mirror && about.Y < radius/v.scale {
-		v.mirror, v.origin.Y = true, math.Round(v.origin.Y)
+	if v.mirror = part.Half && about.Y < radius/v.scale; v.mirror {
+		v.origin.Y = math.Round(v.origin.Y)
 	}
-	v.half = main.half
 	return v, times
 }
 
@@ -53,7 +52,7 @@ func root(part *specimen.Part, at r2.Vec) (about r2.Vec, reach float64) {
 }
 
 // magnified marks a detail in the main view and joins it to its circle.
-func (s *sheet) magnified(main, v *view, letter string) {
+func (s *sheet) magnified(main, v *view, material [][]point, letter string) {
 	b := v.bounds()
 	cx, cy := b.middle()
 	radius := b.width() / 2
@@ -63,13 +62,25 @@ func (s *sheet) magnified(main, v *view, letter string) {
 	s.dc.DrawCircle(mid.X, mid.Y, r)
 	s.dc.Stroke()
 	s.take(box{mid.X - r, mid.Y - r, mid.X + r, mid.Y + r})
-	for _, dir := range [6]point{{0.6, -0.8}, {-0.6, -0.8}, {0.8, 0.6}, {-0.8, 0.6}, {0, -1}, {0.95, -0.3}} {
-		for reach := r + s.u(14); reach < r+s.u(130); reach += s.u(10) {
-			at := mid.toward(dir, reach)
-			from, to := mid.toward(dir, r), mid.toward(dir, reach-s.u(14))
-			if box := s.place(at, 0.5, 0.5, letter, head); s.free(box.grown(s.u(4))) && s.open(mid.toward(dir, r+s.u(4)), to) {
+	for _, through := range [2]bool{false, true} { // the air first, then the material
+		for reach := r + s.u(14); reach < r+s.u(90); reach += s.u(10) {
+			for _, degrees := range [12]float64{-60, -90, -120, -30, -150, 0, 180, 60, 120, 30, 150, 90} {
+				sin, cos := math.Sincos(degrees * math.Pi / 180)
+				dir := point{cos, sin}
+				at := mid.toward(dir, reach)
+				b := s.place(at, 0.5, 0.5, letter, head)
+				if !s.free(b.grown(s.u(4))) || !s.open(mid.toward(dir, r+s.u(4)), mid.toward(dir, reach-s.u(14))) {
+					continue
+				}
+				on := touches(b, material)
+				if on != through {
+					continue
+				}
 				s.pen(ink, narrow)
-				s.line(from, to)
+				s.line(mid.toward(dir, r), mid.toward(dir, reach-s.u(13)))
+				if on {
+					s.island(b)
+				}
 				s.text(at, 0.5, 0.5, letter, head, ink)
 				return
 			}
@@ -81,10 +92,10 @@ func (s *sheet) magnified(main, v *view, letter string) {
 // surface, and says outside the circle what is there and where.
 func (p *plate) markPeak(v *view) {
 	at := v.at(p.peak)
-	p.pen(accent, 2)
+	p.pen(p.look.mark(), 2)
 	p.dc.DrawCircle(at.X, at.Y, p.u(6))
 	p.dc.Stroke()
-	p.dc.SetColor(accent)
+	p.dc.SetColor(p.look.mark())
 	p.dc.DrawCircle(at.X, at.Y, p.u(2.2))
 	p.dc.Fill()
 	texts := p.peakTexts()
@@ -101,7 +112,7 @@ func (p *plate) markPeak(v *view) {
 		if !clear {
 			continue
 		}
-		p.pen(accent, narrow)
+		p.pen(p.look.mark(), narrow)
 		p.line(at.toward(place.dir, p.u(8)), place.at)
 		for i, t := range texts {
 			p.text(place.line(p.sheet, i, len(texts)), place.anchor, 0, t, strong, ink)
@@ -160,6 +171,9 @@ func outside(b box, center point, radius float64) bool {
 func (p *plate) peakTexts() []string {
 	e := p.finding.Computed.Factor
 	texts := []string{number.Decimal(p.top, 3)}
+	if f, ok := p.look.(*fringes); ok {
+		texts[0] = "order " + f.order(p.top)
+	}
 	if p.plain() && e.Status.Settled() {
 		v, bar := number.UncertainParts(e.Value, e.Uncertainty)
 		texts = []string{v}

@@ -55,16 +55,22 @@ func partView(part *specimen.Part, area box, whole bool, scale float64) (v *view
 	if v.half {
 		low = 0
 	}
-	pixels := math.Min(area.height()/(e.high-low), area.width()/(notch+2*least*height))
-	reach := math.Min(most*height, (area.width()/pixels-notch)/2)
-	left, right = e.notch0-reach, e.notch1+reach
-	inside := 2 * breakSwing * scale / pixels // a break lies inside the plain stretch
+	// The ends of the plain stretches, inside which the breaks must lie.
+	first, last := e.notch0-most*height, e.notch1+most*height
 	for _, p := range part.Plain {
 		if p.To < p.From {
-			left = math.Max(left, p.To+inside)
+			first = math.Max(first, p.To)
 		} else {
-			right = math.Min(right, p.To-inside)
+			last = math.Min(last, p.To)
 		}
+	}
+	left, right = math.Max(first, e.notch0-least*height), math.Min(last, e.notch1+least*height)
+	pixels := math.Min(area.height()/(e.high-low), area.width()/(right-left))
+	inside := 2 * breakSwing * scale / pixels
+	reach := (area.width()/pixels - notch) / 2
+	left, right = math.Max(first+inside, e.notch0-reach), math.Min(last-inside, e.notch1+reach)
+	if spare := area.width()/pixels - (right - left); spare > 0 { // one end is short: more of the other
+		left, right = math.Max(first+inside, left-spare), math.Min(last-inside, right+spare)
 	}
 	middle := r2.Vec{X: (left + right) / 2, Y: (low + e.high) / 2}
 	x, y := area.middle()

@@ -34,7 +34,7 @@ func round(part *specimen.Part) bool {
 // dimensionText lists the dimensions that were given, in the family's order.
 func dimensionText(part *specimen.Part) string {
 	if part.Family == nil {
-		return part.Name + ", " + unitText(part.Unit)
+		return part.Name + ", " + overallText(part) + ", " + unitText(part.Unit)
 	}
 	var list []string
 	for _, d := range part.Family.Dimensions {

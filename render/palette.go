@@ -13,9 +13,7 @@ import (
 // 256 of them a file is a third as large and written in half the time, and no
 // pixel is off by more than can be seen.
 
-// paletted gives an image in 256 colours, or nil where these would not do: all
-// colours where there are no more, else the commonest, so that smooth tones are
-// off by one level at most, and for the rest those farthest from them.
+// paletted gives an image in 256 colours, or nil where these would not do.
 func paletted(im *image.RGBA) *image.Paletted {
 	ids, colours := numbered(im)
 	if ids == nil {
@@ -88,39 +86,67 @@ func numbered(im *image.RGBA) (ids []uint16, colours []counted) {
 type choice [][3]uint8
 
 const (
-	mostColours   = 256
-	commonColours = 208 // the others are kept for what is far from all of these
+	mostColours = 256
+	// Colours of so many pixels are surfaces; those of fewer are edges.
+	surfacePixels = 16
+	surfaceShare  = 208 // of the palette, at most; the rest is for edges
 )
 
+// choose takes the colours of surfaces, thinned out evenly until they fit, and
+// then whatever is farthest from them.
 func choose(colours []counted) choice {
 	order := make([]int, len(colours))
 	for i := range order {
 		order[i] = i
 	}
 	slices.SortStableFunc(order, func(a, b int) int { return colours[b].count - colours[a].count })
-	var c choice
 	if len(colours) <= mostColours {
+		var c choice
 		for _, i := range order {
 			c = append(c, colours[i].rgb)
 		}
 		return c
 	}
-	for _, i := range order {
-		if len(c) == commonColours {
-			break
-		}
-		if len(c) == 0 || c.gap(c.nearest(colours[i].rgb), colours[i].rgb) > 1 {
-			c = append(c, colours[i].rgb)
+	for apart := 0; ; apart++ {
+		if c, ok := thinned(colours, order, apart); ok {
+			return c.spread(colours)
 		}
 	}
-	return c.spread(colours)
+}
+
+// thinned leaves out colours of surfaces that are within a distance of a
+// commoner one; ok is false where too many are left.
+func thinned(colours []counted, order []int, apart int) (c choice, ok bool) {
+	for _, i := range order {
+		if colours[i].count < surfacePixels {
+			break
+		}
+		if rgb := colours[i].rgb; len(c) == 0 || c.gap(c.closest(rgb), rgb) > apart {
+			if len(c) == surfaceShare {
+				return nil, false
+			}
+			c = append(c, rgb)
+		}
+	}
+	return c, true
+}
+
+// closest is the colour of the smallest gap.
+func (c choice) closest(rgb [3]uint8) uint8 {
+	best := 0
+	for i := range c {
+		if c.gap(uint8(i), rgb) < c.gap(uint8(best), rgb) {
+			best = i
+		}
+	}
+	return uint8(best)
 }
 
 // spread adds, time and again, the colour that is farthest from all chosen.
 func (c choice) spread(colours []counted) choice {
 	gaps := make([]int, len(colours))
 	for i := range gaps {
-		gaps[i] = c.gap(c.nearest(colours[i].rgb), colours[i].rgb)
+		gaps[i] = c.gap(c.closest(colours[i].rgb), colours[i].rgb)
 	}
 	for len(c) < mostColours {
 		far := 0

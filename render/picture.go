@@ -280,16 +280,16 @@ func (p *plate) draw() {
 
 	field := p.paint(main)
 	e := extentOf(p.part)
-	p.quills(main, p.needles(main, 0.5*(e.high-e.low)), p.u(mainQuill)/p.quill, p.u(mainStep))
+	p.quills(main, p.needles(main, 0.5*(e.high-e.low)), p.quillLength(main, mainQuill)/p.quill, p.u(mainStep), p.look.mark())
 	p.annotate(main, p.part, left, right, false)
-	p.magnified(main, close, "A")
+	p.magnified(main, close, main.loops(p.part), "A")
 	p.lines(main, field, 2)
 	p.breaks(main, p.part, left, right)
 	if p.part.Half {
-		p.symmetry(main, 18)
+		p.symmetry(main, symmetryPast)
 	}
 	for _, t := range p.terms {
-		p.load(main, p.part, t.Load.Name, left, right)
+		p.load(main, p.part, t.Load.Name, left, right, p.look.mark())
 	}
 	p.closeUp(close)
 }
@@ -307,9 +307,14 @@ func (p *plate) closeUp(v *view) {
 	field := p.paint(v)
 	needles := p.needles(v, 1.5*b.width()/v.scale)
 	p.within(v)
-	p.quills(v, needles, p.u(closeQuill)/p.quill, p.u(closeStep))
+	p.quills(v, needles, p.quillLength(v, closeQuill)/p.quill, p.u(closeStep), p.look.mark())
 	p.dc.ResetClip()
 	p.lines(v, field, 1)
+	if v.mirror {
+		p.within(v)
+		p.symmetry(v, 0)
+		p.dc.ResetClip()
+	}
 	p.pen(ink, wide)
 	p.dc.DrawCircle(x, y, b.width()/2)
 	p.dc.Stroke()
@@ -339,6 +344,17 @@ func (p *plate) lines(v *view, r *raster, most int) {
 	p.edges(v, p.part, wide, ink)
 	p.dc.ResetClip()
 	p.letter(cs, p.look)
+}
+
+// quillLength is the length of the largest quill in a view, in pixels: in a hole
+// that is wide enough for it not beyond its middle.
+func (p *plate) quillLength(v *view, units float64) float64 {
+	_, radius := root(p.part, p.peak)
+	most := 0.8 * radius / 1.5 * v.scale
+	if full := p.u(units); most >= full || most < full/3 {
+		return full
+	}
+	return most
 }
 
 // needles gives the field along the surface that the peak lies on, as far as

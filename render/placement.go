@@ -68,23 +68,12 @@ func placements() map[string][]placement {
 	}
 }
 
-// placementsOf gives the dimensions that are drawn of a part: of an outline of
-// the user's own the sizes of both ends.
+// placementsOf gives the dimensions that are drawn of a part.
 func placementsOf(part *specimen.Part) []placement {
 	if list, ok := placements()[part.Name]; ok {
 		return list
 	}
-	end := func(kind placementKind, left bool) placement {
-		return placement{Kind: kind, At: func(g geometry) (a, b r2.Vec) {
-			x := g.right
-			if left {
-				x = g.left
-			}
-			low, high := endRange(g.part, left)
-			return r2.Vec{X: x, Y: high}, r2.Vec{X: x, Y: low}
-		}}
-	}
-	return []placement{end(acrossLeft, true), end(acrossRight, false)}
+	return outlinePlacements(part)
 }
 
 // centerOf gives the centre of a circular or elliptic arc.

@@ -1,13 +1,16 @@
 package render
 
-import "math"
+import (
+	"image/color"
+	"math"
+)
 
 // quills draws needles as lines along the surface normal, long in proportion
 // to the stress, with the curve through their ends. Unit is the length of the
 // nominal stress in pixels. From the middle outwards a needle is drawn wherever
 // its foot or its end is a space (pixels) from those of the one before.
 // Lettering is kept off what they cover.
-func (s *sheet) quills(v *view, list []needle, unit, space float64) {
+func (s *sheet) quills(v *view, list []needle, unit, space float64, c color.Color) {
 	if len(list) < 2 {
 		return
 	}
@@ -20,7 +23,7 @@ func (s *sheet) quills(v *view, list []needle, unit, space float64) {
 			middle = i
 		}
 	}
-	s.pen(accent, hairline)
+	s.pen(c, hairline)
 	s.quill(feet[middle], ends[middle])
 	for _, step := range [2]int{1, -1} {
 		last := middle
@@ -32,7 +35,7 @@ func (s *sheet) quills(v *view, list []needle, unit, space float64) {
 		}
 	}
 	s.dc.Stroke()
-	s.pen(accent, 1.6)
+	s.pen(c, 1.6)
 	s.polyline(ends)
 	s.dc.Stroke()
 }

@@ -24,8 +24,8 @@ const (
 // A ramp takes values to tones. Where a field has a sign the lightness falls
 // in the same straight line from the lowest value, through zero, to the highest:
 // one tone is one value in grey print too, which no ramp that darkens both ways
-// can say. On top of that what is below zero is sand, and what is above is
-// petrol, and the zero line is drawn.
+// can say. On top of that the hue turns from sand through green, at zero, to
+// petrol and violet, and the zero line is drawn.
 type ramp struct {
 	low, high float64
 	table     *rampTable
@@ -67,19 +67,19 @@ func rampCurve(t float64) oklab {
 	return polar(lightEnd+t*(darkEnd-lightEnd), chromaEnds+chromaSwell*swell, hueStart+hueTurn*t)
 }
 
-// signedCurve is the path with zero at a share of it. Both hues are without
-// colour at zero, where they meet; below it chroma is kept within what the
-// screen has of a light sand.
+// signedCurve is the path with zero at a share of it: the hue turns from sand
+// to green below zero, from green to violet above.
 func signedCurve(t, zero float64) oklab {
-	const sand, sandSwell = 70, 0.075 // hue in degrees, chroma
-	lightness := lightEnd + t*(darkEnd-lightEnd)
-	if t < zero {
-		away := (zero - t) / zero
-		return polar(lightness, sandSwell*math.Min(1, 1.6*zero)*away*(1-0.45*away*away), sand)
+	// A short side turns by less: the hue never goes faster than over a third,
+	// or over half, of the ramp.
+	const green, toSand, toViolet = 150, 78, 140 // degrees
+	hue := green - toSand*math.Min(1, 3*zero)*(zero-t)/zero
+	if t > zero {
+		hue = green + toViolet*math.Min(1, 2*(1-zero))*(t-zero)/(1-zero)
 	}
-	away := (t - zero) / (1 - zero)
-	swell := math.Sin(math.Pi * math.Pow(away, 0.85))
-	return polar(lightness, chromaSwell*swell*(1-0.35*zero)+chromaEnds*away, hueStart+hueTurn*t)
+	c := rampCurve(t)
+	const chroma = 0.7 // of the plain ramp's: what is near zero is no news
+	return polar(c.L, chroma*math.Hypot(c.A, c.B), hue)
 }
 
 // plainRamp walks the curve of fields without a sign.

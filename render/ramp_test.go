@@ -50,61 +50,99 @@ func dichromat(c [3]float64, protan bool) [3]float64 {
 
 const rampSamples = 33
 
-func sampledRamp() (light [rampSamples][3]float64) {
+// ramps are the ramp of fields without a sign and those of fields with one, zero
+// anywhere.
+func ramps() map[string]*ramp {
+	return map[string]*ramp{
+		"plain": newRamp(0, 2.1), "even": newRamp(-1.8, 1.8), "little below": newRamp(-0.1, 2.3), "little above": newRamp(-3, 0.2),
+		"third below": newRamp(-1, 2),
+	}
+}
+
+func sampledRamp(r *ramp) (light [rampSamples][3]float64) {
 	for i := range light {
-		light[i] = lightOf(tone(float64(i) / (rampSamples - 1)))
+		light[i] = lightOf(r.tone(r.low + (r.high-r.low)*float64(i)/(rampSamples-1)))
 	}
 	return light
 }
 
 // Equal steps of value look about equally large: no step differs from the mean
 // by more than 40 % in CIELAB, which is the disagreement between the two spaces
-// more than the ramp's own.
+// more than the ramp's own. Where the hue turns at zero it may be half.
 func TestRampIsEven(t *testing.T) {
-	ramp := sampledRamp()
-	mean := 0.0
-	steps := make([]float64, rampSamples-1)
-	for i := range steps {
-		steps[i] = difference(cielab(ramp[i]), cielab(ramp[i+1]))
-		mean += steps[i] / float64(len(steps))
-	}
-	for i, d := range steps {
-		if d < 0.6*mean || d > 1.4*mean {
-			t.Errorf("step %d to %d looks %.2f wide, the mean is %.2f", i, i+1, d, mean)
+	for name, r := range ramps() {
+		ramp := sampledRamp(r)
+		off := 0.4
+		if r.low < 0 {
+			off = 0.5
 		}
-	}
-	if whole := cielab(ramp[0])[0] - cielab(ramp[rampSamples-1])[0]; whole < 75 {
-		t.Errorf("lightness spans only %.1f of 100", whole)
+		mean := 0.0
+		steps := make([]float64, rampSamples-1)
+		for i := range steps {
+			steps[i] = difference(cielab(ramp[i]), cielab(ramp[i+1]))
+			mean += steps[i] / float64(len(steps))
+		}
+		for i, d := range steps {
+			if d < (1-off)*mean || d > (1+off)*mean {
+				t.Errorf("%s: step %d to %d looks %.2f wide, the mean is %.2f", name, i, i+1, d, mean)
+			}
+		}
+		if whole := cielab(ramp[0])[0] - cielab(ramp[rampSamples-1])[0]; whole < 75 {
+			t.Errorf("%s: lightness spans only %.1f of 100", name, whole)
+		}
 	}
 }
 
 // Lightness falls all the way, for full sight and for both kinds of red-green
 // blindness, and no sample falls by less than half of the even step.
 func TestRampLightnessFalls(t *testing.T) {
-	ramp := sampledRamp()
 	sights := map[string]func([3]float64) [3]float64{
 		"full sight":   func(c [3]float64) [3]float64 { return c },
 		"protanopia":   func(c [3]float64) [3]float64 { return dichromat(c, true) },
 		"deuteranopia": func(c [3]float64) [3]float64 { return dichromat(c, false) },
 	}
-	for name, sight := range sights {
-		first, last := cielab(sight(ramp[0]))[0], cielab(sight(ramp[rampSamples-1]))[0]
-		even := (first - last) / (rampSamples - 1)
-		for i := 1; i < rampSamples; i++ {
-			fall := cielab(sight(ramp[i-1]))[0] - cielab(sight(ramp[i]))[0]
-			if fall < even/2 {
-				t.Errorf("%s: lightness falls by %.2f from sample %d to %d, even would be %.2f", name, fall, i-1, i, even)
+	for kind, r := range ramps() {
+		ramp := sampledRamp(r)
+		for name, sight := range sights {
+			first, last := cielab(sight(ramp[0]))[0], cielab(sight(ramp[rampSamples-1]))[0]
+			even := (first - last) / (rampSamples - 1)
+			for i := 1; i < rampSamples; i++ {
+				fall := cielab(sight(ramp[i-1]))[0] - cielab(sight(ramp[i]))[0]
+				if fall < even/2 {
+					t.Errorf("%s, %s: lightness falls by %.2f from sample %d to %d, even would be %.2f", kind, name, fall, i-1, i, even)
+				}
 			}
 		}
 	}
 }
 
-// The curve stays inside what a screen can show, or clipping would bend it.
+// Zero has the tone that lies at its share of the ramp's lightness, so that grey
+// print reads signed values too.
+func TestZeroHasOneTone(t *testing.T) {
+	for _, r := range ramps() {
+		zero := -r.low / (r.high - r.low)
+		want := lightEnd + zero*(darkEnd-lightEnd)
+		linear := lightOf(r.tone(0))
+		grey := cielab(linear)[0]
+		c := oklab{L: want}
+		if even := cielab(lightOf(c.rgba()))[0]; math.Abs(grey-even) > 4 {
+			t.Errorf("zero at %.2f of the ramp has lightness %.1f, even would be %.1f", zero, grey, even)
+		}
+	}
+}
+
+// The curves stay inside what a screen can show, or clipping would bend them.
 func TestRampInGamut(t *testing.T) {
-	for i := range 101 {
-		for k, v := range rampCurve(float64(i) / 100).linear() {
-			if v < 0 || v > 1 {
-				t.Errorf("at %d %%: primary %d is %.4f", i, k, v)
+	for _, zero := range []float64{0, 0.05, 0.3, 0.5, 0.9} {
+		for i := range 101 {
+			c := rampCurve(float64(i) / 100)
+			if zero > 0 {
+				c = signedCurve(float64(i)/100, zero)
+			}
+			for k, v := range c.linear() {
+				if v < 0 || v > 1 {
+					t.Errorf("zero at %g, %d %%: primary %d is %.4f", zero, i, k, v)
+				}
 			}
 		}
 	}

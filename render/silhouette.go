@@ -150,6 +150,9 @@ func (s *sheet) edges(v *view, part *specimen.Part, width float64, c color.Color
 	s.dc.Stroke()
 }
 
+// symmetryPast is how far the line of symmetry goes beyond a view, in units.
+const symmetryPast = 18
+
 // symmetry draws the chain line y = 0 over the width of a view. Where the other
 // half is left out it ends in the two short strokes that say so (ISO 128-3).
 func (s *sheet) symmetry(v *view, overshoot float64) {

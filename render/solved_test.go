@@ -110,6 +110,22 @@ var proportions = []struct {
 	{"collar of a shaft", "shaft-collar", scf.Dims{"D": 60, "d": 30, "r": 3, "L": 30}, scf.Bending},
 }
 
+// extremes are proportions at the ends of what is accepted.
+var extremes = []struct {
+	name   string
+	family string
+	dims   scf.Dims
+	load   scf.Load
+}{
+	{"nearly no step", "shaft-shoulder", scf.Dims{"D": 60.6, "d": 60, "r": 2}, scf.Bending},
+	{"very deep step", "shaft-shoulder", scf.Dims{"D": 600, "d": 20, "r": 4}, scf.Tension},
+	{"long ring groove", "shaft-ring-groove", scf.Dims{"D": 20, "d": 18, "r": 1, "w": 120}, scf.Torsion},
+	{"long collar", "bar-collar", scf.Dims{"D": 30, "d": 20, "r": 2, "L": 150}, scf.Bending},
+	{"tiny hole", "bar-hole", scf.Dims{"W": 60, "d": 0.5}, scf.Tension},
+	{"slit", "bar-ellipse", scf.Dims{"W": 60, "a": 12, "b": 0.4}, scf.Tension},
+	{"wide opening", "bar-edge-notch", scf.Dims{"D": 60, "d": 30, "r": 1, "angle": 120}, scf.Tension},
+}
+
 func handbook(part *specimen.Part, load scf.Load) []scf.Value {
 	if part.Family == nil {
 		return nil

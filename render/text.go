@@ -120,7 +120,7 @@ func (s *ruler) fit(text string, l lettering, width float64) string {
 // wrap breaks a text at spaces into at most n lines of a width in pixels; what
 // does not fit is left out, which an ellipsis shows.
 func (s *ruler) wrap(text string, l lettering, width float64, n int) []string {
-	words := strings.Fields(text)
+	words := strings.FieldsFunc(text, func(r rune) bool { return r == ' ' }) // not at spaces that keep together
 	var lines []string
 	for len(words) > 0 && len(lines) < n {
 		take := 1

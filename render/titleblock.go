@@ -256,7 +256,7 @@ func comparisonTexts(f *verify.Finding) [][4]string {
 	say := func(who string, factor float64, c verify.Comparison) {
 		verdict := verdictText(c.Verdict)
 		if c.Unsafe() {
-			verdict += ", unsafe side"
+			verdict += ", unsafe"
 		}
 		lines = append(lines, [4]string{who, number.Decimal(factor, 3), number.SignedPercent(c.Difference, 1), verdict})
 	}
