@@ -92,11 +92,11 @@ func arrange(wide, high float64, rows [2]int, block float64) layout {
 		return l
 	}
 	l.radius = math.Min(222, (left-frameMargin-120)/2)
-	lower := math.Max(legendHigh+block, captionHigh+2*l.radius+16)
+	lower := math.Max(legendHigh+block, captionHigh+2*l.radius+32)
 	l.high = top + lower + frameMargin
 	bottom := l.high - frameMargin
 	l.caption = point{frameMargin + side, top}
-	l.detail = point{(frameMargin+left)/2 - 24, (top+captionHigh+bottom)/2 + 4}
+	l.detail = point{(frameMargin+left)/2 - 24, (top + captionHigh + bottom) / 2}
 	l.legend = box{left, top, wide - frameMargin - side, top + legendHigh}
 	l.block = box{left, bottom - (lower - legendHigh), wide - frameMargin, bottom}
 	return l

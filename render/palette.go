@@ -47,9 +47,10 @@ const mostOff = 40
 
 // A counted colour is one of an image with the number of its pixels.
 type counted struct {
-	rgb   [3]uint8
-	key   uint32 // the same in one number
-	count int
+	rgb    [3]uint8
+	key    uint32 // the same in one number
+	count  int
+	smooth int // of these, those whose left neighbour is alike
 }
 
 // numbered numbers the colours of an image in the order in which they come; ids
@@ -74,7 +75,12 @@ func numbered(im *image.RGBA) (ids []uint16, colours []counted) {
 				colours = append(colours, counted{rgb: [3]uint8{uint8(key), uint8(key >> 8), uint8(key >> 16)}, key: key})
 				table[h] = uint16(len(colours))
 			}
+			if near := int(table[h]) - 1; id < 0 || alike(key, last) {
+				colours[near].smooth++
+			}
 			last, id = key, int(table[h])-1
+		} else {
+			colours[id].smooth++
 		}
 		colours[id].count++
 		ids[i] = uint16(id)
@@ -82,14 +88,27 @@ func numbered(im *image.RGBA) (ids []uint16, colours []counted) {
 	return ids, colours
 }
 
+// alike tells whether two colours differ by four levels at most, as neighbours
+// on a surface do.
+func alike(a, b uint32) bool {
+	for range 3 {
+		if d := int(a&0xff) - int(b&0xff); d > 4 || d < -4 {
+			return false
+		}
+		a, b = a>>8, b>>8
+	}
+	return true
+}
+
 // A choice of colours.
 type choice [][3]uint8
 
 const (
 	mostColours = 256
-	// Colours of so many pixels are surfaces; those of fewer are edges.
+	// Colours of so many pixels beside their like are surfaces; the others are
+	// edges.
 	surfacePixels = 16
-	surfaceShare  = 208 // of the palette, at most; the rest is for edges
+	surfaceShare  = 200 // of the palette, at most; the rest is for edges
 )
 
 // choose takes the colours of surfaces, thinned out evenly until they fit, and
@@ -99,7 +118,7 @@ func choose(colours []counted) choice {
 	for i := range order {
 		order[i] = i
 	}
-	slices.SortStableFunc(order, func(a, b int) int { return colours[b].count - colours[a].count })
+	slices.SortStableFunc(order, func(a, b int) int { return colours[b].smooth - colours[a].smooth })
 	if len(colours) <= mostColours {
 		var c choice
 		for _, i := range order {
@@ -117,11 +136,11 @@ func choose(colours []counted) choice {
 // thinned leaves out colours of surfaces that are within a distance of a
 // commoner one; ok is false where too many are left.
 func thinned(colours []counted, order []int, apart int) (c choice, ok bool) {
-	for _, i := range order {
-		if colours[i].count < surfacePixels {
+	for n, i := range order {
+		if n > 0 && colours[i].smooth < surfacePixels {
 			break
 		}
-		if rgb := colours[i].rgb; len(c) == 0 || c.gap(c.closest(rgb), rgb) > apart {
+		if rgb := colours[i].rgb; n == 0 || c.gap(c.closest(rgb), rgb) > apart {
 			if len(c) == surfaceShare {
 				return nil, false
 			}
