@@ -10,8 +10,6 @@ import (
 	"strings"
 	"testing"
 
-	"github.com/fogleman/gg"
-
 	"notchproof/scf"
 )
 
@@ -152,7 +150,7 @@ func TestSimplified(t *testing.T) {
 // pixel.
 func TestTinyArcsAreDrawn(t *testing.T) {
 	im := blank(40, 40)
-	s := newSheetOn(pixels{gg.NewContextForRGBA(im)}, 1, sizeOf(im))
+	s := newSheetOn(newPixels(im), 1, sizeOf(im))
 	ps := make([]point, 49)
 	for i := range ps {
 		sin, cos := math.Sincos(math.Pi / 2 * float64(i) / 48)
