@@ -162,7 +162,7 @@ func (s *Study) observe(order int) {
 		study = study.Against(float64(order), 2)
 	}
 	s.Sizes, s.Estimate = &study, study.Estimate()
-	s.rates(study.Orders, first)
+	s.rates(study, first)
 	if endless(s.Corners) {
 		s.Estimate = noFactor()
 		return
@@ -175,11 +175,11 @@ func (s *Study) observe(order int) {
 
 // rates fills in the orders that were observed, and where a ladder grows without
 // end the power of the size with which it does, negative.
-func (s *Study) rates(orders []float64, first int) {
-	for i, observed := range orders {
+func (s *Study) rates(study extrapolate.Study, first int) {
+	for i, observed := range study.Orders {
 		at := first + 2 + i
 		s.Rows[at].ObservedOrder = observed
-		if growth := s.Rows[at].Change / s.Rows[at-1].Change; math.IsNaN(observed) && growth > 0 {
+		if growth := s.Rows[at].Change / s.Rows[at-1].Change; study.Status == extrapolate.Diverging && math.IsNaN(observed) && growth > 0 {
 			s.Rows[at].ObservedOrder = -math.Log2(growth)
 		}
 	}

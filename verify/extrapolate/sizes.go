@@ -82,6 +82,13 @@ func (s *Study) read(h, f []float64) {
 		return
 	}
 	s.Order, s.Status = observedOrder(h[:3], f[:3])
+	if s.Status == Diverging && math.Abs(e21) <= widest(f)/10 {
+		// The ladder has come down far already: it is the difference before the
+		// last one that is small by accident.
+		s.Status, s.Order = Undecided, 0
+		s.Warnings = append(s.Warnings, "the difference before the last one is small by accident: add a rung")
+		return
+	}
 	if s.Status == Undecided || s.Status == Diverging {
 		s.Order = 0
 		s.Warnings = append(s.Warnings, "the differences do not shrink as any positive order would make them")
@@ -96,6 +103,15 @@ func (s *Study) read(h, f []float64) {
 	s.GCI = safetyObserved * s.Change / (a - 1)
 	coarse := safetyObserved * math.Abs((f[2]-f[1])/f[1]) / (math.Pow(r32, s.Order) - 1)
 	s.Asymptotic = coarse / (a * s.GCI)
+}
+
+// widest is the largest difference between neighbours.
+func widest(f []float64) float64 {
+	most := 0.0
+	for i := 1; i < len(f); i++ {
+		most = math.Max(most, math.Abs(f[i]-f[i-1]))
+	}
+	return most
 }
 
 // Estimate gives the finest rung's value with the grid convergence index as

@@ -134,3 +134,16 @@ func TestSizesPanics(t *testing.T) {
 		}()
 	}
 }
+
+// A ladder that has come down a hundredfold and whose last difference but one is
+// small by accident is undecided, not diverging; one that grows from the start
+// diverges.
+func TestSizesTellAccidentsFromGrowth(t *testing.T) {
+	sizes := []float64{8, 4, 2, 1}
+	if s := Sizes(sizes, []float64{2.054, 2.1044, 2.1043, 2.1022}); s.Status != Undecided || !math.IsNaN(s.Estimate().Value) {
+		t.Errorf("an accident: %s, %v", s.Status, s.Estimate())
+	}
+	if s := Sizes(sizes, []float64{2, 2.7, 3.7, 5.1}); s.Status != Diverging {
+		t.Errorf("growth: %s", s.Status)
+	}
+}
