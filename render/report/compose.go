@@ -5,6 +5,7 @@ import (
 	"math"
 	"slices"
 	"strings"
+	"unicode"
 
 	"notchproof/render/number"
 	"notchproof/scf"
@@ -25,11 +26,12 @@ type Source struct {
 // New puts what is to be said about a result into a content, without figures.
 func New(r *verify.Result, s Source) *Content {
 	c := &Content{
-		Schema: schema, Program: s.Program, Sheet: s.Sheet, Part: partOf(r.Part),
+		Schema: schema, Program: s.Program, Part: partOf(r.Part),
 		Input: s.Input, Figures: []Figure{}, Caution: oneParagraph(s.Caution),
 	}
+	c.Sheet = Sheet{plain(s.Sheet.Title), plain(s.Sheet.By), plain(s.Sheet.Date)}
 	if c.Sheet.Title == "" {
-		c.Sheet.Title = titleOf(r.Part)
+		c.Sheet.Title = plain(titleOf(r.Part))
 	}
 	for i := range r.Findings {
 		f := findingOf(&r.Findings[i], r.Part)
@@ -39,6 +41,17 @@ func New(r *verify.Result, s Source) *Content {
 	c.Question = question(r)
 	c.Method, c.Sources = method(r)
 	return c
+}
+
+// plain keeps what people wrote from steering what stands around it: control
+// characters and those that turn the direction of text become dots.
+func plain(text string) string {
+	return strings.Map(func(r rune) rune {
+		if unicode.IsControl(r) || unicode.Is(unicode.Bidi_Control, r) {
+			return '·'
+		}
+		return r
+	}, text)
 }
 
 func oneParagraph(text string) string { return strings.Join(strings.Fields(text), " ") }
@@ -54,8 +67,12 @@ func titleOf(p *specimen.Part) string {
 }
 
 func partOf(p *specimen.Part) Part {
-	part := Part{Name: p.Name, Shape: "an outline of its own", Unit: p.Unit, Nu: p.Options.Nu, Dimensions: []Dimension{}}
+	part := Part{Name: p.Name, Unit: p.Unit, Nu: p.Options.Nu, Dimensions: []Dimension{}}
 	if p.Family == nil {
+		part.Shape = "a bar with an outline of its own"
+		if p.Loads[0].Model.Revolved() {
+			part.Shape = "a shaft with an outline of its own"
+		}
 		return part
 	}
 	part.Shape = p.Family.Title
@@ -91,7 +108,7 @@ func findingOf(f *verify.Finding, p *specimen.Part) Finding {
 		out.Handbook = append(out.Handbook, handbookOf(h))
 	}
 	if c := f.Claim; c != nil {
-		out.Claim = &Claim{c.Claim.Factor, c.Claim.From, c.Tolerance, numberOf(c.Difference), verdictOf(c.Verdict), c.Unsafe()}
+		out.Claim = &Claim{c.Claim.Factor, plain(c.Claim.From), c.Tolerance, numberOf(c.Difference), verdictOf(c.Verdict), c.Unsafe()}
 	}
 	if m := f.MeshClaim; m != nil {
 		out.ClaimMesh = claimMeshOf(m)
@@ -176,7 +193,7 @@ func question(r *verify.Result) string {
 		if c := f.Claim; c != nil {
 			from := ""
 			if c.Claim.From != "" {
-				from = " (" + c.Claim.From + ")"
+				from = " (" + plain(c.Claim.From) + ")"
 			}
 			claims = append(claims, fmt.Sprintf("%s%s in %s", number.Compact(c.Claim.Factor, 6), from, f.Load.Name))
 		}
