@@ -20,7 +20,7 @@ import (
 // that they have on paper.
 const (
 	stressWidth = 1600
-	sketchWide  = 210 // mm
+	sketchWide  = 122 // mm
 	ladderWide  = 150
 )
 
