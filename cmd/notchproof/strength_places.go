@@ -25,6 +25,24 @@ func (b *strengthSheet) notch() {
 		b.line("  by hand, %-18s %s  %s  %s", h.With, b.uncertain(h.Equivalent, h.Uncertainty), number.SignedPercent(h.Difference, 1), b.side(h, n))
 	}
 	b.line("             by hand: every nominal stress times its own factor, all at one point")
+	if b.apart() {
+		var peaks []string
+		for _, f := range b.Checked.Findings {
+			at := f.Computed.Peak
+			peaks = append(peaks, fmt.Sprintf("%s on the %s at x = %s", f.Load.Name, at.Side, number.Length(round(at.X, 3), b.Part().Unit)))
+		}
+		b.line("             but the peaks lie apart: %s", strings.Join(peaks, ", "))
+	}
+}
+
+// apart tells that the single loads peak on sides of different names.
+func (b *strengthSheet) apart() bool {
+	for _, f := range b.Checked.Findings {
+		if f.Computed.Peak.Side != b.Checked.Findings[0].Computed.Peak.Side {
+			return true
+		}
+	}
+	return false
 }
 
 // side tells on which side of the computed stress the rule by hand lies, and

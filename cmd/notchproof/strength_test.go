@@ -38,6 +38,7 @@ func TestStrengthStatuses(t *testing.T) {
 		{"strength ../../testdata/parts/thruster-shaft-step.json", exitNotMet, []string{"1.8: not met"}},
 		{"strength ../../testdata/parts/thruster-shaft-step.json --safety 1.4", exitAgrees, []string{"1.4: met"}},
 		{"strength ../../testdata/parts/undercut-bearing-seat.json --bending 900N·m", exitAgrees, []string{"2.0 to 2.5 and more", "no chart covers", "none in range"}},
+		{"strength ../../testdata/parts/hatch-hanger-plate.json --axial 40kN --bending -300N·m --thickness 12mm --yield 235MPa", exitAgrees, []string{"but the peaks lie apart", "conservative"}},
 		{"strength " + sharp, exitUndecided, []string{"undecided", "no radius"}},
 		{"strength " + sharp + " --json", exitUndecided, []string{`"decision": "undecided"`}},
 		{"help strength", exitAgrees, []string{"--axial", "Exit status"}},
