@@ -43,10 +43,10 @@ func (s *sheet) diagram(cell box, d Diagram) {
 			}
 		}
 	}
+	p.endings(ends)
 	for _, stop := range d.Stops {
 		p.stopLabel(stop)
 	}
-	p.endings(ends)
 }
 
 // curve draws the line, the bars and the marks of a curve; form is the form of
@@ -173,12 +173,11 @@ func (p *panel) levelBand(l Level) {
 	p.take(box{p.frame.X0, y - 1, p.frame.X1, y + 1})
 }
 
-// stop draws the line of a place on the x axis.
+// stop draws the line of a place on the x axis. Lettering may interrupt it.
 func (p *panel) stop(s Stop) {
 	x := p.x.at(s.At)
 	p.pen(grey, hairline)
 	p.dc.SetDash(p.u(14), p.u(4), p.u(2), p.u(4))
 	p.line(point{x, p.frame.Y0}, point{x, p.frame.Y1})
 	p.dc.SetDash()
-	p.take(box{x - 1, p.frame.Y0, x + 1, p.frame.Y1})
 }

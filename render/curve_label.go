@@ -40,9 +40,13 @@ func (s *sheet) endRoom(cell box, d Diagram) float64 {
 	return widest + s.u(26)
 }
 
-// endLines breaks the label of a curve into lines.
+// endLines breaks the label of a curve into lines, none narrower than its words.
 func (s *sheet) endLines(cell box, label string) []string {
-	return s.wrap(label, small, math.Max(s.u(130), 0.2*cell.width()), 4)
+	width := math.Max(s.u(130), 0.2*cell.width())
+	for _, word := range wordsOf(label) {
+		width = math.Max(width, s.measure(word, small))
+	}
+	return s.wrap(label, small, width, 6)
 }
 
 // nearHigh tells whether a value is as good as the upper end of an axis, or
@@ -89,13 +93,13 @@ func (p *panel) inside(e ending) bool {
 	width := p.measure(e.label, small)
 	for _, off := range [5]float64{10, 20, 36, 56, 80} {
 		for _, part := range [3]float64{1, 0.6, 0.4} {
-			lines := p.wrap(e.label, small, part*width+1, 4)
-			if strings.Join(lines, " ") != strings.Join(strings.Fields(e.label), " ") {
+			lines := p.wrap(e.label, small, part*width+1, 6)
+			if strings.Join(lines, " ") != strings.Join(wordsOf(e.label), " ") {
 				continue // a word is wider than that
 			}
 			for _, back := range [4]float64{0, 0.1, 0.25, 0.45} {
 				at := e.path[int(float64(len(e.path)-1)*(1-back))]
-				if p.beside(at, off, lines) {
+				if p.beside(at, off, lines, len(e.path) == 1) {
 					return true
 				}
 			}
@@ -105,21 +109,26 @@ func (p *panel) inside(e ending) bool {
 }
 
 // beside letters lines at a distance, in units, from a point, in the first of
-// eight directions that is free.
-func (p *panel) beside(at point, off float64, lines []string) bool {
+// eight directions that is free: of a single point above it, of a curve beyond
+// its end.
+func (p *panel) beside(at point, off float64, lines []string, single bool) bool {
+	directions := []point{{1, 0}, {1, -1}, {1, 1}, {0, -1}, {0, 1}, {-1, -1}, {-1, 1}, {-1, 0}}
+	if single {
+		directions = []point{{0, -1}, {1, -1}, {-1, -1}, {1, 0}, {-1, 0}, {1, 1}, {-1, 1}, {0, 1}}
+	}
 	width, leading := 0.0, p.u(small.Size+3)
 	for _, line := range lines {
 		width = math.Max(width, p.measure(line, small))
 	}
 	height := leading * float64(len(lines))
-	for _, d := range [8]point{{1, 0}, {1, -1}, {1, 1}, {0, -1}, {0, 1}, {-1, -1}, {-1, 1}, {-1, 0}} {
+	for _, d := range directions {
 		// The side of the block that looks at the point stands off by the distance.
 		x, y := at.X+d.X*p.u(off)-width*(1-d.X)/2, at.Y+d.Y*p.u(off)-height*(1-d.Y)/2
 		b := box{x, y, x + width, y + height}
-		if !p.frame.holds(b) || !p.free(b.widened(p.u(6))) {
+		if !p.frame.holds(b.grown(p.u(3))) || !p.free(b.widened(p.u(6))) {
 			continue
 		}
-		if off > 20 {
+		if off >= 20 {
 			p.pen(ink, hairline)
 			p.line(at.plus(d.X*p.u(4), d.Y*p.u(4)), at.plus(d.X*p.u(off-3), d.Y*p.u(off-3)))
 		}
@@ -226,7 +235,7 @@ func (p *panel) stopLabel(s Stop) {
 	for y := p.frame.Y0 + p.u(8); y < p.frame.Y1-p.u(small.Size); y += p.u(10) {
 		for _, side := range [2]float64{1, -1} {
 			at := point{x + side*p.u(6), y}
-			if b := p.sheet.place(at, (1-side)/2, 0, s.Label, small); p.free(b) && p.frame.holds(b) {
+			if b := p.sheet.place(at, (1-side)/2, 0, s.Label, small); p.free(b.widened(p.u(6))) && p.frame.holds(b) {
 				p.onPaper(at, (1-side)/2, 0, s.Label, small, grey)
 				return
 			}

@@ -57,7 +57,7 @@ func newLadder(f *verify.Finding, part *specimen.Part) ladder {
 	c := &f.Computed
 	l := ladder{
 		title:  headText(part, f) + ": ladder of factors",
-		note:   dimensionText(part) + "; " + nominalText(f.Load) + "; bars of rungs: traction left on the free surface, at unit nominal stress",
+		note:   dimensionText(part) + "; " + nominalNote(f) + "; bars of rungs: traction left on the free surface, at unit nominal stress",
 		answer: c.Factor.Value, bar: c.Factor.Uncertainty,
 	}
 	for _, r := range c.Ladder {

@@ -2,6 +2,7 @@ package render
 
 import (
 	"math"
+	"strings"
 
 	"notchproof/render/number"
 	"notchproof/verify"
@@ -16,7 +17,7 @@ func SectionFigure(f *verify.Finding, part *specimen.Part) (*Figure, error) {
 	if err != nil {
 		return nil, err
 	}
-	plot := Plot{Title: headText(part, f) + ": stress below the root", Note: dimensionText(part) + "; " + nominalText(f.Load)}
+	plot := Plot{Title: headText(part, f) + ": stress below the root", Note: dimensionText(part) + "; " + nominalNote(f)}
 	near := profile.Length
 	if d := steep(profile); 8*d < profile.Length {
 		near = roundStep(4 * d)
@@ -38,6 +39,17 @@ func headText(part *specimen.Part, f *verify.Finding) string {
 		name = part.Name
 	}
 	return name + ", " + string(f.Load.Name)
+}
+
+// nominalNote says what stresses are multiples of; its formula is kept in one
+// line.
+func nominalNote(f *verify.Finding) string {
+	n := f.Load.Nominal
+	text := "nominal stress " + strings.ReplaceAll(n.Formula, " ", "\u00a0")
+	if n.Section != "" {
+		text += " (" + n.Section + ")"
+	}
+	return text
 }
 
 // steep is the depth at which half of what the notch adds to the nominal stress
@@ -105,7 +117,7 @@ func peakMark(f *verify.Finding) Curve {
 	if !e.Status.Settled() {
 		return Curve{}
 	}
-	return Curve{Line: NoLine, Marked: true, Points: []CurvePoint{{Y: e.Value, Bar: e.Uncertainty, Label: number.Uncertain(e.Value, e.Uncertainty)}}}
+	return Curve{Label: number.Uncertain(e.Value, e.Uncertainty), Line: NoLine, Marked: true, Points: []CurvePoint{{Y: e.Value, Bar: e.Uncertainty}}}
 }
 
 // upTo cuts the curves off at the end of the x axis and lets the y axis begin at
@@ -122,7 +134,8 @@ func (d Diagram) upTo(reach float64) Diagram {
 	if low < 0 {
 		low -= 0.05 * (high - low)
 	}
-	d.Y.Low, d.Y.High = low, high+0.1*(high-low)
+	const headroom = 0.16 // for the factor above its mark
+	d.Y.Low, d.Y.High = low, high+headroom*(high-low)
 	return d
 }
 
@@ -174,7 +187,7 @@ func SurfaceFigure(f *verify.Finding, part *specimen.Part) (*Figure, error) {
 		}
 	}
 	return Chart(Plot{Title: headText(part, f) + ": stress along the notch",
-		Note: dimensionText(part) + "; " + nominalText(f.Load) + "; peak " + peakPlace(f, part), Diagrams: []Diagram{d.upTo(last)}})
+		Note: dimensionText(part) + "; " + nominalNote(f) + "; peak " + peakPlace(f, part), Diagrams: []Diagram{d.upTo(last)}})
 }
 
 // along is a curve over the arc length of a profile.

@@ -24,10 +24,13 @@ func TestProfileLayout(t *testing.T) {
 				if err != nil {
 					t.Fatal(err)
 				}
-				s, _ := figure.vector(FigureOptions{})
-				checkLayout(t, s)
-				s, _ = figure.vector(FigureOptions{Millimetres: 80})
-				checkLayout(t, s)
+				for _, mm := range []float64{210, 80} {
+					s, _ := figure.vector(FigureOptions{Millimetres: mm})
+					checkLayout(t, s)
+					if e := f.Computed.Factor; !letters(s, number.Uncertain(e.Value, e.Uncertainty)) {
+						t.Errorf("%s: the factor is missing", figure.title)
+					}
+				}
 			}
 		})
 	}

@@ -149,17 +149,17 @@ func TestSimplified(t *testing.T) {
 // A tiny arc is drawn: the rasteriser alone would lose chords of a fraction of a
 // pixel.
 func TestTinyArcsAreDrawn(t *testing.T) {
-	im := blank(40, 40)
-	s := newSheetOn(newPixels(im), 1, sizeOf(im))
-	ps := make([]point, 49)
-	for i := range ps {
-		sin, cos := math.Sincos(math.Pi / 2 * float64(i) / 48)
-		ps[i] = point{20 + 2.3*cos, 20 + 2.3*sin}
-	}
-	s.pen(ink, wide)
-	s.polyline(ps)
-	s.dc.Stroke()
-	if c := im.RGBAAt(21, 21); c.G > 128 {
-		t.Errorf("the middle of the arc is as light as %d", c.G)
+	f := &Figure{height: func(float64) float64 { return 400 }, draw: func(s *sheet) {
+		ps := make([]point, 49)
+		for i := range ps {
+			sin, cos := math.Sincos(math.Pi / 2 * float64(i) / 48)
+			ps[i] = point{60 + 2.3*cos, 60 + 2.3*sin}
+		}
+		s.pen(ink, wide)
+		s.polyline(ps)
+		s.dc.Stroke()
+	}}
+	if r, _, _, _ := f.Image(FigureOptions{}).At(61, 61).RGBA(); r > 0x8000 {
+		t.Errorf("the middle of the arc is as light as %#x", r)
 	}
 }

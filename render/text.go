@@ -117,10 +117,16 @@ func (s *ruler) fit(text string, l lettering, width float64) string {
 	return ""
 }
 
+// wordsOf parts a text where lines may break: at plain spaces, not at those that
+// keep a number and its unit or its uncertainty together.
+func wordsOf(text string) []string {
+	return strings.FieldsFunc(text, func(r rune) bool { return r == ' ' })
+}
+
 // wrap breaks a text at spaces into at most n lines of a width in pixels; what
 // does not fit is left out, which an ellipsis shows.
 func (s *ruler) wrap(text string, l lettering, width float64, n int) []string {
-	words := strings.FieldsFunc(text, func(r rune) bool { return r == ' ' }) // not at spaces that keep together
+	words := wordsOf(text)
 	var lines []string
 	for len(words) > 0 && len(lines) < n {
 		take := 1
