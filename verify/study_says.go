@@ -21,6 +21,10 @@ func (s *Study) Says() []string {
 	if blind > 0 {
 		says = append(says, s.blindness(blind)...)
 	}
+	if first := s.Rows[0]; !first.Blind && first.Size < s.SizeAsked/2 {
+		says = append(says, fmt.Sprintf("the first mesh has elements of %s at the peak, not %s: the ends of a root are corners of every mesh, and this part's cannot be left out",
+			s.length(first.Size), s.length(s.SizeAsked)))
+	}
 	if !s.Endless() {
 		return says
 	}

@@ -95,3 +95,27 @@ func TestReadmeMisreading(t *testing.T) {
 		t.Errorf("exit status %d, the README shows\n%s\nprinted\n%s%s", status, block[2], errs.String(), out.String())
 	}
 }
+
+// TestReadmeOnCorners holds the statement about a sharp corner against what is
+// printed; what is measured may move within its bar.
+func TestReadmeOnCorners(t *testing.T) {
+	text, err := os.ReadFile("../../README.md")
+	if err != nil {
+		t.Fatal(err)
+	}
+	block := regexp.MustCompile("(?s)\\$ notchproof (study [^\n]*r=0 --load bending)[^\n]*\n(.*?)\n\\$").FindStringSubmatch(string(text))
+	if block == nil {
+		t.Fatal("the example is not in the README")
+	}
+	status, out, errs := program(t, block[1])
+	if status != exitUndecided || errs != "" {
+		t.Fatalf("exit status %d, %s", status, errs)
+	}
+	measured := regexp.MustCompile("measured −0.455[0-9]+ ± 0.000[0-9]+")
+	out = measured.ReplaceAllString(out, "measured")
+	for _, line := range strings.Split(measured.ReplaceAllString(block[2], "measured"), "\n") {
+		if !strings.Contains(out, line) {
+			t.Errorf("README  %s\nprinted %s", line, out)
+		}
+	}
+}
