@@ -132,6 +132,10 @@ func (s *sizeQuestion) kind() (set func() error, err error) {
 		return nil, &inputError{text: "--nominal and " + forces + ": one or the other", hint: "a nominal stress goes with --load, forces and moments stand for themselves"}
 	case s.flags.Changed("nominal"):
 		return s.setPeak, nil
+	case len(goals) == 1 && s.flags.Changed("load") && s.flags.Changed("stress") && forces == "":
+		return nil, &inputError{text: "--stress with --load: at which nominal stress?", hint: "give the nominal stress of the part as given, as in --nominal 60MPa, or the load itself, as in --axial 12kN"}
+	case len(goals) == 1 && s.flags.Changed("load"):
+		return nil, &inputError{text: "--load with " + goals[0] + ": the forces and moments say which loads act", hint: "leave --load out"}
 	case len(goals) == 1 || file != nil && file.Forces.Safety != 0:
 		return s.setEquivalent, nil
 	}

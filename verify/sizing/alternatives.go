@@ -138,7 +138,7 @@ func (q *Question) local(ctx context.Context, w *way) (Sample, float64, error) {
 	case len(s.nodes) == 0:
 		return Sample{}, 0, nil
 	case before < 0:
-		x, err := q.lowest(ctx, s, c, q.rough(), 3)
+		x, err := q.extreme(ctx, s, c, q.rough(), 1, 3)
 		if err != nil {
 			return Sample{}, 0, err
 		}

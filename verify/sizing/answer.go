@@ -92,6 +92,12 @@ func (q *Question) search(ctx context.Context, kind scf.Dimension, in Interval, 
 	}
 	a.Searched = Interval{s.nodes[0].At, s.nodes[len(s.nodes)-1].At}
 	before, falling := s.crossing()
+	if before < 0 && s.nodes[0].f <= 0 && e.Order > 0 {
+		if err = q.confirmHighest(ctx, s, c, e); err != nil {
+			return nil, err
+		}
+		before, falling = s.crossing()
+	}
 	ok := true
 	switch {
 	case before >= 0:
@@ -101,7 +107,7 @@ func (q *Question) search(ctx context.Context, kind scf.Dimension, in Interval, 
 		ok, err = q.finish(ctx, a, s.nodes[0].At, Throughout)
 	default:
 		var x float64
-		if x, err = q.lowest(ctx, s, c, e, 8); err == nil {
+		if x, err = q.extreme(ctx, s, c, e, 1, 8); err == nil {
 			ok, err = q.finish(ctx, a, x, Beyond)
 		}
 	}
@@ -148,12 +154,30 @@ func (q *Question) bar(c coordinate, end node, others []node) float64 {
 	return (end.Uncertainty + math.Abs(end.Value-q.Limit)) / slope
 }
 
-// lowest finds where the measure is lowest, when none keeps the limit: by
-// halves of the bracket around the lowest point known, until neither the value
-// nor its neighbours differ by more than the bars of a scan, or for a number of
-// rounds.
-func (q *Question) lowest(ctx context.Context, s *scan, c coordinate, e Effort, rounds int) (float64, error) {
-	i := s.best()
+// confirmHighest solves the highest place of a scan in full, where it is so
+// near to the limit that a single solve may have missed that it lies above.
+func (q *Question) confirmHighest(ctx context.Context, s *scan, c coordinate, e Effort) error {
+	const near = 0.05
+	if s.nodes[s.best(-1)].f < -near {
+		return nil
+	}
+	x, err := q.extreme(ctx, s, c, e, -1, 8)
+	if err != nil {
+		return err
+	}
+	sample, err := q.sample(ctx, x, q.full())
+	if err == nil && sample.Decided {
+		s.nodes[s.best(-1)] = q.node(c, sample)
+	}
+	return err
+}
+
+// extreme finds where the measure is lowest (sign 1) or highest (−1), when none
+// of the values known lies on the other side of the limit: by halves of the
+// bracket around the extreme one, until neither the value nor its neighbours
+// differ by more than the error of a single solve, or for a number of rounds.
+func (q *Question) extreme(ctx context.Context, s *scan, c coordinate, e Effort, sign float64, rounds int) (float64, error) {
+	i := s.best(sign)
 	for range rounds {
 		if i == 0 || i == len(s.nodes)-1 {
 			break // at the end of what can be drawn
@@ -164,11 +188,11 @@ func (q *Question) lowest(ctx context.Context, s *scan, c coordinate, e Effort, 
 			return 0, err
 		}
 		s.add(q, c, more...)
-		i = s.best()
-		if i == 0 || i == len(s.nodes)-1 {
+		if i = s.best(sign); i == 0 || i == len(s.nodes)-1 {
 			break
 		}
-		if flat := math.Max(s.nodes[i-1].f, s.nodes[i+1].f) - s.nodes[i].f; old-s.nodes[i].f < 1e-3 && flat < 1e-3 {
+		flat := math.Max(sign*s.nodes[i-1].f, sign*s.nodes[i+1].f) - sign*s.nodes[i].f
+		if sign*(old-s.nodes[i].f) < 1e-3 && flat < 1e-3 {
 			break
 		}
 	}

@@ -19,15 +19,16 @@ func (q *Question) Drawable() (Interval, error) {
 	if err != nil {
 		return Interval{}, err
 	}
+	if x, given := q.given(); given {
+		if err := q.Family.Check(q.with(x)); err != nil {
+			return Interval{}, err
+		}
+	}
 	trials := q.trials(kind)
 	lo, hi := q.stretch(trials)
 	if lo < 0 {
-		// What stands in the way is another dimension, or the given one.
-		x, given := q.given()
-		if !given {
-			x = trials[len(trials)/2]
-		}
-		return Interval{}, q.Family.Check(q.with(x))
+		// What stands in the way is another dimension.
+		return Interval{}, q.Family.Check(q.with(trials[len(trials)/2]))
 	}
 	out := Interval{trials[lo], trials[hi]}
 	if lo > 0 {

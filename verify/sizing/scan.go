@@ -103,11 +103,11 @@ func (s *scan) doubtful(c coordinate) (xs []float64) {
 	return slices.Compact(xs)
 }
 
-// best is the node at which the measure is lowest.
-func (s *scan) best() int {
+// best is the node at which the measure is lowest (sign 1) or highest (−1).
+func (s *scan) best(sign float64) int {
 	least := 0
 	for i, n := range s.nodes {
-		if n.f < s.nodes[least].f {
+		if sign*n.f < sign*s.nodes[least].f {
 			least = i
 		}
 	}
