@@ -42,10 +42,9 @@ Exit status as that of check.
 
 // drawing are the flags of a picture.
 type drawing struct {
-	file  string
-	width string
-	dpi   float64
-	o     render.PictureOptions
+	paper
+	file string
+	o    render.PictureOptions
 }
 
 func (d *drawing) flags(f *pflag.FlagSet) {
@@ -54,8 +53,7 @@ func (d *drawing) flags(f *pflag.FlagSet) {
 	f.StringVar(&d.o.Style, "style", render.StyleWash, "how: "+strings.Join(render.Styles(), " or "))
 	f.BoolVar(&d.o.Whole, "whole", false, "draw both halves of a symmetric part")
 	f.BoolVar(&d.o.Mesh, "mesh", false, "draw the edges of the elements too")
-	f.StringVar(&d.width, "width", "1600", "width in pixels, 400 to 6000, or on paper, as in 160mm")
-	f.Float64Var(&d.dpi, "dpi", 0, "pixels an inch, 72 to 1200 (default 300 for a width on paper, else 190)")
+	d.paper.flags(f)
 }
 
 func runPicture(c *call) (int, error) {
