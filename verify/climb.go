@@ -129,25 +129,38 @@ func (c *climb) hopeless(e Estimate, order int) bool {
 }
 
 // begin makes the meshes and solves the first rungs, which are always needed,
-// and the last of their orders on the second mesh beside them.
+// and the last of their orders on the second mesh. The two largest solves are of
+// about one size, and so are side by side, and then the smaller ones.
 func (c *climb) begin(ctx context.Context, p *pair, first int, out *Computed) (*shape, error) {
 	last := first + enoughRungs - 1
 	var second reading
-	s, err := p.first()
+	var rungs [enoughRungs]solvedRung
+	var errs [enoughRungs]error
+	var s *shape
+	var err error
+	rung := func(i int, w *fem.Workspace) { rungs[i], errs[i] = c.solve(ctx, s, first+i, w) }
 	c.beside(func() {
 		second = c.second(ctx, p, last, &c.work[1])
 	}, func() {
-		for order := first; order <= last && err == nil; order++ {
-			var r solvedRung
-			if r, err = c.solve(ctx, s, order, &c.work[0]); err == nil {
-				out.add(r)
-			}
+		if s, err = p.first(); err == nil {
+			rung(enoughRungs-1, &c.work[0])
 		}
 	})
-	if err == nil {
-		err = out.confirm(second)
+	if err != nil {
+		return nil, err
 	}
-	return s, err
+	c.beside(func() {
+		rung(1, &c.work[1])
+	}, func() {
+		rung(0, &c.work[0])
+	})
+	for i := range rungs {
+		if errs[i] != nil {
+			return s, errs[i]
+		}
+		out.add(rungs[i])
+	}
+	return s, out.confirm(second)
 }
 
 // raise solves one order more on both meshes.
