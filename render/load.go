@@ -12,30 +12,37 @@ import (
 
 // load draws the load's symbol beside both broken ends, on the line along which
 // it acts: an arrow for a force, a bent one for a moment, a double-headed one
-// for a torque (the vector of the right-hand rule).
-func (s *sheet) load(v *view, part *specimen.Part, load scf.Load, left, right float64, c color.Color) {
-	line := 0.0
+// for a torque (the vector of the right-hand rule). A load of negative scale acts
+// the other way. Of several loads that act along the axis the symbols of the later
+// ones are lifted above those before.
+func (s *sheet) load(v *view, part *specimen.Part, t Term, lift int, left, right float64, c color.Color) {
+	const step = 58
+	line, load, inward := 0.0, t.Load.Name, t.Scale < 0
 	if load == scf.Tension {
 		line = part.ForceLine
 	}
 	for _, end := range [2]struct{ x, sign float64 }{{left, -1}, {right, 1}} {
 		from := 2.0 + breakSwing
-		if v.half && line == 0 {
+		if v.half && line == 0 && lift == 0 {
 			from = symmetryPast + 4 // beyond the strokes that end the line of symmetry
 		}
-		root := v.at(r2.Vec{X: end.x, Y: line}).plus(end.sign*s.u(from), 0)
+		root := v.at(r2.Vec{X: end.x, Y: line}).plus(end.sign*s.u(from), -s.u(float64(step*lift)))
 		out := point{end.sign, 0}
 		letter := root.toward(out, s.u(loadLength/2))
+		foot, way := root, out
+		if inward {
+			foot, way = root.toward(out, s.u(loadLength)), point{-end.sign, 0}
+		}
 		s.pen(c, wide)
 		switch load {
 		case scf.Tension:
-			s.force(root, out, 1, c)
+			s.force(foot, way, 1, c)
 			s.loadLetter("P", letter.plus(0, -s.u(10)), c)
 		case scf.Torsion:
-			s.force(root, out, 2, c)
+			s.force(foot, way, 2, c)
 			s.loadLetter("T", letter.plus(0, -s.u(10)), c)
 		case scf.Bending:
-			s.moment(root.toward(out, s.u(4)), end.sign, part.Opposite, c)
+			s.moment(root.toward(out, s.u(4)), end.sign, part.Opposite != inward, c)
 			s.loadLetter("M", letter.plus(0, -s.u(28)), c)
 		}
 	}

@@ -26,6 +26,9 @@ type PictureOptions struct {
 	// the sum is a multiple of; "": nominal.
 	Terms     []Term
 	Reference string
+	// Rows are what the title block says of a sum, lines by row, the first line
+	// of a row in strong letters; nil: load, factor and verdict of the finding.
+	Rows [][]string
 
 	Edition string // the program with its version, for the title block; "": its name alone
 }
@@ -288,8 +291,12 @@ func (p *plate) draw() {
 	if p.part.Half {
 		p.symmetry(main, symmetryPast)
 	}
+	lift := 0
 	for _, t := range p.terms {
-		p.load(main, p.part, t.Load.Name, left, right, p.look.mark())
+		p.load(main, p.part, t, lift, left, right, p.look.mark())
+		if p.part.Half {
+			lift++ // all act along the axis
+		}
 	}
 	p.closeUp(close)
 }

@@ -65,6 +65,9 @@ func (p *plate) titleBlock(b box) {
 func (p *plate) rows(r *ruler, width float64) []row {
 	w := writer{r, width - 2*r.u(cellMargin)}
 	f, part := p.finding, p.part
+	if p.options.Rows != nil {
+		return p.answerRows(w)
+	}
 	return []row{
 		w.row(w.texts(titleText(part), strong, 2), w.texts(dimensionText(part), normal, 4)),
 		w.row(w.texts(p.loadText(), normal, 2), w.texts(nominalText(f.Load), normal, 2)),
@@ -73,6 +76,24 @@ func (p *plate) rows(r *ruler, width float64) []row {
 		w.row(w.texts(meshText(f), normal, 2), w.texts(peakText(f, part), normal, 2)),
 		w.row(w.foot(p.options.Edition)),
 	}
+}
+
+// answerRows are the rows of a sum whose meaning only the caller knows.
+func (p *plate) answerRows(w writer) []row {
+	const most = 4 // lines of one text
+	rows := []row{w.row(w.texts(titleText(p.part), strong, 2), w.texts(dimensionText(p.part), normal, most))}
+	for _, texts := range p.options.Rows {
+		var lines []line
+		for i, text := range texts {
+			letters := normal
+			if i == 0 {
+				letters = strong
+			}
+			lines = append(lines, w.texts(text, letters, most)...)
+		}
+		rows = append(rows, w.row(lines))
+	}
+	return append(rows, w.row(w.foot(p.options.Edition)))
 }
 
 // loadText says what acts: one load, or several with their shares.

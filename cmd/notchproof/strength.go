@@ -5,6 +5,7 @@ import (
 
 	"github.com/spf13/pflag"
 
+	"notchproof/render"
 	"notchproof/scf"
 	"notchproof/verify/quantity"
 	"notchproof/verify/specimen"
@@ -40,6 +41,9 @@ A part file may hold all of it: "forces" {"axial", "bending", "torque"},
 "thickness", "safety", and under "material" "yield", "tensile", "elongation",
 "brittle", "metal". What the flags say goes before what the file says. Claims of
 the file are carried through the rule by hand too.
+
+-o draws the governing ratio, von Mises over yield stress (or the largest
+principal stress over tensile strength), of all loads together.
 
 --json prints, with stresses in stressUnit: factors (nominal stress, computed
 and best handbook factor of every load), byHand, places (smallest safety first;
@@ -89,9 +93,17 @@ func runStrength(c *call) (int, error) {
 	q.targetFlag(c.flags)
 	q.partFlags(c.flags)
 	asJSON := c.flags.Bool("json", false, "print one JSON object instead of text")
+	picture := drawing{width: "1600"}
+	picture.o.Style = render.StyleWash
+	c.flags.StringVarP(&picture.file, "output", "o", "", "draw the stress of all loads over the strength to this PNG file")
 	args, err := c.parse()
 	if err != nil {
 		return 0, err
+	}
+	if picture.file != "" {
+		if err := picture.check(); err != nil {
+			return 0, err
+		}
 	}
 	question, err := s.ask(&q, args)
 	if err != nil {
@@ -100,6 +112,10 @@ func runStrength(c *call) (int, error) {
 	bar := c.progress()
 	question.Options.Progress = bar.tell
 	result, err := strength.Run(c.ctx, question)
+	if err == nil && picture.file != "" && result.Settled {
+		bar.tell("drawing")
+		err = picture.draw(utilisation(result, &picture))
+	}
 	bar.clear()
 	if err != nil {
 		return 0, err

@@ -10,6 +10,11 @@ import (
 	"strconv"
 	"strings"
 	"testing"
+
+	"notchproof/fem"
+	"notchproof/verify/quantity"
+	"notchproof/verify/specimen"
+	"notchproof/verify/strength"
 )
 
 const (
@@ -83,6 +88,7 @@ func TestStrengthBadInput(t *testing.T) {
 		{strongShaft + "--axial 12kN --yield 355MPa --slip-layer 5", `--slip-layer "5"`, "0.05mm"},
 		{strongShaft + "--axial 12kN --yield 355MPa --thickness 8mm", "a shaft has none", "leave"},
 		{strongShaft + "--axial 12kN --yield 355MPa --thickness 8furlong", `thickness "8furlong"`, "mm"},
+		{strongShaft + "--axial 12kN --yield 355MPa -o p.jpg", `"p.jpg"`, "format"},
 		{strongBar + "--torque 450N·m --thickness 8mm --yield 355MPa", "torque 450 N·m: a flat bar carries none", "shaft"},
 		{strongBar + "--axial 12kN --yield 355MPa", "no thickness of the bar", "--thickness 8mm"},
 		{"strength bar-shoulder D=60 d=40 r=5 --axial 12kN --thickness 8mm --yield 355MPa", "lengths of the part have no unit", "D=72mm"},
@@ -201,5 +207,53 @@ func TestStrengthJSON(t *testing.T) {
 	}
 	if len(got.Fluctuating) != 2 || got.Section.Elastic >= got.Section.Plastic {
 		t.Errorf("%+v", got)
+	}
+}
+
+// TestStrengthPicture: the picture is written, and what it draws at the surface of
+// the governing half is the equivalent stress over the strength.
+func TestStrengthPicture(t *testing.T) {
+	file := filepath.Join(t.TempDir(), "shaft.png")
+	status, _, errs := program(t, "strength ../../testdata/parts/thruster-shaft-step.json -o "+file)
+	if info, err := os.Stat(file); status != exitNotMet || errs != "" || err != nil || info.Size() < 10000 {
+		t.Fatalf("exit status %d, %s, %v", status, errs, err)
+	}
+	data, err := os.ReadFile("../../testdata/parts/thruster-shaft-step.json")
+	if err != nil {
+		t.Fatal(err)
+	}
+	part, err := specimen.ReadPart(data, "shaft.json", specimen.Over{})
+	if err != nil {
+		t.Fatal(err)
+	}
+	for _, row := range []struct {
+		axial, bending, torque float64
+	}{{-18e3, 9e5, 1.25e6}, {18e3, 9e5, 0}, {-18e3, -9e5, 1e5}, {0, 0, 1e6}} {
+		q := strength.Question{Part: part.Part, Axial: quantity.Newtons(row.axial), Bending: quantity.NewtonMillimetres(row.bending),
+			Torque: quantity.NewtonMillimetres(row.torque), Material: strength.Material{Yield: quantity.Megapascals(355)}}
+		r, err := strength.Run(t.Context(), q)
+		if err != nil {
+			t.Fatal(err)
+		}
+		var d drawing
+		utilisation(r, &d)
+		// On the drawn half the stresses of all terms add up without any angle.
+		of := func(p fem.SurfacePoint) float64 {
+			p.Tangential, p.Hoop, p.Shear = 0, 0, 0
+			for _, term := range d.o.Terms {
+				s := term.Solution.Surface(p.Edge, p.S)
+				p.Tangential += term.Scale * s.Tangential
+				p.Hoop += term.Scale * s.Hoop
+				p.Shear += term.Scale * s.Shear
+			}
+			if len(d.o.Terms) == 1 && row.torque != 0 {
+				return math.Abs(p.Shear) // which a picture of torsion alone shows
+			}
+			return p.VonMises()
+		}
+		got := of(d.o.Terms[0].Solution.Maxima(part.Part.Notch, of)[0])
+		if want := r.Notch().Equivalent / 355; math.Abs(got/want-1) > 0.02 { // a few degrees beside the governing angle
+			t.Errorf("%+v: drawn %g, governing %g", row, got, want)
+		}
 	}
 }

@@ -47,19 +47,8 @@ func (b *strengthSheet) line(format string, args ...any) { fmt.Fprintf(b, format
 const strengthDigits = 4
 
 func (b *strengthSheet) question() {
-	m := &b.Question.Material
 	b.line("  loads      %s", loadsText(&b.Question))
-	var words []string
-	if m.Yield.Given() {
-		words = append(words, "yield "+number.Quantity(m.Yield.Value(), 6, m.Yield.Unit()))
-	}
-	if m.Tensile.Given() {
-		words = append(words, "tensile "+number.Quantity(m.Tensile.Value(), 6, m.Tensile.Unit()))
-	}
-	if m.Elongation > 0 {
-		words = append(words, "elongation "+number.Compact(100*m.Elongation, 3)+" %")
-	}
-	b.line("  material   %s", strings.Join(words, ", "))
+	b.line("  material   %s", strings.Join(b.metal(), ", "))
 	b.line("             %s", b.criterion())
 }
 
@@ -82,6 +71,22 @@ func loadsText(q *strength.Question) string {
 		loads = append(loads, "thickness "+number.Length(q.Thickness.Value, q.Thickness.Unit))
 	}
 	return strings.Join(loads, ", ")
+}
+
+// metal lists what is known of the material.
+func (b *strengthSheet) metal() []string {
+	m := &b.Question.Material
+	var words []string
+	if m.Yield.Given() {
+		words = append(words, "yield "+number.Quantity(m.Yield.Value(), 6, m.Yield.Unit()))
+	}
+	if m.Tensile.Given() {
+		words = append(words, "tensile "+number.Quantity(m.Tensile.Value(), 6, m.Tensile.Unit()))
+	}
+	if m.Elongation > 0 {
+		words = append(words, "elongation "+number.Compact(100*m.Elongation, 3)+" %")
+	}
+	return words
 }
 
 func (b *strengthSheet) criterion() string {

@@ -43,6 +43,7 @@ type Field struct {
 	Load     *specimen.Load
 	Solution *fem.Solution
 	Nominal  float64 // MPa, signed
+	Turning  bool    // goes with cosθ around a shaft, or changes sign across a bar's line of symmetry
 }
 
 // A Place is one where the part may fail.

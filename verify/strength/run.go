@@ -43,7 +43,7 @@ func Run(ctx context.Context, q Question) (*Result, error) {
 		return nil, err
 	}
 	for i, c := range s.fine.parts {
-		r.Fields = append(r.Fields, Field{checked.Findings[i].Load, c.solution, c.nominal})
+		r.Fields = append(r.Fields, Field{checked.Findings[i].Load, c.solution, c.nominal, c.turning})
 	}
 	r.Places = q.places(s)
 	if r.Brittle {
