@@ -93,7 +93,8 @@ func runStrength(c *call) (int, error) {
 	q.targetFlag(c.flags)
 	q.partFlags(c.flags)
 	asJSON := c.flags.Bool("json", false, "print one JSON object instead of text")
-	picture := drawing{width: "1600"}
+	var picture drawing
+	picture.paper.flags(c.flags)
 	picture.o.Style = render.StyleWash
 	c.flags.StringVarP(&picture.file, "output", "o", "", "draw the stress of all loads over the strength to this PNG file")
 	args, err := c.parse()
