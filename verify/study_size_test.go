@@ -36,11 +36,11 @@ func stepped(t *testing.T, r float64) *specimen.Part {
 // A study of a sharp notch grows from rung to rung, at the end by the exponent
 // of the wedge: once the rungs are all that there is, the largest stress on a mesh
 // of size h goes like h^(λ−1). What the weaker modes add has not died out after
-// six halvings, which the tenth allows for; the exponent measured at the corner is
+// three halvings, which the tenth allows for; the exponent measured at the corner is
 // held to 2 %.
 func TestStudyOfSharpNotchDiverges(t *testing.T) {
 	for _, angle := range []float64{30, 60, 90, 120} {
-		s := studyOf(t, sharpNotch(t, "bar-edge-notch", angle), scf.Bending, StudyOptions{Rungs: 6})
+		s := studyOf(t, sharpNotch(t, "bar-edge-notch", angle), scf.Bending, StudyOptions{Rungs: 4})
 		lambda, _ := scf.Williams(angle)
 		want := lambda - 1
 		if s.Estimate.Status != extrapolate.Diverging || !math.IsNaN(s.Estimate.Value) || !s.Endless() {
@@ -51,7 +51,7 @@ func TestStudyOfSharpNotchDiverges(t *testing.T) {
 				t.Errorf("%g°: rung %d changes by %g", angle, i, r.Change)
 			}
 		}
-		if got := s.Rows[5].ObservedOrder; !(math.Abs(got-want) < 0.1*math.Abs(want)) {
+		if got := s.Rows[3].ObservedOrder; !(math.Abs(got-want) < 0.1*math.Abs(want)) {
 			t.Errorf("%g°: the rungs grow like size^%.4f, wedge %.4f", angle, got, want)
 		}
 		if got := s.Corners[0].Measured; !(math.Abs(got-want) < 0.02*math.Abs(want)) {
