@@ -137,8 +137,9 @@ func (l ladder) layout(wide float64) ladderLayout {
 		for _, r := range l.rungs {
 			labels, values = math.Max(labels, s.measure(r.label, small)), math.Max(values, s.measure(r.value, small))
 		}
-		o.left += math.Min(labels, 0.3*room) + 14
-		o.right -= math.Min(values, 0.3*room) + 14
+		// Type measures up to a hundredth more or less at another scale.
+		o.left += 1.02*math.Min(labels, 0.3*room) + 14
+		o.right -= 1.02*math.Min(values, 0.3*room) + 14
 	}
 	o.top = sheetMargin + titleHeight*float64(len(o.title)) + 8
 	o.bottom = o.top + o.pitch*float64(len(l.rungs)) + 10

@@ -46,7 +46,6 @@ func TestLadderShowsEveryFactor(t *testing.T) {
 		t.Fatal(err)
 	}
 	checkFigure(t, figure)
-	s, _ := figure.vector(FigureOptions{})
 	want := []string{number.Uncertain(1.8741, 0.0004), "order 3, 12\u202f345\u00a0unknowns", "order 4, 999\u00a0unknowns", "claim, sheet 12", "1.600  −14.6\u00a0%  disagrees"}
 	for _, h := range f.Handbook {
 		want = append(want, h.Value.ID)
@@ -54,9 +53,16 @@ func TestLadderShowsEveryFactor(t *testing.T) {
 	if len(want) < 7 {
 		t.Fatalf("only %d handbook factors", len(f.Handbook))
 	}
-	for _, text := range want {
-		if !letters(s, text) {
-			t.Errorf("%q is missing", text)
+	f.Claim.Claim.From = "sheet 12"
+	if figure, err = LadderFigure(f, part); err != nil {
+		t.Fatal(err)
+	}
+	for _, pixels := range []int{480, 1100, 1600, 1601, 3000} { // type is measured at one scale and set at another
+		s := figure.sheet(FigureOptions{Millimetres: 213.89, Pixels: pixels})
+		for _, text := range want {
+			if !letters(s, text) {
+				t.Errorf("%q is missing at %d pixels", text, pixels)
+			}
 		}
 	}
 }
