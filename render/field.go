@@ -169,6 +169,16 @@ func (f *field) at(c *cell, xi, eta float64) r2.Vec {
 // values reads the field at a point of a cell, and at its mirror image where
 // that is asked for. The tensors are the caller's, to work with.
 func (f *field) values(c *cell, xi, eta float64, both bool, up, down *tensor) (here, image float64) {
+	if len(f.strands) == 1 && !f.strands[0].twist { // one load: the common case
+		v := f.terms.at(c.stress[0], xi, eta)
+		*up = tensor{v[0], v[1], v[2], v[3]}
+		here = f.read.of(up)
+		if !both || !f.strands[0].odd {
+			return here, here
+		}
+		*down = tensor{-v[0], -v[1], -v[2], -v[3]}
+		return here, f.read.of(down)
+	}
 	*up, *down = tensor{}, tensor{}
 	odd := false
 	for i, s := range f.strands {

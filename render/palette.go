@@ -140,7 +140,7 @@ func thinned(colours []counted, order []int, apart int) (c choice, ok bool) {
 		if n > 0 && colours[i].smooth < surfacePixels {
 			break
 		}
-		if rgb := colours[i].rgb; n == 0 || c.gap(c.closest(rgb), rgb) > apart {
+		if rgb := colours[i].rgb; c.least(rgb) > apart {
 			if len(c) == surfaceShare {
 				return nil, false
 			}
@@ -150,23 +150,29 @@ func thinned(colours []counted, order []int, apart int) (c choice, ok bool) {
 	return c, true
 }
 
-// closest is the colour of the smallest gap.
-func (c choice) closest(rgb [3]uint8) uint8 {
-	best := 0
+// least is the smallest gap to any of the colours.
+func (c choice) least(rgb [3]uint8) int {
+	r, g, b := int(rgb[0]), int(rgb[1]), int(rgb[2])
+	least := math.MaxInt
 	for i := range c {
-		if c.gap(uint8(i), rgb) < c.gap(uint8(best), rgb) {
-			best = i
-		}
+		p := &c[i]
+		dr, dg, db := int(p[0])-r, int(p[1])-g, int(p[2])-b
+		least = min(least, max(dr, -dr, dg, -dg, db, -db))
 	}
-	return uint8(best)
+	return least
 }
 
 // spread adds, time and again, the colour that is farthest from all chosen.
 func (c choice) spread(colours []counted) choice {
 	gaps := make([]int, len(colours))
-	for i := range gaps {
-		gaps[i] = c.gap(c.closest(colours[i].rgb), colours[i].rgb)
-	}
+	const piece = 256
+	concurrently((len(gaps)+piece-1)/piece, func() func(i int) {
+		return func(i int) {
+			for k := i * piece; k < min((i+1)*piece, len(gaps)); k++ {
+				gaps[k] = c.least(colours[k].rgb)
+			}
+		}
+	})
 	for len(c) < mostColours {
 		far := 0
 		for i, g := range gaps {

@@ -77,7 +77,7 @@ func firstPrincipal(t *tensor) float64 {
 		return t.full().Principal()[0]
 	}
 	mean, half := (t[0]+t[1])/2, (t[0]-t[1])/2
-	return math.Max(mean+math.Sqrt(half*half+t[2]*t[2]), t[3])
+	return max(mean+math.Sqrt(half*half+t[2]*t[2]), t[3])
 }
 
 func vonMises(t *tensor) float64 {
