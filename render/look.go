@@ -29,20 +29,28 @@ type look interface {
 type wash struct {
 	ramp   *ramp
 	levels []float64
+	more   bool // values go on beyond the ramp's end
 }
 
 // levelCount is about how many contour lines a picture has.
 const levelCount = 10
 
 func newWash(low, high float64) *wash {
-	return &wash{newRamp(low, high), levelsBetween(low, high, levelCount)}
+	return &wash{ramp: newRamp(low, high), levels: levelsBetween(low, high, levelCount)}
 }
 
 func (w *wash) scale() scale {
 	return scale{
 		low: w.ramp.low, high: w.ramp.high, levels: w.levels,
-		paint: w.ramp.tone, over: w.ramp.over, text: levelText, end: rangeText,
+		paint: w.ramp.tone, over: w.ramp.over, text: levelText, end: w.end,
 	}
+}
+
+func (w *wash) end(v float64) string {
+	if w.more && v == w.ramp.high {
+		return "≥ " + rangeText(v)
+	}
+	return rangeText(v)
 }
 
 func (w *wash) painter(*raster) func(x, y int, v float64) color.RGBA {
@@ -58,7 +66,10 @@ func (w *wash) label(level float64) (string, color.Color) { return levelText(lev
 func (w *wash) title(string) string { return "" }
 
 func (w *wash) note(*plate) string {
-	if w.ramp.low < 0 {
+	switch {
+	case w.more:
+		return "higher values are those of the mesh alone"
+	case w.ramp.low < 0:
 		return "thick line: zero; dashed: below it"
 	}
 	return ""

@@ -171,6 +171,9 @@ func outside(b box, center point, radius float64) bool {
 func (p *plate) peakTexts() []string {
 	e := p.finding.Computed.Factor
 	texts := []string{number.Decimal(p.top, 3)}
+	if !e.Status.Settled() { // no number stands without a bound on its error
+		return []string{"no factor"}
+	}
 	if f, ok := p.look.(*fringes); ok {
 		texts[0] = "order " + f.order(p.top)
 	}

@@ -129,6 +129,10 @@ func (p *plate) read() error {
 	if p.plain() {
 		high = p.top
 	}
+	unbound := !p.settled() && high > unboundTop
+	if unbound {
+		p.top, high = unboundTop, unboundTop
+	}
 	if !(high > low) || math.IsInf(high, 0) || math.IsInf(low, 0) {
 		return &FieldError{name, "the stress is the same everywhere"}
 	}
@@ -139,9 +143,19 @@ func (p *plate) read() error {
 	if !read.signed {
 		low = 0
 	}
-	p.look = newWash(math.Min(low, 0), math.Max(high, 0))
+	w := newWash(math.Min(low, 0), math.Max(high, 0))
+	w.more = unbound
+	p.look = w
 	return nil
 }
+
+// settled tells that the ladder gave a factor.
+func (p *plate) settled() bool { return p.finding.Computed.Factor.Status.Settled() }
+
+// unboundTop is the dark end of the ramp where there is no factor, as at a sharp
+// corner: what is above has the same tone, for its value is that of the mesh
+// alone.
+const unboundTop = 3
 
 // survey reads the field along the notch. Of one load the peak is where the
 // factor sits, of several where the field is highest.
@@ -162,6 +176,9 @@ func (p *plate) survey() {
 			p.top = n.Value
 		}
 		p.quill = math.Max(p.quill, math.Abs(n.Value))
+	}
+	if !p.settled() {
+		p.quill = math.Min(p.quill, unboundTop)
 	}
 }
 
@@ -383,7 +400,13 @@ func (p *plate) along(step, reach float64) []needle {
 	if on == nil {
 		return nil
 	}
-	return on.needles(at, step, reach)
+	list := on.needles(at, step, reach)
+	if !p.settled() {
+		for i := range list {
+			list[i].Value = math.Min(list[i].Value, unboundTop)
+		}
+	}
+	return list
 }
 
 func multiply(a, b *image.Alpha) {

@@ -63,24 +63,17 @@ func largest(part *specimen.Part) []placement {
 			return nil
 		}
 	}
+	// Of the sides that reach as high, across the middle of the longest.
+	x, longest := 0.0, -1.0
 	for _, s := range part.Region.Sides() {
 		b := s.Curve.Bounds()
-		if b.Max.Y < e.high*(1-1e-12) {
-			continue
+		if long := b.Max.X - b.Min.X; b.Max.Y >= e.high*(1-1e-12) && long > longest {
+			x, longest = (b.Min.X+b.Max.X)/2, long
 		}
-		x := (b.Min.X + b.Max.X) / 2
-		if !part.Half {
-			// The lowest place of a whole bar is elsewhere: from the highest place
-			// down to its level.
-			return []placement{{Kind: acrossInside, At: func(g geometry) (a, b r2.Vec) {
-				return r2.Vec{X: x, Y: e.high}, r2.Vec{X: x, Y: e.low}
-			}}}
-		}
-		return []placement{{Kind: acrossInside, At: func(g geometry) (a, b r2.Vec) {
-			return r2.Vec{X: x, Y: e.high}, r2.Vec{X: x, Y: -e.high}
-		}}}
 	}
-	return nil
+	return []placement{{Kind: acrossInside, At: func(geometry) (a, b r2.Vec) {
+		return r2.Vec{X: x, Y: e.high}, r2.Vec{X: x, Y: e.low}
+	}}}
 }
 
 // holes points at round holes.

@@ -198,7 +198,7 @@ func (w writer) comparisons(f *verify.Finding) []line {
 		}
 	}
 	numbers := wide[1] + wide[2] + wide[3] + 2*gap
-	beside := numbers+gap+min(wide[0], w.u(230)) <= w.width
+	beside := numbers+gap+min(wide[0], w.u(190)) <= w.width
 	left := w.width - numbers // where the columns begin
 	var lines []line
 	for _, c := range texts {
