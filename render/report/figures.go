@@ -15,13 +15,13 @@ import (
 	"notchproof/verify"
 )
 
-// stressWidth is the width of a stress picture in pixels: 225 to the inch over
-// the 180 mm of a printed page. Line drawings are vectors, laid out for the width
-// that they have on paper.
+// stressWidth is the width of a stress picture in pixels: 280 to the inch over
+// the 144 mm that it has on a printed page. Line drawings are vectors, laid out
+// for about the width that they have there.
 const (
 	stressWidth = 1600
-	sketchWide  = 122 // mm
-	ladderWide  = 150
+	sketchWide  = 112 // mm
+	ladderWide  = 150 // mm: below, its two diagrams stand one above the other
 )
 
 // A drawing is a figure that is still to be drawn.
@@ -87,7 +87,7 @@ func drawingsOf(c *Finding, f *verify.Finding, r *verify.Result) []*drawing {
 	if study, ok := studyOf(c); ok {
 		list = append(list, &drawing{
 			Figure: Figure{Load: c.Load, Kind: "ladder",
-				Caption: "The ladder in " + c.Load + ": the factor with the band of its uncertainty, and what is known of its error, over the number of unknowns."},
+				Caption: "The ladder in " + c.Load + ": the factor with its bar, and the signs of its error, over the unknowns."},
 			draw: func(d *drawing) error {
 				figure, err := render.StudyFigure(study)
 				if err != nil {
@@ -100,7 +100,7 @@ func drawingsOf(c *Finding, f *verify.Finding, r *verify.Result) []*drawing {
 	if c.Computed.Settled {
 		list = append(list, &drawing{
 			Figure: Figure{Load: c.Load, Kind: "stress", Alt: stressAlt(c),
-				Caption: "Stresses in " + c.Load + " as multiples of the nominal stress: contour lines on the part, quills along the notch, the root magnified."},
+				Caption: "Stresses in " + c.Load + " ÷ nominal stress: contours, quills along the notch, the root magnified."},
 			draw: func(d *drawing) error {
 				im, err := render.Picture(f, r.Part, render.PictureOptions{Width: stressWidth})
 				if err != nil {
