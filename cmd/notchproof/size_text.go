@@ -108,6 +108,7 @@ func (s *sizeQuestion) answerText(b *strings.Builder, st style) {
 		s.roundedText(b)
 	case sizing.Throughout:
 		fmt.Fprintf(b, "  answer     %s\n             at %s = %s %s\n", st.bold("every "+s.dimension+" that was looked at meets it"), s.dimension, s.length(a.At.At), s.at(a.At.Reading))
+		s.highestText(b)
 	case sizing.Beyond:
 		fmt.Fprintf(b, "  answer     %s\n             the best is %s = %s with %s\n", st.bad("no "+s.dimension+" meets it"), s.dimension, s.length(a.At.At), s.at(a.At.Reading))
 	default:
@@ -115,6 +116,20 @@ func (s *sizeQuestion) answerText(b *strings.Builder, st style) {
 	}
 	if a.Outcome != sizing.Undecided && a.At.Why != "" {
 		fmt.Fprintf(b, "  %s %s\n", st.weak("warning"), oneLine(a.At.Why))
+	}
+}
+
+// highestText says where the measure comes nearest to the limit, if a full
+// ladder has told so.
+func (s *sizeQuestion) highestText(b *strings.Builder) {
+	var top *sizing.Sample
+	for i := range s.answer.Scanned {
+		if x := &s.answer.Scanned[i]; !x.Rough && (top == nil || x.Value > top.Value) {
+			top = x
+		}
+	}
+	if top != nil {
+		fmt.Fprintf(b, "             highest near %s = %s: %s\n", s.dimension, s.length(top.At), s.at(top.Reading))
 	}
 }
 

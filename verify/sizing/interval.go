@@ -142,7 +142,7 @@ const (
 	almost    = 1e-3 // of the interval, left out before an end that another dimension sets
 )
 
-// grid is a coarse row of values that covers an interval: about one a decade
+// grid is a coarse row of values that covers an interval: about two a decade
 // and a few towards an upper end that another dimension sets, where a net size
 // closes in on the gross one; evenly spaced where zero or both signs are allowed.
 func (q *Question) grid(kind scf.Dimension, in Interval) []float64 {
@@ -155,7 +155,7 @@ func (q *Question) grid(kind scf.Dimension, in Interval) []float64 {
 	size := q.size()
 	from := math.Min(math.Max(in.From, leastSize*size), in.To)
 	to := math.Max(math.Min(in.To, mostSize*size), from)
-	n := max(2, int(math.Ceil(math.Log10(to/from)))+1)
+	n := max(2, int(math.Ceil(2*math.Log10(to/from)))+1)
 	var xs []float64
 	for i := range n {
 		xs = append(xs, from*math.Pow(to/from, float64(i)/float64(n-1)))

@@ -50,6 +50,9 @@ func TestSweepInverts(t *testing.T) {
 			delete(q.Dims, name)
 		}
 		a := find(t, q)
+		if a.Outcome == sizing.Throughout && highest(a).Value+highest(a).Uncertainty >= q.Limit {
+			continue // the part lies at the top of the curve, within the bar
+		}
 		if a.Outcome != sizing.Met || math.Abs(a.At.Factor-direct.Factor) > a.At.FactorBar {
 			t.Errorf("%s %v %s, %s ≤ %g: %v at %g with %g ± %g: %s", family.Name, dims, load, name, q.Limit, a.Outcome, a.At.At, a.At.Factor, a.At.FactorBar, a.At.Why)
 			continue
@@ -68,6 +71,17 @@ func TestSweepInverts(t *testing.T) {
 	if far > trials/2 {
 		t.Errorf("%d of %d answers are other values than those asked for", far, trials)
 	}
+}
+
+// highest is the highest sample of a scan.
+func highest(a *sizing.Answer) sizing.Sample {
+	top := a.Scanned[0]
+	for _, s := range a.Scanned {
+		if s.Value > top.Value {
+			top = s
+		}
+	}
+	return top
 }
 
 // randomPart is a part of ordinary proportions.
