@@ -6,9 +6,8 @@
 // stress is one, so that every stress read from it is a ratio to the nominal
 // stress; verdicts, factors and their uncertainties come from package verify.
 //
-// Lengths on a sheet are given in units of 1/1600 of its width:
-// on the default sheet of 1600 pixels a unit is a pixel, on any other all of
-// it, lettering included, scales along. The paper of a picture has the
-// proportions 1 : √2. Line drawings (Figure) follow the width of the paper that
-// they are meant for and can be written as SVG too.
+// Lengths on a sheet are given in units of about an eighth of a millimetre, so
+// that the smallest lettering has capitals of 1.6 mm. A sheet has at most 1600
+// of them across; narrower paper has fewer, and a layout that follows: letters
+// keep their height. Line drawings (Figure) can be written as SVG too.
 package render

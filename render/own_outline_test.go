@@ -17,8 +17,8 @@ func TestOwnOutlines(t *testing.T) {
 		load       scf.Load
 		sizes      []string
 	}{
-		{"hollow shaft", "M -90 6 L 80 6 L 80 12 L 3 12 A 3 3 0 0 0 0 15 L 0 20 L -90 20 Z", scf.Shaft, scf.Torsion, []string{"Ø40", "Ø24"}},
-		{"bar with a hole", "M -90 -15 L 90 -15 L 90 15 L -90 15 Z M 5 2 A 5 5 0 0 0 -5 2 A 5 5 0 0 0 5 2 Z", scf.Bar, scf.Tension, []string{"30", "30"}},
+		{"hollow shaft", "M -90 6 L 80 6 L 80 12 L 3 12 A 3 3 0 0 0 0 15 L 0 20 L -90 20 Z", scf.Shaft, scf.Torsion, []string{"Ø40", "Ø24", "Ø12", "R3"}},
+		{"bar with a hole", "M -90 -15 L 90 -15 L 90 15 L -90 15 Z M 5 2 A 5 5 0 0 0 -5 2 A 5 5 0 0 0 5 2 Z", scf.Bar, scf.Tension, []string{"30", "30", "Ø10"}},
 	} {
 		t.Run(c.name, func(t *testing.T) {
 			loops, err := outline.ParsePath(c.path)
