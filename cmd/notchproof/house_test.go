@@ -34,10 +34,11 @@ var allowed = map[string]string{
 	"render":             "mesh mesh/outline mesh/lagrange fem scf verify verify/specimen render/number",
 	"verify/sizing":      "mesh/outline scf verify verify/specimen verify/strength",
 	"verify/tolerance":   "scf verify verify/specimen",
+	"verify/chart":       "scf verify verify/specimen",
 	"verify/evidence":    "mesh mesh/outline fem scf verify verify/specimen verify/extrapolate",
 	"render/export":      "mesh mesh/outline fem verify verify/specimen",
 	"render/report":      "scf verify verify/specimen verify/usermesh render render/number",
-	"cmd/notchproof":     "render/export render/report scf verify verify/sizing verify/specimen verify/quantity verify/strength render render/number verify/usermesh verify/tolerance verify/evidence",
+	"cmd/notchproof":     "render/export render/report scf verify verify/sizing verify/specimen verify/quantity verify/strength render render/number verify/usermesh verify/tolerance verify/evidence verify/chart",
 }
 
 // TestImportsFollowTheFloorPlan names the file and the arrow that broke it.

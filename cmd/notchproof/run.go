@@ -33,7 +33,7 @@ type command struct {
 func commands() []*command {
 	return []*command{
 		checkCommand(), studyCommand(), pictureCommand(), plotCommand(), reportCommand(), partsCommand(),
-		strengthCommand(), sizeCommand(), toleranceCommand(), selfcheckCommand(),
+		strengthCommand(), sizeCommand(), toleranceCommand(), chartCommand(), selfcheckCommand(),
 	}
 }
 

@@ -1,0 +1,125 @@
+package main
+
+import (
+	"fmt"
+	"math"
+	"strings"
+
+	"notchproof/render"
+	"notchproof/render/number"
+	"notchproof/verify/chart"
+)
+
+// plot lays the chart out: the best published fit as bands, then the curves.
+func (s *chartQuestion) plot() render.Plot {
+	q := s.table.Question
+	d := render.Diagram{
+		X: render.Axis{Label: q.Along.String(), Unit: q.Along.Unit, Log: q.Along.Log},
+		Y: render.Axis{Label: q.Symbol() + ", on the net section"},
+	}
+	book := s.book()
+	for k := range s.table.Curves() {
+		if book >= 0 {
+			d.Curves = append(d.Curves, bands(s.table.Curve(k), book, s.table.Books[book].Accuracy)...)
+		}
+	}
+	for k := range s.table.Curves() {
+		d.Curves = append(d.Curves, s.curve(k)...)
+	}
+	return render.Plot{Title: s.heading(), Note: s.plotNote(book), Diagrams: []render.Diagram{d}}
+}
+
+// book is the fit that covers most points, the better of equals; −1: none.
+func (s *chartQuestion) book() int {
+	best, most := -1, 0
+	for b := range s.table.Books {
+		count := 0
+		for _, p := range s.table.Points {
+			if !math.IsNaN(p.Handbook[b]) {
+				count++
+			}
+		}
+		if count > most {
+			best, most = b, count
+		}
+	}
+	return best
+}
+
+// bands are the stretches of a curve that a fit covers.
+func bands(points []chart.Point, book int, accuracy float64) (list []render.Curve) {
+	var run []render.CurvePoint
+	for _, p := range points {
+		v := p.Handbook[book]
+		if math.IsNaN(v) {
+			list, run = bandOf(list, run), nil
+			continue
+		}
+		run = append(run, render.CurvePoint{X: p.X, Y: v, Bar: accuracy * v})
+	}
+	return bandOf(list, run)
+}
+
+func bandOf(list []render.Curve, run []render.CurvePoint) []render.Curve {
+	if len(run) < 2 {
+		return list
+	}
+	return append(list, render.Curve{Points: run, Line: render.NoLine, Band: true})
+}
+
+// curve draws a smooth line through the settled points of a curve, in pieces
+// where points are missing, and the points themselves.
+func (s *chartQuestion) curve(k int) (list []render.Curve) {
+	q, points := s.table.Question, s.table.Curve(k)
+	pieces := s.table.Smooth(k)
+	for i, piece := range pieces {
+		c := render.Curve{Line: render.Solid}
+		for _, p := range piece {
+			c.Points = append(c.Points, render.CurvePoint{X: p.X, Y: p.Factor})
+		}
+		if i == len(pieces)-1 && q.Curves != nil {
+			c.Label = q.Place(math.NaN(), points[0].Y)
+			_, c.Label, _ = strings.Cut(c.Label, ", ")
+		}
+		list = append(list, c)
+	}
+	marks := render.Curve{Line: render.NoLine, Marked: true}
+	for _, p := range points {
+		if p.Status == chart.Settled {
+			marks.Points = append(marks.Points, render.CurvePoint{X: p.X, Y: p.Factor, Bar: p.Uncertainty})
+		}
+	}
+	return append(list, marks)
+}
+
+func (s *chartQuestion) heading() string {
+	q := s.table.Question
+	return fmt.Sprintf("%s: %s, %s", q.Family.Name, q.Family.Title, q.Load)
+}
+
+// plotNote says what the chart is of, and how good it is.
+func (s *chartQuestion) plotNote(book int) string {
+	q := s.table.Question
+	nominal, _ := s.nominal()
+	words := []string{fmt.Sprintf("Nominal stress %s (%s)", nominal.Formula, nominal.Section)}
+	words = append(words, s.fixed()...)
+	widest := 0.0
+	for _, p := range s.table.Points {
+		if p.Status == chart.Settled {
+			widest = math.Max(widest, p.Uncertainty/p.Factor)
+		}
+	}
+	words = append(words, fmt.Sprintf("%d points computed, each within ± %s", s.table.Count(chart.Settled), percentUp(widest)))
+	if n := s.table.Count(chart.Undecided); n > 0 {
+		words = append(words, fmt.Sprintf("%d undecided and left out", n))
+	}
+	note := strings.Join(words, "; ")
+	if book >= 0 {
+		b := s.table.Books[book]
+		note += fmt.Sprintf(". Bands: %s ± %s, in its range", b.ID, number.Percent(b.Accuracy, 0))
+	}
+	if s.fit != nil {
+		note += fmt.Sprintf(". Formula, within %s over the range of the points: %s", percentUp(s.fit.Error), strings.Join(q.Formula(s.fit), ", "))
+	}
+	return note
+}

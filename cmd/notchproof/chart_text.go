@@ -1,0 +1,171 @@
+package main
+
+import (
+	"fmt"
+	"io"
+	"math"
+	"strings"
+	"unicode/utf8"
+
+	"notchproof/render/number"
+	"notchproof/scf"
+	"notchproof/verify/chart"
+)
+
+// nominal is the nominal stress of the first shape that can be drawn: its
+// formula is the same for all.
+func (s *chartQuestion) nominal() (scf.Nominal, bool) { return s.table.Nominal() }
+
+// fixed says what is the same all over the chart.
+func (s *chartQuestion) fixed() (words []string) {
+	q := s.table.Question
+	for _, g := range q.Given {
+		unit := ""
+		if g.Over == "" {
+			unit = unitOf(q.Family, g.Name, q.Unit)
+		}
+		if unit == "°" {
+			words = append(words, g.String()+" = "+number.Compact(g.Value, 6)+unit)
+		} else {
+			words = append(words, g.String()+" = "+number.Length(g.Value, unit))
+		}
+	}
+	return append(words, "ν = "+number.Compact(q.Options.Nu, 4))
+}
+
+func (s *chartQuestion) writeText(w io.Writer, st style) error {
+	var b strings.Builder
+	q := s.table.Question
+	if s.title != "" {
+		fmt.Fprintf(&b, "%s\n", oneLine(s.title))
+	}
+	fmt.Fprintf(&b, "%s  %s\n", st.bold(q.Family.Name), strings.Join(s.fixed(), ", "))
+	nominal, _ := s.nominal()
+	fmt.Fprintf(&b, "\n%s, %s over %s, nominal stress %s (%s)\n", st.bold(string(q.Load)), q.Symbol(), q.Along.Variable, nominal.Formula, nominal.Section)
+	s.tableText(&b)
+	s.booksText(&b)
+	s.fitText(&b, st)
+	s.leftOutText(&b, st)
+	for _, note := range s.notes {
+		fmt.Fprintf(&b, "  %s\n", note)
+	}
+	for _, name := range s.outputs {
+		fmt.Fprintf(&b, "  written to %s\n", oneLine(name))
+	}
+	b.WriteString("\n" + caution)
+	_, err := io.WriteString(w, b.String())
+	return err
+}
+
+// tableText is the grid: a line for each place along, a column for each curve.
+func (s *chartQuestion) tableText(b *strings.Builder) {
+	q := s.table.Question
+	head := []string{q.Along.String()}
+	if q.Along.Unit != "" {
+		head[0] += " (" + q.Along.Unit + ")"
+	}
+	rows := [][]string{nil}
+	for i, x := range q.Along.Values {
+		row := []string{number.Compact(x, 6)}
+		for k := range s.table.Curves() {
+			row = append(row, cell(s.table.Curve(k)[i]))
+		}
+		rows = append(rows, row)
+	}
+	for k := range s.table.Curves() {
+		label := q.Symbol()
+		if q.Curves != nil {
+			label = strings.TrimPrefix(q.Place(0, s.table.Curve(k)[0].Y), q.Place(0, 0)[:strings.Index(q.Place(0, 0), ", ")+2])
+		}
+		head = append(head, label)
+	}
+	rows[0] = head
+	columns(b, rows)
+}
+
+// cell is a point in the grid.
+func cell(p chart.Point) string {
+	switch p.Status {
+	case chart.Settled:
+		return number.Uncertain(p.Factor, p.Uncertainty)
+	case chart.NotDrawn:
+		return "not drawn"
+	}
+	return p.Status.String()
+}
+
+// columns writes rows with their columns below each other.
+func columns(b *strings.Builder, rows [][]string) {
+	width := make([]int, len(rows[0]))
+	for _, row := range rows {
+		for k, text := range row {
+			width[k] = max(width[k], utf8.RuneCountInString(text))
+		}
+	}
+	for _, row := range rows {
+		line := " "
+		for k, text := range row {
+			line += " " + text + strings.Repeat(" ", width[k]-utf8.RuneCountInString(text)+1)
+		}
+		b.WriteString(strings.TrimRight(line, " ") + "\n")
+	}
+}
+
+// booksText says how far the published fits are off.
+func (s *chartQuestion) booksText(b *strings.Builder) {
+	for k, book := range s.table.Books {
+		low, high, n := math.Inf(1), math.Inf(-1), 0
+		for _, p := range s.table.Points {
+			if v := p.Handbook[k]; p.Status == chart.Settled && !math.IsNaN(v) {
+				off := v/p.Factor - 1
+				low, high, n = math.Min(low, off), math.Max(high, off), n+1
+			}
+		}
+		if n > 0 {
+			fmt.Fprintf(b, "  handbook   %s … %s over %s in its range  %s\n", number.SignedPercent(low, 1), number.SignedPercent(high, 1), number.CountOf(n, "point", "points"), book.ID)
+		}
+	}
+}
+
+func (s *chartQuestion) fitText(b *strings.Builder, st style) {
+	if s.fit == nil {
+		if !s.bare && s.share == "" {
+			fmt.Fprintf(b, "  formula    none: too few settled points\n")
+		}
+		return
+	}
+	q, f := s.table.Question, s.fit
+	fmt.Fprintf(b, "\n%s, %s\n", st.bold("formula"), q.Range(f))
+	for _, line := range q.Formula(f) {
+		fmt.Fprintf(b, "  %s\n", line)
+	}
+	fmt.Fprintf(b, "  within %s of what is computed, bars included: %d points that it was fitted to, %d others\n", percentUp(f.Error), f.Fitted, f.Between)
+	fmt.Fprintf(b, "  largest at %s; on the curves of the chart %s\n", q.Place(f.Worst.X, f.Worst.Y), percentUp(f.OnCurves))
+	b.WriteString("  it says nothing outside this range, nor where the chart has no points\n\n")
+}
+
+// percentUp writes an error that is rounded up already, or up to one digit.
+func percentUp(x float64) string {
+	return number.Compact(100*chart.RoundUp(x), 2) + "\u00a0%"
+}
+
+// leftOutText names the points that are not on the chart.
+func (s *chartQuestion) leftOutText(b *strings.Builder, st style) {
+	q := s.table.Question
+	for _, p := range s.table.Points {
+		switch p.Status {
+		case chart.NotDrawn:
+			fmt.Fprintf(b, "  not drawn  %s: %s\n", q.Place(p.X, p.Y), oneLine(p.Why))
+		case chart.Undecided:
+			fmt.Fprintf(b, "  %s  %s: %s\n", st.weak("undecided"), q.Place(p.X, p.Y), oneLine(p.Why))
+		}
+	}
+	if s.share != "" {
+		return
+	}
+	for _, p := range s.table.Absent() {
+		if p.Status == chart.Missing {
+			fmt.Fprintf(b, "  %s    %s\n", st.weak("missing"), q.Place(p.X, p.Y))
+		}
+	}
+}

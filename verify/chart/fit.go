@@ -1,0 +1,235 @@
+package chart
+
+import (
+	"math"
+	"slices"
+
+	"gonum.org/v1/gonum/mat"
+)
+
+// A Fit is a formula for the factor over the range of a chart, and how far it is
+// from computed factors.
+type Fit struct {
+	Along, Across extent // Across: of the curves
+	Terms         int
+	// Error is the largest share by which the formula may be off a computed
+	// factor, its bar included, rounded up to the digits that are shown; at Worst.
+	// It is measured at the points that the formula was fitted to and at others
+	// between them that were solved for that alone.
+	Error           float64
+	Worst           Point
+	Fitted, Between int     // how many points of each kind
+	OnCurves        float64 // the same as Error on the curves that are drawn
+
+	form         form
+	across       bool // there are several curves
+	u, v         scaling
+	coefficients []float64
+	digits       int
+}
+
+// A datum is a point that a formula is fitted to.
+type datum struct{ x, y, k, weight float64 }
+
+// fit chooses the form of least effort that is as good as any, and fits it. nil:
+// there are too few points for any form.
+func (q *Question) fit(points []Point) *Fit {
+	data, xs, ys := q.data(points)
+	if len(data) < 4 || len(xs) < 3 {
+		return nil
+	}
+	f := &Fit{Along: nowhere(), Across: nowhere(), across: len(ys) > 1, Fitted: len(data)}
+	least := math.Inf(1)
+	for _, d := range data {
+		f.Along, f.Across, least = f.Along.with(d.x), f.Across.with(d.y), math.Min(least, d.k)
+	}
+	p, across := min(highestAlong, len(xs)-2), min(highestAcross, len(ys)-1)
+	var tried []trial
+	for _, form := range forms(f.Along, f.Across, least, p, across) {
+		if t, ok := f.try(form, data); ok {
+			tried = append(tried, t)
+		}
+	}
+	if len(tried) == 0 {
+		return nil
+	}
+	best := choose(tried)
+	f.form, f.Terms = best.form, len(best.coefficients)
+	f.u, f.v = f.scalings(best.form)
+	f.round(best.coefficients, data)
+	return f
+}
+
+// data takes the settled points. Errors count relative to the factor; a point is
+// worth less where its own bar is wider than what is asked for.
+func (q *Question) data(points []Point) (data []datum, xs, ys []float64) {
+	for _, p := range points {
+		if p.Status != Settled {
+			continue
+		}
+		y := p.Y
+		if q.Curves == nil {
+			y = 0
+		}
+		data = append(data, datum{p.X, y, p.Factor, 1 / math.Hypot(q.Target*p.Factor, p.Uncertainty)})
+		xs, ys = append(xs, p.X), append(ys, y)
+	}
+	slices.Sort(xs)
+	slices.Sort(ys)
+	return data, slices.Compact(xs), slices.Compact(ys)
+}
+
+// A trial is a form fitted, and how well it stands cross-validation.
+type trial struct {
+	form         form
+	coefficients []float64
+	left         float64 // largest relative error at a point left out of the fit
+}
+
+// as good as the best is a trial within this factor of its error, or within
+// half a hundredth: a chart is read to two or three figures (common practice).
+const (
+	asGood = 1.25
+	enough = 0.0025
+)
+
+// choose takes the fewest terms among the trials that are as good as the best,
+// and of equals the better.
+func choose(tried []trial) trial {
+	least := math.Inf(1)
+	for _, t := range tried {
+		least = math.Min(least, t.left)
+	}
+	limit := math.Max(asGood*least, enough)
+	var best *trial
+	for i := range tried {
+		t := &tried[i]
+		if t.left > limit {
+			continue
+		}
+		if best == nil || len(t.coefficients) < len(best.coefficients) || len(t.coefficients) == len(best.coefficients) && t.left < best.left {
+			best = t
+		}
+	}
+	return *best
+}
+
+func (f *Fit) scalings(form form) (u, v scaling) {
+	u = form.x.scaling(f.Along)
+	if f.across {
+		v = form.y.scaling(f.Across)
+	} else {
+		v = scaling{0, 1}
+	}
+	return u, v
+}
+
+// try solves the weighted least squares by QR, and leaves out each point in turn:
+// its residual then is the one of the full fit over 1 − h, h being its diagonal
+// element of the hat matrix (D. M. Allen, Technometrics 16 (1974) 125, from
+// memory), so that no second fit is needed.
+func (f *Fit) try(form form, data []datum) (trial, bool) {
+	terms := form.terms()
+	n, m := len(data), len(terms)
+	if n < m+2 {
+		return trial{}, false
+	}
+	u, v := f.scalings(form)
+	a, b := mat.NewDense(n, m, nil), mat.NewVecDense(n, nil)
+	weights := make([]float64, n)
+	for i, d := range data {
+		weights[i] = d.weight / math.Abs(form.outer.slope(d.k))
+		x, y := u.of(form.x.of(d.x)), v.of(form.y.of(d.y))
+		for k, w := range terms {
+			a.Set(i, k, weights[i]*w.of(x, y))
+		}
+		b.SetVec(i, weights[i]*form.outer.back(d.k))
+	}
+	var qr mat.QR
+	qr.Factorize(a)
+	var c mat.VecDense
+	if err := qr.SolveVecTo(&c, false, b); err != nil {
+		return trial{}, false
+	}
+	var r mat.Dense
+	qr.RTo(&r)
+	left := 0.0
+	for i, d := range data {
+		residual := b.AtVec(i) - mat.Dot(a.RowView(i), &c)
+		rest := 1 - leverage(&r, a.RawRowView(i))
+		if rest < 1e-9 {
+			return trial{}, false // this point alone decides a coefficient
+		}
+		k := form.outer.of(form.outer.back(d.k) - residual/rest/weights[i])
+		left = math.Max(left, math.Abs(k-d.k)/d.k)
+	}
+	return trial{form, c.RawVector().Data, left}, !math.IsNaN(left) && !math.IsInf(left, 0)
+}
+
+// leverage is the diagonal element of the hat matrix of a row: the square of
+// what solves Rᵀ z = row.
+func leverage(r *mat.Dense, row []float64) float64 {
+	z, sum := make([]float64, len(row)), 0.0
+	for k := range row {
+		v := row[k]
+		for l := range k {
+			v -= float64(r.At(l, k) * z[l])
+		}
+		z[k] = v / r.At(k, k)
+		sum += float64(z[k] * z[k])
+	}
+	return sum
+}
+
+// roundingShare of the factor is what the rounding of coefficients may change.
+const roundingShare = 1e-5
+
+// round takes the fewest digits that keep the factor: what is printed is what is
+// used.
+func (f *Fit) round(c []float64, data []datum) {
+	whole := make([]float64, len(data))
+	f.coefficients = c
+	for i, d := range data {
+		whole[i] = f.Factor(d.x, d.y)
+	}
+	for f.digits = 3; f.digits < 16; f.digits++ {
+		f.coefficients = make([]float64, len(c))
+		for k := range c {
+			f.coefficients[k] = roundedTo(c[k], f.digits)
+		}
+		worst := 0.0
+		for i, d := range data {
+			worst = math.Max(worst, math.Abs(f.Factor(d.x, d.y)/whole[i]-1))
+		}
+		if worst <= roundingShare {
+			return
+		}
+	}
+}
+
+// Factor is the value of the formula. It means nothing outside the range.
+func (f *Fit) Factor(x, y float64) float64 {
+	u, v := f.u.of(f.form.x.of(x)), 0.0
+	if f.across {
+		v = f.v.of(f.form.y.of(y))
+	}
+	rows := f.rows()
+	p := 0.0
+	for j := len(rows) - 1; j >= 0; j-- {
+		row := 0.0
+		for i := len(rows[j]) - 1; i >= 0; i-- {
+			row = float64(row*u) + rows[j][i]
+		}
+		p = float64(p*v) + row
+	}
+	return f.form.outer.of(p)
+}
+
+// rows are the coefficients by powers of v, in each by powers of u.
+func (f *Fit) rows() [][]float64 {
+	rows := make([][]float64, f.form.q+1)
+	for k, w := range f.form.terms() {
+		rows[w.j] = append(rows[w.j], f.coefficients[k])
+	}
+	return rows
+}
