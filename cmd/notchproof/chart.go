@@ -59,6 +59,7 @@ type chartQuestion struct {
 	csv           string
 	share         string
 	join          bool
+	paper         paper
 	bare          bool
 	asJSON        bool
 
@@ -75,6 +76,7 @@ func runChart(c *call) (int, error) {
 	f.StringVar(&s.along, "along", "", "what runs along the axis, as in r/d=0.02:0.3")
 	f.StringVar(&s.curves, "curves", "", "what the curves are for, as in D/d=1.1,1.5,2")
 	f.StringArrayVarP(&s.outputs, "output", "o", nil, "a .png, .svg or .csv file to write; may be repeated")
+	s.paper.flags(f)
 	f.StringVar(&s.csv, "csv", "", "the table to keep, and to go on with")
 	f.StringVar(&s.share, "share", "", "compute one share of the points only, as in 2/4")
 	f.BoolVar(&s.join, "join", false, "join the tables that are named")
@@ -135,7 +137,7 @@ func (s *chartQuestion) checkFiles() error {
 	if tables > 1 {
 		return &inputError{text: "more than one table", hint: "name one .csv file"}
 	}
-	return nil
+	return s.paper.find()
 }
 
 func isTable(name string) bool { return strings.EqualFold(filepath.Ext(name), ".csv") }
@@ -330,7 +332,8 @@ func (s *chartQuestion) write(c *call) error {
 		if err != nil {
 			return &inputError{text: "nothing to draw: no point is settled", hint: "the table says why"}
 		}
-		if err := writeFigure(name, figure, render.FigureOptions{}); err != nil {
+		out := figureFile{s.paper, name}
+		if err := out.write(figure); err != nil {
 			return err
 		}
 	}

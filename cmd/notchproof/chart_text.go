@@ -5,7 +5,6 @@ import (
 	"io"
 	"math"
 	"strings"
-	"unicode/utf8"
 
 	"notchproof/render/number"
 	"notchproof/scf"
@@ -80,7 +79,9 @@ func (s *chartQuestion) tableText(b *strings.Builder) {
 		head = append(head, label)
 	}
 	rows[0] = head
-	columns(b, rows)
+	for _, line := range columns(rows) {
+		fmt.Fprintf(b, "  %s\n", line)
+	}
 }
 
 // cell is a point in the grid.
@@ -92,23 +93,6 @@ func cell(p chart.Point) string {
 		return "not drawn"
 	}
 	return p.Status.String()
-}
-
-// columns writes rows with their columns below each other.
-func columns(b *strings.Builder, rows [][]string) {
-	width := make([]int, len(rows[0]))
-	for _, row := range rows {
-		for k, text := range row {
-			width[k] = max(width[k], utf8.RuneCountInString(text))
-		}
-	}
-	for _, row := range rows {
-		line := " "
-		for k, text := range row {
-			line += " " + text + strings.Repeat(" ", width[k]-utf8.RuneCountInString(text)+1)
-		}
-		b.WriteString(strings.TrimRight(line, " ") + "\n")
-	}
 }
 
 // booksText says how far the published fits are off.
