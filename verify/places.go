@@ -20,11 +20,12 @@ const competing = 0.5
 func (f *Finding) places(p *specimen.Part) {
 	c := &f.Computed
 	if len(c.peaks) > 0 && !c.Factor.Status.Settled() {
-		c.Peak = peak(f.Load, c.Last, c.peaks[0]) // where it is; its size means nothing
+		c.Peak = peak(f.Load, c.Last, c.peaks[0], finest) // where it is; its size means nothing
 		return
 	}
+	known := math.Max(finest, blur*c.Factor.Uncertainty/c.Factor.Value)
 	for i, at := range c.peaks {
-		found := peak(f.Load, c.Last, at)
+		found := peak(f.Load, c.Last, at, known)
 		if i == 0 {
 			c.Peak = found
 		} else if found.Factor >= competing*c.Peak.Factor {
@@ -36,9 +37,9 @@ func (f *Finding) places(p *specimen.Part) {
 		if !ok || quantity(f.Load)(at) <= c.Factor.Value+c.Factor.Uncertainty {
 			continue
 		}
-		found := peak(f.Load, c.Last, at)
+		found := peak(f.Load, c.Last, at, known)
 		c.Others = append(c.Others, found)
-		f.Warnings = append(f.Warnings, fmt.Sprintf("the %s is stressed higher than the notch: %.4g times the nominal stress against %.4g",
+		f.Warnings = append(f.Warnings, fmt.Sprintf("the %s is stressed higher than the notch: about %.3g times the nominal stress against %.3g",
 			found.Side, found.Factor, c.Factor.Value))
 	}
 }
@@ -82,30 +83,35 @@ func atJoint(p *specimen.Part, at r2.Vec) bool {
 }
 
 // peak describes a maximum in the part's terms. Its coordinates are rounded to
-// what the search for it resolves.
-func peak(l *specimen.Load, s *fem.Solution, at fem.SurfacePoint) Peak {
+// the share of its edge to which the place is known.
+func peak(l *specimen.Load, s *fem.Solution, at fem.SurfacePoint, known float64) Peak {
 	m := s.Problem.Shape.Mesh
 	e := m.Boundary[at.Edge]
 	edge := edgeLength(s, at)
 	return Peak{
-		X: rounded(at.At.X, resolution*edge), Y: rounded(at.At.Y, resolution*edge),
+		X: rounded(at.At.X, known*edge), Y: rounded(at.At.Y, known*edge),
 		ArcDegrees: math.Atan2(math.Abs(at.Normal.X), math.Abs(at.Normal.Y)) * 180 / math.Pi,
 		Factor:     quantity(l)(at),
 		Side:       m.Region.Sides()[e.Side].Name,
 	}
 }
 
-// resolution of the place of a maximum, as a share of the edge it lies on. A
-// maximum is flat: the place is known far less well than the value.
-const resolution = 1e-5
+// The place of a maximum is known to a share of the edge it lies on: never better
+// than the search for it resolves, and no better than the error allows. A maximum
+// is flat; an error that changes over an edge by the relative bar moves it by some
+// such shares of the edge.
+const (
+	finest = 1e-5
+	blur   = 10
+)
 
 // rounded brings a coordinate to a decimal step no larger than the given one.
 func rounded(v, step float64) float64 {
 	digits := math.Ceil(-math.Log10(step))
 	if digits >= 0 {
 		scale := math.Pow(10, digits)
-		return math.Round(v*scale) / scale
+		return math.Round(v*scale)/scale + 0 // + 0: no negative zero
 	}
 	scale := math.Pow(10, -digits)
-	return math.Round(v/scale) * scale
+	return math.Round(v/scale)*scale + 0
 }
