@@ -268,7 +268,7 @@ func sideText(f *verify.Finding) string {
 	}
 	return fmt.Sprintf("von Mises %s; on the gross section %s; ladder %s",
 		number.Uncertain(c.VonMises.Value, c.VonMises.Uncertainty),
-		number.Uncertain(c.Gross, c.Gross/c.Factor.Value*c.Factor.Uncertainty), c.Factor.Status)
+		number.Uncertain(c.Gross, c.Gross/c.Factor.Value*c.Factor.Uncertainty), c.State())
 }
 
 // comparisonTexts has one line for the claim and one for each handbook value.

@@ -116,7 +116,7 @@ func (e *xmlWriter) fieldData(f *verify.Finding, part *specimen.Part) {
 	for _, t := range [][2]string{
 		{"part", part.Name}, {"title", part.Title}, {"load", string(f.Load.Name)}, {"length unit", unit}, {"scales", scales},
 		{"nominal stress", f.Load.Nominal.Formula + ", " + f.Load.Nominal.Section},
-		{"ladder", f.Computed.Factor.Status.String()},
+		{"ladder", f.Computed.State()},
 	} {
 		e.line(`<DataArray type="String" Name="%s" NumberOfTuples="1" format="ascii">`, t[0])
 		codes := make([]string, 0, len(t[1])+1)
