@@ -12,6 +12,7 @@ type axis struct {
 	low, high float64 // values at the ends
 	from, to  float64 // pixels at the ends
 	log       bool
+	fine      bool // ruled finely
 }
 
 func (a axis) at(v float64) float64 {
@@ -51,7 +52,7 @@ func (a axis) powers() []mark {
 	decades := math.Log10(a.high / a.low)
 	digits := []float64{1}
 	switch {
-	case decades < 1:
+	case decades < 1, a.fine && decades < 2.5:
 		digits = []float64{1, 2, 3, 4, 6, 8}
 	case decades < 2.5:
 		digits = []float64{1, 2, 5}

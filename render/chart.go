@@ -29,6 +29,7 @@ type Axis struct {
 	Label     string // "depth below the root"
 	Unit      string // "mm"; empty: the label says it all
 	Log       bool   // needs values above zero
+	Fine      bool   // ruled finely, for values to be read off
 	Low, High float64
 }
 
@@ -154,7 +155,7 @@ func (a Axis) shows(v float64) bool {
 // beyond, as a share of the range.
 func (a Axis) scale(values []float64, share float64) axis {
 	if a.Low != 0 || a.High != 0 {
-		return axis{low: a.Low, high: a.High, log: a.Log}
+		return axis{low: a.Low, high: a.High, log: a.Log, fine: a.Fine}
 	}
 	low, high := math.Inf(1), math.Inf(-1)
 	for _, v := range values {
@@ -163,7 +164,7 @@ func (a Axis) scale(values []float64, share float64) axis {
 		}
 	}
 	low, high = around(low, high, share, a.Log)
-	return axis{low: low, high: high, log: a.Log}
+	return axis{low: low, high: high, log: a.Log, fine: a.Fine}
 }
 
 // scales gives both axes of a diagram.

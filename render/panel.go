@@ -28,6 +28,7 @@ func (s *sheet) newPanel(cell box, d Diagram, right float64) *panel {
 	p.x.from, p.x.to = p.frame.X0, p.frame.X1
 	p.y.from, p.y.to = p.frame.Y1, p.frame.Y0
 	xs := p.apart(p.x.marks(max(5, int(p.frame.width()/s.u(2*markApart)))))
+	p.ruleFinely(xs, ys)
 	p.rule(xs, ys)
 	s.text(point{cell.X0, p.frame.Y0 - s.u(12)}, 0, 1, s.fit(d.Y.text(), strong, cell.width()), strong, ink)
 	for _, m := range ys {

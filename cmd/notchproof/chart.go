@@ -4,12 +4,15 @@ import (
 	"context"
 	"fmt"
 	"path/filepath"
+	"runtime/debug"
+	"strconv"
 	"strings"
 	"time"
 
 	"notchproof/render"
 	"notchproof/scf"
 	"notchproof/verify/chart"
+	"notchproof/verify/specimen"
 )
 
 func chartCommand() *command {
@@ -29,7 +32,8 @@ the fitted ones too; it says nothing outside its range.
 A range is low:high or low:high:points (12 points along, 4 curves unless said),
 by equal factors, for angles and offsets by equal steps; a list is a,b,c. What
 else the shape needs follows as dimensions or ratios. Of a part file the
-dimensions that the axes give, the one above the line of a ratio, are replaced.
+dimension that an axis gives, of a ratio the one above the line, need not be
+there and is replaced where it is.
 Points that cannot be drawn are left out and named.
 
 -o may be repeated: .png and .svg are the chart, with the best published fit as
@@ -61,6 +65,7 @@ type chartQuestion struct {
 	join          bool
 	paper         paper
 	bare          bool
+	within        string
 	asJSON        bool
 
 	title string
@@ -80,6 +85,7 @@ func runChart(c *call) (int, error) {
 	f.StringVar(&s.csv, "csv", "", "the table to keep, and to go on with")
 	f.StringVar(&s.share, "share", "", "compute one share of the points only, as in 2/4")
 	f.BoolVar(&s.join, "join", false, "join the tables that are named")
+	f.StringVar(&s.within, "within", "0.25%", "what the formula may be off in cross-validation; the shortest that meets it is taken")
 	f.BoolVar(&s.bare, "bare", false, "leave out the formula")
 	q.loadFlag(f)
 	q.targetFlag(f)
@@ -113,6 +119,9 @@ func runChart(c *call) (int, error) {
 func (s *chartQuestion) checkFiles() error {
 	if s.csv != "" {
 		s.outputs = append(s.outputs, s.csv)
+	}
+	if within, err := share(s.within); err != nil || within < 1e-4 || within > 0.2 {
+		return &inputError{text: "--within " + quoted(s.within) + ": not what a formula may be off", hint: "give a share of the factor from 0.01% to 20%, as in 1%"}
 	}
 	seen := make(map[string]bool)
 	tables := 0
@@ -169,6 +178,9 @@ func (s *chartQuestion) computed(q *questions, args []string, c *call) error {
 		defer journal.Close()
 		s.tellResumed(journal, c)
 	}
+	// The many points of a chart would fill new memory for a second or more: to
+	// use the old again is faster by a third.
+	debug.SetGCPercent(200)
 	bar := c.progress()
 	defer bar.clear()
 	effort.Progress = remaining(bar, "point")
@@ -192,8 +204,12 @@ func (s *chartQuestion) fitted(ctx context.Context, e chart.Effort, bar *progres
 	if s.bare || s.share != "" || len(s.table.Absent()) > 0 {
 		return nil
 	}
+	within, err := share(s.within)
+	if err != nil {
+		return err
+	}
 	e.Share, e.Progress = chart.Share{}, remaining(bar, "formula: point")
-	s.fit, err = s.table.Fit(ctx, e)
+	s.fit, err = s.table.Fit(ctx, within, e)
 	return err
 }
 
@@ -214,7 +230,7 @@ func (s *chartQuestion) words(q *questions, args []string) (w chart.Words, err e
 	}
 	w = chart.Words{Along: s.along, Curves: s.curves, Given: args[1:]}
 	if isFile(args[0]) {
-		err = s.fromFile(q, args, &w)
+		err = s.fromFile(q, args[0], &w)
 	} else {
 		if w.Family, err = familyOf(args[0]); err != nil {
 			return w, err
@@ -242,15 +258,31 @@ func (s *chartQuestion) words(q *questions, args []string) (w chart.Words, err e
 	return w, err
 }
 
-// fromFile takes from a part file what the axes do not give.
-func (s *chartQuestion) fromFile(q *questions, args []string, w *chart.Words) error {
-	file, err := q.shape(args[:1])
+// fromFile takes from a part file what the axes and the other words do not give.
+func (s *chartQuestion) fromFile(q *questions, path string, w *chart.Words) error {
+	data, err := readPartFile(path)
 	if err != nil {
 		return err
 	}
-	w.Family, w.Options, s.title = file.family, file.options, file.title
-	if len(file.loads) == 1 {
-		w.Load = file.loads[0]
+	over, err := q.over()
+	if err != nil {
+		return err
+	}
+	over.Open = true
+	file, err := specimen.ReadPart(data, path, over)
+	if err != nil {
+		return err
+	}
+	part := file.Part
+	if part.Family == nil {
+		return &inputError{text: quoted(path) + ": an outline of one's own has no named dimensions", hint: "give a family with its dimensions, or a part file that names one"}
+	}
+	w.Family, w.Options, s.title = part.Family, part.Options, part.Title
+	if w.Options.ForceLine == "" {
+		w.Options.ForceLine = scf.ForceLineNet
+	}
+	if len(file.Loads) == 1 {
+		w.Load = file.Loads[0]
 	}
 	replaced := make(map[string]bool)
 	for _, word := range append([]string{s.along, s.curves}, w.Given...) {
@@ -258,12 +290,12 @@ func (s *chartQuestion) fromFile(q *questions, args []string, w *chart.Words) er
 		name, _, _ = strings.Cut(name, "/")
 		replaced[strings.TrimSpace(name)] = true
 	}
-	for _, d := range file.family.Dimensions {
-		v, given := file.dims[d.Name]
+	for _, d := range part.Family.Dimensions {
+		v, given := part.Given[d.Name]
 		if !given || replaced[d.Name] {
 			continue
 		}
-		unit := file.unit
+		unit := part.Unit
 		if d.Angle {
 			unit = ""
 		}
@@ -277,8 +309,11 @@ func (s *chartQuestion) effort() (e chart.Effort, err error) {
 	if s.share == "" {
 		return e, nil
 	}
-	n, err := fmt.Sscanf(s.share+"\n", "%d/%d\n", &e.Share.No, &e.Share.Of)
-	if n != 2 || err != nil || e.Share.No < 1 || e.Share.No > e.Share.Of {
+	no, of, _ := strings.Cut(s.share, "/")
+	var bad [2]error
+	e.Share.No, bad[0] = strconv.Atoi(no)
+	e.Share.Of, bad[1] = strconv.Atoi(of)
+	if bad[0] != nil || bad[1] != nil || e.Share.No < 1 || e.Share.No > e.Share.Of {
 		return e, &inputError{text: "--share " + quoted(s.share) + ": no such share", hint: "give its number and how many there are, as in 1/3, 2/3 and 3/3"}
 	}
 	if s.csv == "" {
@@ -296,11 +331,7 @@ func (s *chartQuestion) joined(names []string, c *call) error {
 		return &inputError{text: "--join without tables", hint: "name the .csv files, as in --join a.csv b.csv"}
 	}
 	for i, name := range names {
-		data, err := readPartFile(name)
-		if err != nil {
-			return err
-		}
-		t, cut, err := chart.ReadTable(data, name)
+		t, cut, err := chart.ReadFile(name)
 		if err != nil {
 			return err
 		}

@@ -14,14 +14,18 @@ import (
 func (s *chartQuestion) plot() render.Plot {
 	q := s.table.Question
 	d := render.Diagram{
-		X: render.Axis{Label: q.Along.String(), Unit: q.Along.Unit, Log: q.Along.Log},
-		Y: render.Axis{Label: q.Symbol() + ", on the net section"},
+		X: render.Axis{Label: q.Along.String(), Unit: strings.ReplaceAll(q.Along.Unit, "°", "degrees"), Log: q.Along.Log, Fine: true},
+		Y: render.Axis{Label: q.Symbol() + ", on the net section", Fine: true},
 	}
-	book := s.book()
+	book, drawn := s.book(), false
 	for k := range s.table.Curves() {
 		if book >= 0 {
-			d.Curves = append(d.Curves, bands(s.table.Curve(k), book, s.table.Books[book].Accuracy)...)
+			list := bands(s.table.Curve(k), book, s.table.Books[book].Accuracy)
+			d.Curves, drawn = append(d.Curves, list...), drawn || len(list) > 0
 		}
+	}
+	if !drawn {
+		book = -1
 	}
 	for k := range s.table.Curves() {
 		d.Curves = append(d.Curves, s.curve(k)...)
@@ -78,8 +82,7 @@ func (s *chartQuestion) curve(k int) (list []render.Curve) {
 			c.Points = append(c.Points, render.CurvePoint{X: p.X, Y: p.Factor})
 		}
 		if i == len(pieces)-1 && q.Curves != nil {
-			c.Label = q.Place(math.NaN(), points[0].Y)
-			_, c.Label, _ = strings.Cut(c.Label, ", ")
+			c.Label = q.CurveName(points[0].Y)
 		}
 		list = append(list, c)
 	}

@@ -72,11 +72,11 @@ func (s *chartQuestion) tableText(b *strings.Builder) {
 		rows = append(rows, row)
 	}
 	for k := range s.table.Curves() {
-		label := q.Symbol()
-		if q.Curves != nil {
-			label = strings.TrimPrefix(q.Place(0, s.table.Curve(k)[0].Y), q.Place(0, 0)[:strings.Index(q.Place(0, 0), ", ")+2])
+		if q.Curves == nil {
+			head = append(head, q.Symbol())
+		} else {
+			head = append(head, q.CurveName(s.table.Curve(k)[0].Y))
 		}
-		head = append(head, label)
 	}
 	rows[0] = head
 	for _, line := range columns(rows) {
@@ -91,6 +91,8 @@ func cell(p chart.Point) string {
 		return number.Uncertain(p.Factor, p.Uncertainty)
 	case chart.NotDrawn:
 		return "not drawn"
+	case chart.Missing:
+		return "–"
 	}
 	return p.Status.String()
 }
@@ -113,8 +115,12 @@ func (s *chartQuestion) booksText(b *strings.Builder) {
 
 func (s *chartQuestion) fitText(b *strings.Builder, st style) {
 	if s.fit == nil {
-		if !s.bare && s.share == "" {
-			fmt.Fprintf(b, "  formula    none: too few settled points\n")
+		switch {
+		case s.bare || s.share != "":
+		case len(s.table.Absent()) > 0:
+			b.WriteString("  formula    none while points are missing\n")
+		default:
+			b.WriteString("  formula    none: too few settled points\n")
 		}
 		return
 	}

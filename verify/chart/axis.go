@@ -164,7 +164,7 @@ func spaced(low, high float64, n int, log bool) []float64 {
 // between is the place a share of the way from low to high.
 func between(low, high, share float64, log bool) float64 {
 	if log {
-		return low * math.Exp(share*math.Log(high/low))
+		return math.Exp(math.Log(low) + share*(math.Log(high)-math.Log(low)))
 	}
 	return low + share*(high-low)
 }

@@ -8,8 +8,13 @@ import (
 // Fit fits a formula to the points of the chart and to further ones in half of
 // the cells between them, and measures its error at points in the other half and
 // on the curves, none of which it was fitted to: all these are solved for the
-// purpose. It gives nil where there are too few settled points for a formula.
-func (t *Table) Fit(ctx context.Context, e Effort) (*Fit, error) {
+// purpose. Within is the share of the factor that is close enough, 0: 0.0025; a
+// wider one gives a shorter formula. It gives nil where there are too few settled
+// points for a formula.
+func (t *Table) Fit(ctx context.Context, within float64, e Effort) (*Fit, error) {
+	if within == 0 {
+		within = defaultWithin
+	}
 	more, others := t.between()
 	all := append(append([]Point{}, more...), others...)
 	list := make([]*Point, len(all))
@@ -21,7 +26,7 @@ func (t *Table) Fit(ctx context.Context, e Effort) (*Fit, error) {
 	}
 	more, others = all[:len(more)], all[len(more):]
 	fitted := append(append([]Point{}, t.Points...), more...)
-	f := t.Question.fit(fitted)
+	f := t.Question.fit(fitted, within)
 	if f == nil {
 		return nil, nil
 	}

@@ -100,9 +100,10 @@ func TestSharesJoinToTheWhole(t *testing.T) {
 	want := whole(t, small(t), filepath.Join(dir, "whole.csv"), Effort{Workers: 3})
 	var shares []*Table
 	for k := 3; k >= 1; k-- {
-		data := whole(t, small(t), filepath.Join(dir, "share.csv"), Effort{Workers: 2, Share: Share{k, 3}})
-		os.Remove(filepath.Join(dir, "share.csv"))
-		a, cut, err := ReadTable(data, "share")
+		file := filepath.Join(dir, "share.csv")
+		whole(t, small(t), file, Effort{Workers: 2, Share: Share{k, 3}})
+		a, cut, err := ReadFile(file)
+		os.Remove(file)
 		if err != nil || cut || len(a.Absent()) != 4 {
 			t.Fatalf("share %d: %v, %v, %d points absent", k, err, cut, len(a.Absent()))
 		}
@@ -195,14 +196,14 @@ func BenchmarkChart(b *testing.B) {
 	}
 	b.Run("formula", func(b *testing.B) {
 		for b.Loop() {
-			if f, err := a.Fit(context.Background(), Effort{}); err != nil || f == nil {
+			if f, err := a.Fit(context.Background(), 0, Effort{}); err != nil || f == nil {
 				b.Fatal(err)
 			}
 		}
 	})
 	b.Run("least squares", func(b *testing.B) {
 		for b.Loop() {
-			if a.Question.fit(a.Points) == nil {
+			if a.Question.fit(a.Points, defaultWithin) == nil {
 				b.Fatal("no fit")
 			}
 		}

@@ -31,9 +31,9 @@ type Fit struct {
 // A datum is a point that a formula is fitted to.
 type datum struct{ x, y, k, weight float64 }
 
-// fit chooses the form of least effort that is as good as any, and fits it. nil:
-// there are too few points for any form.
-func (q *Question) fit(points []Point) *Fit {
+// fit chooses the shortest form that is good to within a share of the factor, or
+// else as good as any, and fits it. nil: there are too few points for any form.
+func (q *Question) fit(points []Point, within float64) *Fit {
 	data, xs, ys := q.data(points)
 	if len(data) < 4 || len(xs) < 3 {
 		return nil
@@ -53,7 +53,7 @@ func (q *Question) fit(points []Point) *Fit {
 	if len(tried) == 0 {
 		return nil
 	}
-	best := choose(tried)
+	best := choose(tried, within)
 	f.form, f.Terms = best.form, len(best.coefficients)
 	f.u, f.v = f.scalings(best.form)
 	f.round(best.coefficients, data)
@@ -86,21 +86,22 @@ type trial struct {
 	left         float64 // largest relative error at a point left out of the fit
 }
 
-// as good as the best is a trial within this factor of its error, or within
-// half a hundredth: a chart is read to two or three figures (common practice).
 const (
+	// asGood as the best is a trial within this factor of its error.
 	asGood = 1.25
-	enough = 0.0025
+	// defaultWithin is enough: a chart is read to three figures at most (common
+	// practice).
+	defaultWithin = 0.0025
 )
 
-// choose takes the fewest terms among the trials that are as good as the best,
-// and of equals the better.
-func choose(tried []trial) trial {
+// choose takes the fewest terms among the trials that are within what is enough,
+// or else as good as the best, and of equals the better.
+func choose(tried []trial, within float64) trial {
 	least := math.Inf(1)
 	for _, t := range tried {
 		least = math.Min(least, t.left)
 	}
-	limit := math.Max(asGood*least, enough)
+	limit := math.Max(asGood*least, within)
 	var best *trial
 	for i := range tried {
 		t := &tried[i]
@@ -116,12 +117,7 @@ func choose(tried []trial) trial {
 
 func (f *Fit) scalings(form form) (u, v scaling) {
 	u = form.x.scaling(f.Along)
-	if f.across {
-		v = form.y.scaling(f.Across)
-	} else {
-		v = scaling{0, 1}
-	}
-	return u, v
+	return u, form.y.scaling(f.Across)
 }
 
 // try solves the weighted least squares by QR, and leaves out each point in turn:
@@ -210,7 +206,7 @@ func (f *Fit) round(c []float64, data []datum) {
 // Factor is the value of the formula. It means nothing outside the range.
 func (f *Fit) Factor(x, y float64) float64 {
 	u, v := f.u.of(f.form.x.of(x)), 0.0
-	if f.across {
+	if f.form.q > 0 {
 		v = f.v.of(f.form.y.of(y))
 	}
 	rows := f.rows()

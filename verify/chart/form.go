@@ -104,10 +104,9 @@ func forms(x, y extent, least float64, p, q int) (list []form) {
 				continue
 			}
 			for _, b := range inners() {
-				if q == 0 && b.text != "%s" || q > 0 && !b.good(y.low, y.high) {
-					continue
+				if b.good(y.low, y.high) {
+					list = append(list, degrees(form{outer: o, x: a, y: b}, p, q)...)
 				}
-				list = append(list, degrees(form{outer: o, x: a, y: b}, p, q)...)
 			}
 		}
 	}
@@ -117,7 +116,10 @@ func forms(x, y extent, least float64, p, q int) (list []form) {
 // degrees lists one form with all degrees up to p and q.
 func degrees(f form, p, q int) (list []form) {
 	for f.p = 1; f.p <= p; f.p++ {
-		for f.q = min(1, q); f.q <= q; f.q++ {
+		for f.q = 0; f.q <= q; f.q++ {
+			if f.q == 0 && f.y.text != "%s" {
+				continue // what y is made into does not matter without it
+			}
 			for _, f.full = range []bool{true, false} {
 				if !f.full && (f.p < 2 || f.q < 2) {
 					continue // the same as the full one, or not much less

@@ -10,11 +10,11 @@ import (
 // functions exp, ln and sqrt alone. ln is the natural logarithm.
 func (q *Question) Formula(f *Fit) []string {
 	lines := []string{"x = " + q.Along.named()}
-	if f.across {
+	if f.form.q > 0 {
 		lines = append(lines, "y = "+q.Curves.named())
 	}
 	lines = append(lines, "u = "+f.u.text(f.form.x, "x"))
-	if f.across {
+	if f.form.q > 0 {
 		lines = append(lines, "v = "+f.v.text(f.form.y, "y"))
 	}
 	return append(lines, q.Symbol()+" = "+fmt.Sprintf(f.form.outer.text, f.polynomial()))

@@ -1,10 +1,8 @@
 package chart
 
 import (
-	"errors"
 	"fmt"
 	"io"
-	"io/fs"
 	"os"
 )
 
@@ -33,26 +31,15 @@ func Open(name string, t *Table) (j *Journal, err error) {
 			file.Close()
 		}
 	}()
-	data, err := io.ReadAll(io.LimitReader(file, longestTable+1))
+	data, err := readAll(file, name)
 	if err != nil {
-		return nil, unreadable(name, err)
-	}
-	if len(data) > longestTable {
-		return nil, fault("name another file", "%q: too long for the table of a chart", name)
+		return nil, err
 	}
 	j = &Journal{file: file, name: name, table: t, last: -1}
 	if len(data) == 0 {
 		return j, j.write(t.Head())
 	}
 	return j, j.resume(data)
-}
-
-func unreadable(name string, err error) error {
-	var path *fs.PathError
-	if errors.As(err, &path) {
-		err = path.Err
-	}
-	return fault("choose a file that may be read and written", "%q: %v", name, err)
 }
 
 // resume takes over the points of the file and makes ready to go on behind them.

@@ -215,9 +215,14 @@ func (q *Question) Symbol() string {
 func (q *Question) Place(x, y float64) string {
 	text := fmt.Sprintf("%s = %s", q.Along.Variable, q.Along.value(x))
 	if q.Curves != nil {
-		text += fmt.Sprintf(", %s = %s", q.Curves.Variable, q.Curves.value(y))
+		text += ", " + q.CurveName(y)
 	}
 	return text
+}
+
+// CurveName is what tells a curve from others: "D/d = 1.5".
+func (q *Question) CurveName(y float64) string {
+	return q.Curves.String() + " = " + q.Curves.value(y)
 }
 
 // value writes a value of the axis to the digits that a reader needs.

@@ -6,7 +6,9 @@ import (
 	"errors"
 	"fmt"
 	"io"
+	"io/fs"
 	"math"
+	"os"
 	"slices"
 	"strings"
 
@@ -23,12 +25,42 @@ type found struct {
 // longestTable bounds what is read, far above the largest chart.
 const longestTable = 1 << 24
 
-// ReadTable reads the table of a chart. A last line without an end was cut off
-// while it was written and is left out; cut tells so. The name is for errors,
-// which are *Fault.
-func ReadTable(data []byte, name string) (t *Table, cut bool, err error) {
+// ReadFile reads the table of a chart. A last line without an end was cut off
+// while it was written and is left out; cut tells so. Errors are *Fault.
+func ReadFile(name string) (t *Table, cut bool, err error) {
+	file, err := os.Open(name)
+	if err != nil {
+		return nil, false, unreadable(name, err)
+	}
+	defer file.Close()
+	data, err := readAll(file, name)
+	if err != nil {
+		return nil, false, err
+	}
 	t, f, err := read(data, name)
 	return t, f.cut, err
+}
+
+func readAll(r io.Reader, name string) ([]byte, error) {
+	data, err := io.ReadAll(io.LimitReader(r, longestTable+1))
+	if err != nil {
+		return nil, unreadable(name, err)
+	}
+	if len(data) > longestTable {
+		return nil, fault("name another file", "%q: too long for the table of a chart", name)
+	}
+	return data, nil
+}
+
+func unreadable(name string, err error) error {
+	var path *fs.PathError
+	if errors.As(err, &path) {
+		err = path.Err
+	}
+	if errors.Is(err, fs.ErrNotExist) {
+		return fault("name files that chart wrote", "%q: no such file", name)
+	}
+	return fault("choose a file that may be read and written", "%q: %v", name, err)
 }
 
 func read(data []byte, name string) (*Table, found, error) {

@@ -31,6 +31,9 @@ type Claim struct {
 type Over struct {
 	Nu        *float64 // nil: the file's
 	ForceLine string   // empty: the file's
+	// Open lets dimensions of a family be missing. A part of a family is then not
+	// drawn: it has its Family, Given, Unit and Options, and the names of its loads.
+	Open bool
 }
 
 // The keys of a part file.
@@ -130,7 +133,7 @@ func (d *document) shape(n *node, nu float64, over Over) (*Part, error) {
 		}
 	}
 	if n.member("family") != nil {
-		return d.family(n, o)
+		return d.family(n, o, over.Open)
 	}
 	return d.outline(n, o)
 }

@@ -6,8 +6,8 @@ import (
 	"notchproof/scf"
 )
 
-// family draws a family with its dimensions.
-func (d *document) family(n *node, o scf.Options) (*Part, error) {
+// family draws a family with its dimensions, unless some may be missing.
+func (d *document) family(n *node, o scf.Options, open bool) (*Part, error) {
 	name, err := d.text(n.member("family"))
 	if err != nil {
 		return nil, err
@@ -34,6 +34,13 @@ func (d *document) family(n *node, o scf.Options) (*Part, error) {
 	dims, unit, err := d.dimensions(n, family)
 	if err != nil {
 		return nil, err
+	}
+	if open {
+		p := &Part{Name: family.Name, Family: family, Given: dims, Unit: unit, Options: o}
+		for _, load := range family.Loads {
+			p.Loads = append(p.Loads, Load{Name: load})
+		}
+		return p, nil
 	}
 	p, err := New(family, dims, unit, o)
 	return p, d.dimensionFault(n, err)

@@ -1,0 +1,219 @@
+package chart
+
+import (
+	"context"
+	"go/ast"
+	"go/parser"
+	"go/token"
+	"math"
+	"math/rand/v2"
+	"os"
+	"strconv"
+	"strings"
+	"testing"
+
+	"notchproof/scf"
+)
+
+// evaluate reads the lines of a formula as a calculation would, with nothing but
+// what is printed, and gives the factor.
+func evaluate(t *testing.T, lines []string, x, y float64) float64 {
+	t.Helper()
+	known := map[string]float64{}
+	last := math.NaN()
+	for i, line := range lines {
+		name, text, ok := strings.Cut(line, " = ")
+		if !ok {
+			t.Fatalf("%q: no =", line)
+		}
+		switch name {
+		case "x":
+			last = x
+		case "y":
+			last = y
+		default:
+			e, err := parser.ParseExpr(text)
+			if err != nil {
+				t.Fatalf("line %d, %q: %v", i+1, text, err)
+			}
+			last = value(t, e, known)
+		}
+		known[name] = last
+	}
+	return last
+}
+
+func value(t *testing.T, e ast.Expr, known map[string]float64) float64 {
+	switch e := e.(type) {
+	case *ast.BasicLit:
+		v, err := strconv.ParseFloat(e.Value, 64)
+		if err != nil {
+			t.Fatal(err)
+		}
+		return v
+	case *ast.Ident:
+		v, ok := known[e.Name]
+		if !ok {
+			t.Fatalf("%s: not known", e.Name)
+		}
+		return v
+	case *ast.ParenExpr:
+		return value(t, e.X, known)
+	case *ast.UnaryExpr:
+		if e.Op == token.SUB {
+			return -value(t, e.X, known)
+		}
+	case *ast.BinaryExpr:
+		a, b := value(t, e.X, known), value(t, e.Y, known)
+		switch e.Op {
+		case token.ADD:
+			return a + b
+		case token.SUB:
+			return a - b
+		case token.MUL:
+			return a * b
+		case token.QUO:
+			return a / b
+		}
+	case *ast.CallExpr:
+		f := map[string]func(float64) float64{"exp": math.Exp, "ln": math.Log, "sqrt": math.Sqrt}[e.Fun.(*ast.Ident).Name]
+		if f != nil && len(e.Args) == 1 {
+			return f(value(t, e.Args[0], known))
+		}
+	}
+	t.Fatalf("%v: not a formula", e)
+	return 0
+}
+
+// TestFormulaHolds: what is printed, read back, is within the stated error of the
+// points of the chart and of fresh ones that neither the fit nor the measuring of
+// its error has seen.
+func TestFormulaHolds(t *testing.T) {
+	rows := []Words{
+		words(t, "bar-hole", scf.Tension, "d/W=0.1:0.6:8", ""),
+		words(t, "shaft-shoulder", scf.Torsion, "r/d=0.03:0.2:6", "D/d=1.2,1.6,2"),
+	}
+	if os.Getenv("NOTCHPROOF_LONG") != "" {
+		rows = append(rows,
+			words(t, "shaft-shoulder", scf.Bending, "r/d=0.02:0.3", "D/d=1.1,1.5,2"),
+			words(t, "bar-collar", scf.Tension, "r/d=0.03:0.3", "L/d=0.1,0.2,0.4,1", "D/d=2"),
+			words(t, "bar-edge-notch", scf.Bending, "angle=0:120:9", "d/D=0.6,0.8", "r/D=0.05"),
+			words(t, "bar-hole", scf.Bending, "e/W=0:0.2", "d/W=0.1,0.2,0.3"),
+			words(t, "bar-ellipse", scf.Tension, "a/b=0.5:8", "a/W=0.05,0.15,0.25"),
+		)
+	}
+	random := rand.New(rand.NewPCG(3, 9))
+	for _, w := range rows {
+		a := table(t, w)
+		q := a.Question
+		if err := a.Run(context.Background(), Effort{}, func(int) error { return nil }); err != nil {
+			t.Fatal(err)
+		}
+		f, err := a.Fit(context.Background(), 0, Effort{})
+		if err != nil || f == nil {
+			t.Fatalf("%s: no formula, %v", w.Along, err)
+		}
+		points := a.Points
+		for range 6 {
+			p := q.point(between(f.Along.low, f.Along.high, random.Float64(), q.Along.Log), math.NaN())
+			if q.Curves != nil {
+				p.Y = between(f.Across.low, f.Across.high, random.Float64(), q.Curves.Log)
+			}
+			p.Status = Missing
+			if err := q.solve(context.Background(), &p); err != nil {
+				t.Fatal(err)
+			}
+			points = append(points, p)
+		}
+		lines, worst := q.Formula(f), 0.0
+		for _, p := range points {
+			if p.Status != Settled {
+				continue
+			}
+			k := evaluate(t, lines, p.X, p.Y)
+			off := math.Abs(k/p.Factor - 1)
+			worst = math.Max(worst, off)
+			if math.Abs(k/f.Factor(p.X, p.Y)-1) > 1e-12 {
+				t.Errorf("%s at %s: printed it gives %g, in the program %g", w.Along, q.Place(p.X, p.Y), k, f.Factor(p.X, p.Y))
+			}
+			if off > f.Error {
+				t.Errorf("%s at %s: %g for %g, off by %g and not by %g at most", w.Along, q.Place(p.X, p.Y), k, p.Factor, off, f.Error)
+			}
+		}
+		if f.Error > 0.02 || f.Error > 5*worst+2e-3 {
+			t.Errorf("%s: an error of %g, where %g was seen", w.Along, f.Error, worst)
+		}
+		t.Logf("%s, %s by %s: %d terms, stated %g, seen %g\n%s", w.Family.Name, w.Along, w.Curves, f.Terms, f.Error, worst, strings.Join(lines, "\n"))
+	}
+}
+
+// TestFitFindsTheForm: points that lie on a power law with a term come out to
+// rounding, with its coefficients' count or fewer; scattered ones do not.
+func TestFitFindsTheForm(t *testing.T) {
+	a := table(t, words(t, "shaft-shoulder", scf.Bending, "r/d=0.02:0.3", "D/d=1.1,1.3,1.6,2"))
+	law := func(x, y float64) float64 {
+		return 1 + 0.4*math.Pow(x, -0.5)*math.Pow(y-1, 0.1+0.02*math.Log(x))
+	}
+	for i := range a.Points {
+		p := &a.Points[i]
+		p.Factor, p.Uncertainty, p.Status = law(p.X, p.Y), 1e-6, Settled
+	}
+	f := a.Question.fit(a.Points, 1e-4)
+	for range 20 {
+		x, y := 0.02+0.28*rand.Float64(), 1.1+0.9*rand.Float64()
+		if off := math.Abs(f.Factor(x, y)/law(x, y) - 1); off > 2e-4 {
+			t.Errorf("at %g, %g: off by %g", x, y, off)
+		}
+	}
+	if f.Terms > 4 {
+		t.Errorf("%d terms for a law of four", f.Terms)
+	}
+	short := a.Question.fit(a.Points, 0.2)
+	if short.Terms >= f.Terms {
+		t.Errorf("%d terms where a fifth is close enough, %d where a ten-thousandth is", short.Terms, f.Terms)
+	}
+	for i := range a.Points {
+		a.Points[i].Status = Undecided
+	}
+	if a.Question.fit(a.Points, 1e-4) != nil {
+		t.Error("a formula from undecided points")
+	}
+}
+
+// TestLeverageIsTheHatMatrix: leaving a point out is what the short way says.
+func TestLeverageIsTheHatMatrix(t *testing.T) {
+	a := table(t, words(t, "shaft-shoulder", scf.Bending, "r/d=0.02:0.3", "", "D/d=2"))
+	for i := range a.Points {
+		p := &a.Points[i]
+		p.Factor, p.Uncertainty, p.Status = 1+0.3*math.Pow(p.X, -0.45)+0.01*math.Sin(40*p.X), 1e-4, Settled
+	}
+	data, _, _ := a.Question.data(a.Points)
+	form := form{outer: outers()[0], x: inners()[1], y: inners()[0], p: 3, full: true}
+	f := &Fit{Along: extent{0.02, 0.3}, Across: extent{0, 0}}
+	all, ok := f.try(form, data)
+	if !ok {
+		t.Fatal("no fit")
+	}
+	worst := 0.0
+	for i, d := range data {
+		rest := append(append([]datum{}, data[:i]...), data[i+1:]...)
+		one, ok := f.try(form, rest)
+		if !ok {
+			t.Fatal("no fit")
+		}
+		g := &Fit{form: form, coefficients: one.coefficients}
+		g.u, g.v = f.scalings(form)
+		worst = math.Max(worst, math.Abs(g.Factor(d.x, d.y)/d.k-1))
+	}
+	if math.Abs(worst/all.left-1) > 1e-6 {
+		t.Errorf("largest error at a point left out %g, by leverage %g", worst, all.left)
+	}
+}
+
+func TestRoundUp(t *testing.T) {
+	for _, row := range [][2]float64{{0.0031, 0.004}, {0.003, 0.003}, {0.00141, 0.0015}, {0.0199, 0.02}, {0.097, 0.1}, {0, 0}} {
+		if got := RoundUp(row[0]); math.Abs(got-row[1]) > 1e-12 {
+			t.Errorf("%g rounded up to %g, not %g", row[0], got, row[1])
+		}
+	}
+}
