@@ -85,7 +85,7 @@ func runChart(c *call) (int, error) {
 	f.StringVar(&s.csv, "csv", "", "the table to keep, and to go on with")
 	f.StringVar(&s.share, "share", "", "compute one share of the points only, as in 2/4")
 	f.BoolVar(&s.join, "join", false, "join the tables that are named")
-	f.StringVar(&s.within, "within", "0.25%", "what the formula may be off in cross-validation; the shortest that meets it is taken")
+	f.StringVar(&s.within, "within", "0.5%", "what the formula may be off in cross-validation; the shortest that meets it is taken")
 	f.BoolVar(&s.bare, "bare", false, "leave out the formula")
 	q.loadFlag(f)
 	q.targetFlag(f)

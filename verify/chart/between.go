@@ -8,7 +8,7 @@ import (
 // Fit fits a formula to the points of the chart and to further ones in half of
 // the cells between them, and measures its error at points in the other half and
 // on the curves, none of which it was fitted to: all these are solved for the
-// purpose. Within is the share of the factor that is close enough, 0: 0.0025; a
+// purpose. Within is the share of the factor that is close enough, 0: 0.005; a
 // wider one gives a shorter formula. It gives nil where there are too few settled
 // points for a formula.
 func (t *Table) Fit(ctx context.Context, within float64, e Effort) (*Fit, error) {

@@ -91,7 +91,7 @@ const (
 	asGood = 1.25
 	// defaultWithin is enough: a chart is read to three figures at most (common
 	// practice).
-	defaultWithin = 0.0025
+	defaultWithin = 0.005
 )
 
 // choose takes the fewest terms among the trials that are within what is enough,

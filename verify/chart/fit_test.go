@@ -8,6 +8,7 @@ import (
 	"math"
 	"math/rand/v2"
 	"os"
+	"regexp"
 	"strconv"
 	"strings"
 	"testing"
@@ -214,6 +215,37 @@ func TestRoundUp(t *testing.T) {
 	for _, row := range [][2]float64{{0.0031, 0.004}, {0.003, 0.003}, {0.00141, 0.0015}, {0.0199, 0.02}, {0.097, 0.1}, {0, 0}} {
 		if got := RoundUp(row[0]); math.Abs(got-row[1]) > 1e-12 {
 			t.Errorf("%g rounded up to %g, not %g", row[0], got, row[1])
+		}
+	}
+}
+
+// TestReadmeFormula: the formula that the README prints gives the factors of the
+// chart that it stands under, to within the error that it states.
+func TestReadmeFormula(t *testing.T) {
+	text, err := os.ReadFile("../../README.md")
+	if err != nil {
+		t.Fatal(err)
+	}
+	block := regexp.MustCompile(`(?s)formula, .*?\n(  x = .*?)\n  within ([0-9.]+)\x{00a0}% of`).FindStringSubmatch(string(text))
+	if block == nil {
+		t.Fatal("no formula in the README")
+	}
+	lines := strings.Split(block[1], "\n")
+	for i := range lines {
+		lines[i] = strings.TrimSpace(lines[i])
+	}
+	percent, err := strconv.ParseFloat(block[2], 64)
+	if err != nil {
+		t.Fatal(err)
+	}
+	a := table(t, words(t, "bar-collar", scf.Tension, "r/d=0.03,0.1,0.3", "L/d=0.1,0.3,1", "D/d=2"))
+	if err := a.Run(context.Background(), Effort{}, func(int) error { return nil }); err != nil {
+		t.Fatal(err)
+	}
+	for _, p := range a.Points {
+		k := evaluate(t, lines, p.X, p.Y)
+		if off := math.Abs(k - p.Factor); p.Status != Settled || off > p.Factor*percent/100+p.Uncertainty {
+			t.Errorf("%s: %g where %g ± %g is computed", a.Question.Place(p.X, p.Y), k, p.Factor, p.Uncertainty)
 		}
 	}
 }
