@@ -97,7 +97,11 @@ func (s *chartQuestion) curve(k int) (list []render.Curve) {
 
 func (s *chartQuestion) heading() string {
 	q := s.table.Question
-	return fmt.Sprintf("%s: %s, %s", q.Family.Name, q.Family.Title, q.Load)
+	text := fmt.Sprintf("%s: %s, %s", q.Family.Name, q.Family.Title, q.Load)
+	if s.title != "" {
+		return oneLine(s.title) + ". " + text
+	}
+	return text
 }
 
 // plotNote says what the chart is of, and how good it is.
@@ -105,6 +109,7 @@ func (s *chartQuestion) plotNote(book int) string {
 	q := s.table.Question
 	nominal, _ := s.nominal()
 	words := []string{fmt.Sprintf("Nominal stress %s (%s)", nominal.Formula, nominal.Section)}
+	words = append(words, nominal.Notes...)
 	words = append(words, s.fixed()...)
 	widest := 0.0
 	for _, p := range s.table.Points {

@@ -79,6 +79,37 @@ func TestChartGoesOn(t *testing.T) {
 	}
 }
 
+// TestChartGaps: a point that is undecided is a gap, named, and makes the exit
+// status that of an undecided check.
+func TestChartGaps(t *testing.T) {
+	dir := t.TempDir()
+	file, drawn := filepath.Join(dir, "t.csv"), filepath.Join(dir, "t.svg")
+	words := strings.Replace(smallChart, ":3", ":5", 1)
+	if status, _, errs := program(t, words+"--bare -o "+file); status != exitAgrees {
+		t.Fatal(errs)
+	}
+	data, err := os.ReadFile(file)
+	if err != nil {
+		t.Fatal(err)
+	}
+	lines := strings.SplitAfter(string(data), "\r\n")
+	third := strings.Split(lines[len(lines)-4], ",")
+	third[2], third[3], third[4], third[5] = "", "", "undecided", "\"the ladder, it seems, has not converged\""
+	lines[len(lines)-4] = strings.Join(third, ",")
+	if err := os.WriteFile(file, []byte(strings.Join(lines, "")), 0o644); err != nil {
+		t.Fatal(err)
+	}
+	for _, line := range []string{words + "-o " + file + " -o " + drawn, "chart --join " + file + " -o " + drawn} {
+		status, out, _ := program(t, line)
+		if status != exitUndecided || !strings.Contains(out, "undecided  r/D = 0.0519615, d/D = 0.9: the ladder, it seems") || !strings.Contains(out, "Kts = ") {
+			t.Errorf("%s: exit status %d\n%s", line, status, out)
+		}
+		if picture, _ := os.ReadFile(drawn); !bytes.Contains(picture, []byte("1 undecided and left")) {
+			t.Errorf("%s: the picture does not tell of the gap", line)
+		}
+	}
+}
+
 // TestChartTableIsCSV reads the table as any reader of RFC 4180 with comments
 // does, and holds the object of --json against it.
 func TestChartTableIsCSV(t *testing.T) {

@@ -41,6 +41,9 @@ func (s *chartQuestion) writeText(w io.Writer, st style) error {
 	fmt.Fprintf(&b, "%s  %s\n", st.bold(q.Family.Name), strings.Join(s.fixed(), ", "))
 	nominal, _ := s.nominal()
 	fmt.Fprintf(&b, "\n%s, %s over %s, nominal stress %s (%s)\n", st.bold(string(q.Load)), q.Symbol(), q.Along.Variable, nominal.Formula, nominal.Section)
+	for _, note := range nominal.Notes {
+		fmt.Fprintf(&b, "  %s\n", note)
+	}
 	s.tableText(&b)
 	s.booksText(&b)
 	s.fitText(&b, st)
@@ -150,6 +153,7 @@ func (s *chartQuestion) leftOutText(b *strings.Builder, st style) {
 			fmt.Fprintf(b, "  %s  %s: %s\n", st.weak("undecided"), q.Place(p.X, p.Y), oneLine(p.Why))
 		}
 	}
+	s.warningsText(b, st)
 	if s.share != "" {
 		return
 	}
@@ -157,5 +161,21 @@ func (s *chartQuestion) leftOutText(b *strings.Builder, st style) {
 		if p.Status == chart.Missing {
 			fmt.Fprintf(b, "  %s    %s\n", st.weak("missing"), q.Place(p.X, p.Y))
 		}
+	}
+}
+
+// warningsText tells of the first point whose factor does not tell all.
+func (s *chartQuestion) warningsText(b *strings.Builder, st style) {
+	var first *chart.Point
+	n := 0
+	for i := range s.table.Points {
+		if p := &s.table.Points[i]; p.Status == chart.Settled && p.Why != "" {
+			if n++; first == nil {
+				first = p
+			}
+		}
+	}
+	if n > 0 {
+		fmt.Fprintf(b, "  %s    at %s, the first at %s: %s\n", st.weak("warning"), number.CountOf(n, "point", "points"), s.table.Question.Place(first.X, first.Y), oneLine(first.Why))
 	}
 }

@@ -3,8 +3,6 @@ package chart
 import (
 	"math"
 	"slices"
-
-	"gonum.org/v1/gonum/mat"
 )
 
 // A Fit is a formula for the factor over the range of a chart, and how far it is
@@ -45,15 +43,19 @@ func (q *Question) fit(points []Point, within float64) *Fit {
 	}
 	p, across := min(highestAlong, len(xs)-2), min(highestAcross, len(ys)-1)
 	var tried []trial
+	some := thinned(data)
 	for _, form := range forms(f.Along, f.Across, least, p, across) {
-		if t, ok := f.try(form, data); ok {
+		if t, ok := f.try(form, some); ok {
 			tried = append(tried, t)
 		}
 	}
 	if len(tried) == 0 {
 		return nil
 	}
-	best := choose(tried, within)
+	best, ok := f.try(choose(tried, within).form, data)
+	if !ok {
+		return nil
+	}
 	f.form, f.Terms = best.form, len(best.coefficients)
 	f.u, f.v = f.scalings(best.form)
 	f.round(best.coefficients, data)
@@ -77,6 +79,20 @@ func (q *Question) data(points []Point) (data []datum, xs, ys []float64) {
 	slices.Sort(xs)
 	slices.Sort(ys)
 	return data, slices.Compact(xs), slices.Compact(ys)
+}
+
+// enoughToChoose is how many points the choice among forms rests on at most: it
+// takes as long as solving a few of them, whatever the size of the chart.
+const enoughToChoose = 400
+
+// thinned takes points all over the chart.
+func thinned(data []datum) []datum {
+	every := (len(data) + enoughToChoose - 1) / enoughToChoose
+	var some []datum
+	for i := 0; i < len(data); i += every {
+		some = append(some, data[i])
+	}
+	return some
 }
 
 // A trial is a form fitted, and how well it stands cross-validation.
@@ -118,63 +134,6 @@ func choose(tried []trial, within float64) trial {
 func (f *Fit) scalings(form form) (u, v scaling) {
 	u = form.x.scaling(f.Along)
 	return u, form.y.scaling(f.Across)
-}
-
-// try solves the weighted least squares by QR, and leaves out each point in turn:
-// its residual then is the one of the full fit over 1 − h, h being its diagonal
-// element of the hat matrix (D. M. Allen, Technometrics 16 (1974) 125, from
-// memory), so that no second fit is needed.
-func (f *Fit) try(form form, data []datum) (trial, bool) {
-	terms := form.terms()
-	n, m := len(data), len(terms)
-	if n < m+2 {
-		return trial{}, false
-	}
-	u, v := f.scalings(form)
-	a, b := mat.NewDense(n, m, nil), mat.NewVecDense(n, nil)
-	weights := make([]float64, n)
-	for i, d := range data {
-		weights[i] = d.weight / math.Abs(form.outer.slope(d.k))
-		x, y := u.of(form.x.of(d.x)), v.of(form.y.of(d.y))
-		for k, w := range terms {
-			a.Set(i, k, weights[i]*w.of(x, y))
-		}
-		b.SetVec(i, weights[i]*form.outer.back(d.k))
-	}
-	var qr mat.QR
-	qr.Factorize(a)
-	var c mat.VecDense
-	if err := qr.SolveVecTo(&c, false, b); err != nil {
-		return trial{}, false
-	}
-	var r mat.Dense
-	qr.RTo(&r)
-	left := 0.0
-	for i, d := range data {
-		residual := b.AtVec(i) - mat.Dot(a.RowView(i), &c)
-		rest := 1 - leverage(&r, a.RawRowView(i))
-		if rest < 1e-9 {
-			return trial{}, false // this point alone decides a coefficient
-		}
-		k := form.outer.of(form.outer.back(d.k) - residual/rest/weights[i])
-		left = math.Max(left, math.Abs(k-d.k)/d.k)
-	}
-	return trial{form, c.RawVector().Data, left}, !math.IsNaN(left) && !math.IsInf(left, 0)
-}
-
-// leverage is the diagonal element of the hat matrix of a row: the square of
-// what solves Rᵀ z = row.
-func leverage(r *mat.Dense, row []float64) float64 {
-	z, sum := make([]float64, len(row)), 0.0
-	for k := range row {
-		v := row[k]
-		for l := range k {
-			v -= float64(r.At(l, k) * z[l])
-		}
-		z[k] = v / r.At(k, k)
-		sum += float64(z[k] * z[k])
-	}
-	return sum
 }
 
 // roundingShare of the factor is what the rounding of coefficients may change.

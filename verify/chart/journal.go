@@ -2,7 +2,6 @@ package chart
 
 import (
 	"fmt"
-	"io"
 	"os"
 )
 
@@ -22,7 +21,7 @@ type Journal struct {
 // Open takes over what a file has of a table, and goes on with it; a file that is
 // not there, or empty, is begun. Its errors are *Fault.
 func Open(name string, t *Table) (j *Journal, err error) {
-	file, err := os.OpenFile(name, os.O_RDWR|os.O_CREATE, 0o644)
+	file, err := os.OpenFile(name, os.O_RDWR|os.O_CREATE|os.O_APPEND, 0o644)
 	if err != nil {
 		return nil, unreadable(name, err)
 	}
@@ -58,11 +57,13 @@ func (j *Journal) resume(data []byte) error {
 	for _, i := range f.indices {
 		j.note(i)
 	}
+	if !f.cut {
+		return nil
+	}
 	if err := j.file.Truncate(int64(f.whole)); err != nil {
 		return unreadable(j.name, err)
 	}
-	_, err = j.file.Seek(int64(f.whole), io.SeekStart)
-	return err
+	return nil
 }
 
 // note remembers whether the file has its points in the order of the table.

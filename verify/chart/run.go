@@ -118,7 +118,7 @@ func (q *Question) solve(ctx context.Context, p *Point) error {
 	}
 	f := &result.Findings[0]
 	p.Factor, p.Uncertainty = f.Computed.Factor.Value, f.Computed.Factor.Uncertainty
-	p.Status = Settled
+	p.Status, p.Why = Settled, strings.Join(f.Warnings, "; ")
 	if f.Verdict == verify.Undecided || math.IsNaN(p.Factor) || math.IsInf(p.Uncertainty, 0) {
 		p.Status, p.Why = Undecided, strings.Join(f.Because, "; ")
 	}

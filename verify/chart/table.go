@@ -51,7 +51,7 @@ type Point struct {
 	Factor      float64 // NaN where there is none
 	Uncertainty float64 // absolute
 	Status      Status
-	Why         string    // of a point that is not settled
+	Why         string    // why it is not settled; of one that is, what it does not tell
 	Handbook    []float64 // by book; NaN where it does not cover the shape
 }
 
