@@ -38,6 +38,8 @@ type Estimate struct {
 	Status      Status
 	Signals     Signals
 	Notes       []string // short, lower case, for people
+
+	ahead float64 // what the witness will come to with one order more, where that is known
 }
 
 // Signals are the sizes of the error that each piece of evidence speaks of, in

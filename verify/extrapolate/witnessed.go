@@ -58,7 +58,7 @@ func Witnessed(orders []int, values, wide, near []float64) Estimate {
 	e := Estimate{Value: values[n-1]}
 	if t.last(0) <= t.level && t.last(1) <= t.level && near[n-1] <= 1e3*t.level {
 		e.Status, e.Uncertainty = Converged, near[n-1]+2*t.level
-		e.Signals = Signals{Ladder: 2 * t.level, Witness: near[n-1]}
+		e.Signals, e.ahead = Signals{Ladder: 2 * t.level, Witness: near[n-1]}, near[n-1]
 		return e
 	}
 	seen := w.share(n - 1)
@@ -80,16 +80,22 @@ func Witnessed(orders []int, values, wide, near []float64) Estimate {
 	envelope := math.Max(t.last(0), t.last(1)*before)
 	e.Signals = Signals{Ladder: envelope*q/(1-q) + t.level, Witness: near[n-1]}
 	e.Uncertainty = e.Signals.Ladder + e.Signals.Witness
+	if e.ahead = near[n-1]; n > 3 {
+		e.ahead *= q
+	}
 	return e
 }
 
 // Confirmed adds the value that the same order gave on a second mesh, one that
 // shares no element with the first. Its distance is an error seen, not inferred:
 // what the rungs of one mesh have in common, such as a peak that they all miss,
-// shows in it alone. It is added to the bar. The witness, which falls behind the
-// error at high orders since it is read from the whole tensor and the value from
-// the strain within the surface, then counts as far as the two others bear it
-// out: no more than both together.
+// shows in it alone. It is added to the bar.
+//
+// Beside two sizes of the error itself the witness is a third opinion. It falls
+// behind the error, being read from the whole tensor and the value from the
+// strain within the surface: it counts as large as it will be with one order more,
+// once four rungs have shown the pace twice, in full before; and as far as the two
+// others bear it out, no more than both together.
 func (e Estimate) Confirmed(second float64) Estimate {
 	if math.IsNaN(e.Value) {
 		return e
@@ -97,7 +103,7 @@ func (e Estimate) Confirmed(second float64) Estimate {
 	s := &e.Signals
 	s.Second = math.Abs(second - e.Value)
 	seen := s.Ladder + s.Second
-	e.Uncertainty = seen + math.Min(s.Witness, seen)
+	e.Uncertainty = seen + math.Min(e.ahead, seen)
 	if math.IsNaN(e.Uncertainty) {
 		return nothing(Undecided, "the second mesh gives no number")
 	}

@@ -147,3 +147,28 @@ func TestWitnessedSeesGrowth(t *testing.T) {
 		}
 	}
 }
+
+// TestConfirmed: the distance of a second mesh is in the bar, the witness counts
+// no more than ladder and second mesh together, and a ladder without a value gets
+// none from a second mesh.
+func TestConfirmed(t *testing.T) {
+	orders, values, wide, near := rungs(4, 2, 0.05, 0.2, 3, alternate)
+	e := Witnessed(orders, values, wide, near)
+	for _, gap := range []float64{0, 1e-4, -1e-4, 0.3} {
+		c := e.Confirmed(e.Value + gap)
+		open := c.Signals.Ladder + math.Abs(gap)
+		if c.Value != e.Value || math.Abs(c.Signals.Second-math.Abs(gap)) > 1e-15 {
+			t.Errorf("gap %g: value %g, second %g", gap, c.Value, c.Signals.Second)
+		}
+		if c.Uncertainty < open || c.Uncertainty > 2*open || c.Uncertainty > open+e.Signals.Witness {
+			t.Errorf("gap %g: bar %g, ladder and second mesh %g", gap, c.Uncertainty, open)
+		}
+	}
+	if c := e.Confirmed(math.NaN()); c.Status.Settled() || !math.IsNaN(c.Value) {
+		t.Errorf("a second mesh without a number: %+v", c)
+	}
+	none := Witnessed(orders[:2], values[:2], wide[:2], near[:2]).Confirmed(2)
+	if !math.IsNaN(none.Value) || none.Status.Settled() {
+		t.Errorf("two rungs and a second mesh: %+v", none)
+	}
+}
