@@ -37,7 +37,9 @@ func (c *climb) checks(s *shape, out *Computed) []Check {
 	for i, plain := range c.part.Plain {
 		list = append(list, below("far-field stress in the "+plain.Name, farError(c.part, c.load, sol, i), farLimit))
 	}
-	list = append(list, below("distance to the factor of a second mesh, in bars of the first", apart(out.Factor), secondLimit))
+	if out.Factor.Status.Settled() {
+		list = append(list, below("distance to the factor of a second mesh, relative", out.Factor.Signals.Second/out.Factor.Value, out.apart))
+	}
 	for i := range list {
 		list[i].discretisation = true
 	}
@@ -70,16 +72,13 @@ func contraction(e Estimate) float64 {
 	return e.Order
 }
 
-// apart is how far the second mesh is from the first, in units of what the first
-// leaves open by its own account. Both meshes err by about as much, so that one
-// or two is what honest bars give; a mesh that misses the peak, or an end that
-// is too near, gives more.
-func apart(e Estimate) float64 {
-	open := e.Signals.Ladder + e.Signals.Witness
-	if open == 0 {
-		return 0
-	}
-	return e.Signals.Second / open
+// apartLimit is how far the second mesh may be from the first, relative. Both err
+// by about as much, so that one or two is what honest bars give, in units of what
+// the first leaves open by its own account; a mesh that misses the peak, or an end
+// that is too near, gives more. What is well within the target does not matter.
+func apartLimit(e Estimate, target float64) float64 {
+	open := (e.Signals.Ladder + e.Signals.Witness) / e.Value
+	return math.Max(secondLimit*open, target/2)
 }
 
 // plainSize is the width or diameter of a plain stretch.

@@ -50,7 +50,7 @@ func (c *climb) run(ctx context.Context) (Computed, *shape, error) {
 		if err != nil {
 			return out, s, err
 		}
-		if at == nil || better(out.Factor, best.Factor) {
+		if at == nil || out.supersedes(&best) {
 			best, at = out, s
 		}
 		if c.done(at, &best) || round == mostRounds || c.endless || out.Factor.Status == extrapolate.Diverging || c.spoiled(s, &out) {
@@ -64,12 +64,20 @@ func (c *climb) run(ctx context.Context) (Computed, *shape, error) {
 	}
 }
 
-// better tells that an estimate says more than another.
-func better(a, b Estimate) bool {
-	if a.Status.Settled() != b.Status.Settled() {
-		return a.Status.Settled()
+// supersedes tells that a later state of a ladder is to be reported in place of
+// an earlier one: it says more, or it contradicts. A settled ladder whose later
+// rungs come to nothing, as they do where rounding rules, stands as long as they
+// lie within its bar.
+func (c *Computed) supersedes(earlier *Computed) bool {
+	late, early := c.Factor, earlier.Factor
+	switch {
+	case !early.Status.Settled():
+		return true
+	case !late.Status.Settled():
+		last := c.Ladder[len(c.Ladder)-1].Factor
+		return !(math.Abs(last-early.Value) <= early.Uncertainty)
 	}
-	return !(a.Uncertainty >= b.Uncertainty)
+	return late.Uncertainty < early.Uncertainty || math.Abs(late.Value-early.Value) > early.Uncertainty
 }
 
 // orders climbs on one pair of meshes as far as that helps.
@@ -80,14 +88,17 @@ func (c *climb) orders(ctx context.Context, p *pair, round int) (Computed, *shap
 		first = firstOrder + 2 // low orders have nothing to tell on a fine mesh
 	}
 	s, err := c.begin(ctx, p, first, &out)
+	best := out
 	for err == nil && !c.done(s, &out) {
 		order := out.Ladder[len(out.Ladder)-1].Order + 1
 		if order > lastOrder || c.hopeless(out.Factor, order) || tooLarge(s, order, c.load) {
 			break
 		}
-		err = c.raise(ctx, p, s, order, &out)
+		if err = c.raise(ctx, p, s, order, &out); err == nil && (c.done(s, &out) || out.supersedes(&best)) {
+			best = out
+		}
 	}
-	return out, s, err
+	return best, s, err
 }
 
 // done tells that the target is met and that no check asks for a finer rung. The
@@ -160,7 +171,7 @@ func (c *climb) begin(ctx context.Context, p *pair, first int, out *Computed) (*
 		}
 		out.add(rungs[i])
 	}
-	return s, out.confirm(second)
+	return s, c.confirm(out, second)
 }
 
 // raise solves one order more on both meshes.
@@ -177,7 +188,7 @@ func (c *climb) raise(ctx context.Context, p *pair, s *shape, order int, out *Co
 		return err
 	}
 	out.add(next)
-	return out.confirm(second)
+	return c.confirm(out, second)
 }
 
 // beside does two things, at the same time if there are two workers.
@@ -241,13 +252,14 @@ func (c *Computed) add(r solvedRung) {
 }
 
 // confirm brings the estimates up to date with the ladder and the second mesh.
-func (c *Computed) confirm(second reading) error {
+func (c *climb) confirm(out *Computed, second reading) error {
 	if second.err != nil {
 		return second.err
 	}
-	c.estimate()
-	c.Factor = c.Factor.Confirmed(second.factor)
-	c.VonMises = c.VonMises.Confirmed(second.vonMises)
+	out.estimate()
+	out.Factor = out.Factor.Confirmed(second.factor)
+	out.VonMises = out.VonMises.Confirmed(second.vonMises)
+	out.apart = apartLimit(out.Factor, c.options.target())
 	return nil
 }
 

@@ -42,14 +42,16 @@ type Computed struct {
 	Last     *fem.Solution // of the last rung
 
 	peaks  []fem.SurfacePoint
+	apart  float64 // how far the second mesh may be, relative
 	checks []Check // of the last rung, nil where not yet made
 }
 
 // Converged tells that three pieces of evidence agree: the differences between
 // rungs shrink towards a limit, the traction left on the free surface shrinks
-// with them, and a second mesh gives the same factor within a few bars of both.
+// with them, and a second mesh gives the same factor, within a few bars of both or
+// within the target.
 func (c *Computed) Converged() bool {
-	return c.Factor.Status.Settled() && apart(c.Factor) <= secondLimit
+	return c.Factor.Status.Settled() && c.Factor.Signals.Second <= c.apart*c.Factor.Value
 }
 
 // State is what the ladder has come to, in words.
