@@ -4,6 +4,7 @@ import (
 	"fmt"
 	"math"
 	"strings"
+	"unicode/utf8"
 
 	"notchproof/render"
 	"notchproof/render/number"
@@ -107,10 +108,7 @@ func (s *chartQuestion) heading() string {
 // plotNote says what the chart is of, and how good it is.
 func (s *chartQuestion) plotNote(book int) string {
 	q := s.table.Question
-	nominal, _ := s.nominal()
-	words := []string{fmt.Sprintf("Nominal stress %s (%s)", nominal.Formula, nominal.Section)}
-	words = append(words, nominal.Notes...)
-	words = append(words, s.fixed()...)
+	words := append(s.conventions(), s.fixed()...)
 	widest := 0.0
 	for _, p := range s.table.Points {
 		if p.Status == chart.Settled {
@@ -121,13 +119,26 @@ func (s *chartQuestion) plotNote(book int) string {
 	if n := s.table.Count(chart.Undecided); n > 0 {
 		words = append(words, fmt.Sprintf("%d undecided and left out", n))
 	}
-	note := strings.Join(words, "; ")
+	note := "N" + strings.TrimPrefix(strings.Join(words, "; "), "n")
 	if book >= 0 {
 		b := s.table.Books[book]
 		note += fmt.Sprintf(". Bands: %s ± %s, in its range", b.ID, number.Percent(b.Accuracy, 0))
 	}
-	if s.fit != nil {
-		note += fmt.Sprintf(". Formula, within %s over the range of the points: %s", percentUp(s.fit.Error), strings.Join(q.Formula(s.fit), ", "))
+	if s.fit == nil {
+		return note
 	}
-	return note
+	formula := fmt.Sprintf(". Formula, within %s over the range of the points: %s", percentUp(s.fit.Error), strings.Join(q.Formula(s.fit), ", "))
+	if utf8.RuneCountInString(note+formula) > s.room() {
+		return note // half a formula is worse than none
+	}
+	return note + formula
+}
+
+// room is how many letters the note of a plot takes: six lines.
+func (s *chartQuestion) room() int {
+	const lines, letters, a4 = 6, 125, 210 // a line, on A4
+	if s.paper.mm == 0 {
+		return lines * letters
+	}
+	return int(lines * letters * s.paper.mm / a4)
 }

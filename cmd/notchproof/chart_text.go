@@ -4,16 +4,30 @@ import (
 	"fmt"
 	"io"
 	"math"
+	"slices"
 	"strings"
 
 	"notchproof/render/number"
-	"notchproof/scf"
 	"notchproof/verify/chart"
 )
 
-// nominal is the nominal stress of the first shape that can be drawn: its
-// formula is the same for all.
-func (s *chartQuestion) nominal() (scf.Nominal, bool) { return s.table.Nominal() }
+// conventions say what the factors are referred to, where that changes over the
+// chart with the point from which on each holds, and their notes.
+func (s *chartQuestion) conventions() (words []string) {
+	for k, c := range s.table.Conventions() {
+		text := fmt.Sprintf("nominal stress %s (%s)", c.Formula, c.Section)
+		if k > 0 {
+			text = "from " + s.table.Question.Place(c.X, c.Y) + " on " + text
+		}
+		words = append(words, text)
+		for _, note := range c.Notes {
+			if !slices.Contains(words, note) {
+				words = append(words, note)
+			}
+		}
+	}
+	return words
+}
 
 // fixed says what is the same all over the chart.
 func (s *chartQuestion) fixed() (words []string) {
@@ -39,9 +53,9 @@ func (s *chartQuestion) writeText(w io.Writer, st style) error {
 		fmt.Fprintf(&b, "%s\n", oneLine(s.title))
 	}
 	fmt.Fprintf(&b, "%s  %s\n", st.bold(q.Family.Name), strings.Join(s.fixed(), ", "))
-	nominal, _ := s.nominal()
-	fmt.Fprintf(&b, "\n%s, %s over %s, nominal stress %s (%s)\n", st.bold(string(q.Load)), q.Symbol(), q.Along.Variable, nominal.Formula, nominal.Section)
-	for _, note := range nominal.Notes {
+	conventions := s.conventions()
+	fmt.Fprintf(&b, "\n%s, %s over %s, %s\n", st.bold(string(q.Load)), q.Symbol(), q.Along.Variable, conventions[0])
+	for _, note := range conventions[1:] {
 		fmt.Fprintf(&b, "  %s\n", note)
 	}
 	s.tableText(&b)

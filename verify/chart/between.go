@@ -34,12 +34,6 @@ func (t *Table) Fit(ctx context.Context, within float64, e Effort) (*Fit, error)
 	return f, nil
 }
 
-// FitPoints is how many points Fit solves.
-func (t *Table) FitPoints() int {
-	more, others := t.between()
-	return len(more) + len(others)
-}
-
 // between places points in all cells between settled points of the grid, by
 // turns to fit to and to measure at, and on a third of the stretches of the
 // curves to measure at. Where in a cell a point lies changes from one to the
@@ -83,7 +77,7 @@ func (q *Question) inside(a, b, share float64) float64 {
 // measure finds how far the formula is from computed factors.
 func (f *Fit) measure(t *Table, fitted, others []Point) {
 	take := func(p Point) {
-		if p.Status != Settled || !f.Along.holds(p.X) || f.across && !f.Across.holds(p.Y) {
+		if p.Status != Settled || !f.xs.holds(p.X) || f.across && !f.ys.holds(p.Y) {
 			return
 		}
 		off := (math.Abs(f.Factor(p.X, p.Y)-p.Factor) + p.Uncertainty) / p.Factor

@@ -8,8 +8,7 @@ import (
 // A Fit is a formula for the factor over the range of a chart, and how far it is
 // from computed factors.
 type Fit struct {
-	Along, Across extent // Across: of the curves
-	Terms         int
+	Terms int
 	// Error is the largest share by which the formula may be off a computed
 	// factor, its bar included, rounded up to the digits that are shown; at Worst.
 	// It is measured at the points that the formula was fitted to and at others
@@ -19,6 +18,7 @@ type Fit struct {
 	Fitted, Between int     // how many points of each kind
 	OnCurves        float64 // the same as Error on the curves that are drawn
 
+	xs, ys       extent // ys: of the curves
 	form         form
 	across       bool // there are several curves
 	u, v         scaling
@@ -32,19 +32,18 @@ type datum struct{ x, y, k, weight float64 }
 // fit chooses the shortest form that is good to within a share of the factor, or
 // else as good as any, and fits it. nil: there are too few points for any form.
 func (q *Question) fit(points []Point, within float64) *Fit {
-	data, xs, ys := q.data(points)
-	if len(data) < 4 || len(xs) < 3 {
+	data, along, across := q.data(points)
+	if len(data) < 4 || len(along) < 3 {
 		return nil
 	}
-	f := &Fit{Along: nowhere(), Across: nowhere(), across: len(ys) > 1, Fitted: len(data)}
+	f := &Fit{xs: nowhere(), ys: nowhere(), across: len(across) > 1, Fitted: len(data)}
 	least := math.Inf(1)
 	for _, d := range data {
-		f.Along, f.Across, least = f.Along.with(d.x), f.Across.with(d.y), math.Min(least, d.k)
+		f.xs, f.ys, least = f.xs.with(d.x), f.ys.with(d.y), math.Min(least, d.k)
 	}
-	p, across := min(highestAlong, len(xs)-2), min(highestAcross, len(ys)-1)
 	var tried []trial
 	some := thinned(data)
-	for _, form := range forms(f.Along, f.Across, least, p, across) {
+	for _, form := range forms(f.xs, f.ys, least, min(highestAlong, len(along)-2), min(highestAcross, len(across)-1)) {
 		if t, ok := f.try(form, some); ok {
 			tried = append(tried, t)
 		}
@@ -132,8 +131,8 @@ func choose(tried []trial, within float64) trial {
 }
 
 func (f *Fit) scalings(form form) (u, v scaling) {
-	u = form.x.scaling(f.Along)
-	return u, form.y.scaling(f.Across)
+	u = form.x.scaling(f.xs)
+	return u, form.y.scaling(f.ys)
 }
 
 // roundingShare of the factor is what the rounding of coefficients may change.

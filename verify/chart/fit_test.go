@@ -116,9 +116,9 @@ func TestFormulaHolds(t *testing.T) {
 		}
 		points := a.Points
 		for range 6 {
-			p := q.point(between(f.Along.low, f.Along.high, random.Float64(), q.Along.Log), math.NaN())
+			p := q.point(between(f.xs.low, f.xs.high, random.Float64(), q.Along.Log), math.NaN())
 			if q.Curves != nil {
-				p.Y = between(f.Across.low, f.Across.high, random.Float64(), q.Curves.Log)
+				p.Y = between(f.ys.low, f.ys.high, random.Float64(), q.Curves.Log)
 			}
 			p.Status = Missing
 			if err := q.solve(context.Background(), &p); err != nil {
@@ -190,7 +190,7 @@ func TestLeverageIsTheHatMatrix(t *testing.T) {
 	}
 	data, _, _ := a.Question.data(a.Points)
 	form := form{outer: outers()[0], x: inners()[1], y: inners()[0], p: 3, full: true}
-	f := &Fit{Along: extent{0.02, 0.3}, Across: extent{0, 0}}
+	f := &Fit{xs: extent{0.02, 0.3}, ys: extent{0, 0}}
 	all, ok := f.try(form, data)
 	if !ok {
 		t.Fatal("no fit")

@@ -59,18 +59,18 @@ func nested(terms []string, name string) string {
 
 // Range writes where a fit holds.
 func (q *Question) Range(f *Fit) string {
-	text := q.Along.value(f.Along.low) + " ≤ " + q.Along.String() + " ≤ " + q.Along.value(f.Along.high)
+	text := q.Along.value(f.xs.low) + " ≤ " + q.Along.String() + " ≤ " + q.Along.value(f.xs.high)
 	if f.across {
-		text += ", " + q.Curves.value(f.Across.low) + " ≤ " + q.Curves.String() + " ≤ " + q.Curves.value(f.Across.high)
+		text += ", " + q.Curves.value(f.ys.low) + " ≤ " + q.Curves.String() + " ≤ " + q.Curves.value(f.ys.high)
 	}
 	return text
 }
 
 // Ranges are the same by variable.
 func (q *Question) Ranges(f *Fit) map[string][2]float64 {
-	list := map[string][2]float64{q.Along.String(): {f.Along.low, f.Along.high}}
+	list := map[string][2]float64{q.Along.String(): {f.xs.low, f.xs.high}}
 	if f.across {
-		list[q.Curves.String()] = [2]float64{f.Across.low, f.Across.high}
+		list[q.Curves.String()] = [2]float64{f.ys.low, f.ys.high}
 	}
 	return list
 }

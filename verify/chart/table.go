@@ -152,14 +152,24 @@ func (t *Table) Count(s Status) int {
 	return n
 }
 
-// Nominal is the nominal stress of the first shape that there is: its words are
-// those of all.
-func (t *Table) Nominal() (scf.Nominal, bool) {
+// A Convention is a nominal stress, and the first point that is referred to it.
+type Convention struct {
+	scf.Nominal
+	X, Y float64
+}
+
+// Conventions are the nominal stresses of the chart in the order of its points:
+// one, unless the shape changes so that another formula is needed.
+func (t *Table) Conventions() (list []Convention) {
 	q := t.Question
 	for _, p := range t.Points {
-		if p.Status != NotDrawn {
-			return q.Family.Nominal(q.Load, q.dims(p.X, p.Y), q.Options), true
+		if p.Status == NotDrawn {
+			continue
+		}
+		n := q.Family.Nominal(q.Load, q.dims(p.X, p.Y), q.Options)
+		if !slices.ContainsFunc(list, func(c Convention) bool { return c.Formula == n.Formula && c.Section == n.Section }) {
+			list = append(list, Convention{n, p.X, p.Y})
 		}
 	}
-	return scf.Nominal{}, false
+	return list
 }
