@@ -148,7 +148,7 @@ func (s *chartQuestion) fitText(b *strings.Builder, st style) {
 	}
 	fmt.Fprintf(b, "  within %s of what is computed, bars included: %d points that it was fitted to, %d others\n", percentUp(f.Error), f.Fitted, f.Between)
 	fmt.Fprintf(b, "  largest at %s; on the curves of the chart %s\n", q.Place(f.Worst.X, f.Worst.Y), percentUp(f.OnCurves))
-	b.WriteString("  it says nothing outside this range, nor where the chart has no points\n\n")
+	b.WriteString("  it says nothing outside this range, nor beside points that the chart does not have\n\n")
 }
 
 // percentUp writes an error that is rounded up already, or up to one digit.
