@@ -102,13 +102,13 @@ func TestFormulaHolds(t *testing.T) {
 	if os.Getenv("NOTCHPROOF_LONG") != "" {
 		fresh = 60
 		rows = append(rows,
-			{words(t, "shaft-shoulder", scf.Bending, "r/d=0.02:0.3", "D/d=1.1,1.5,2"), 0.01},
-			{words(t, "bar-collar", scf.Tension, "r/d=0.03:0.3", "L/d=0.1,0.2,0.4,1", "D/d=2"), 0.01},
-			{words(t, "bar-edge-notch", scf.Bending, "angle=0:120:9", "d/D=0.6,0.8", "r/D=0.05"), 0.01},
-			{words(t, "bar-hole", scf.Bending, "e/W=0:0.2", "d/W=0.1,0.2,0.3"), 0.01},
-			{words(t, "bar-ellipse", scf.Tension, "a/b=0.5:8", "a/W=0.05,0.15,0.25"), 0.01},
-			{words(t, "bar-hole", scf.Bending, "d/W=0.05:0.95", "e/W=0,0.1,0.2"), 0.1},
-			{words(t, "shaft-shoulder", scf.Tension, "r/d=0.02:0.3", "D/d=1.02,1.1,1.5,3"), 0.01},
+			row{words(t, "shaft-shoulder", scf.Bending, "r/d=0.02:0.3", "D/d=1.1,1.5,2"), 0.01},
+			row{words(t, "bar-collar", scf.Tension, "r/d=0.03:0.3", "L/d=0.1,0.2,0.4,1", "D/d=2"), 0.01},
+			row{words(t, "bar-edge-notch", scf.Bending, "angle=0:120:9", "d/D=0.6,0.8", "r/D=0.05"), 0.01},
+			row{words(t, "bar-hole", scf.Bending, "e/W=0:0.2", "d/W=0.1,0.2,0.3"), 0.01},
+			row{words(t, "bar-ellipse", scf.Tension, "a/b=0.5:8", "a/W=0.05,0.15,0.25"), 0.01},
+			row{words(t, "bar-hole", scf.Bending, "d/W=0.05:0.95", "e/W=0,0.1,0.2"), 0.1},
+			row{words(t, "shaft-shoulder", scf.Tension, "r/d=0.02:0.3", "D/d=1.02,1.1,1.5,3"), 0.01},
 		)
 	}
 	random := rand.New(rand.NewPCG(3, 9))
