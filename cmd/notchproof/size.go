@@ -33,15 +33,16 @@ it is while the dimension changes.
 
 The quantity is looked at over all sizes that can be drawn, from a thousandth of
 the part upwards and further where it must be, for it need not run one way: of
-several values that meet the limit the smallest is given and the others are
-named. Beside the answer stand other ways to meet the same limit, each computed:
+several values at which it falls to the limit the smallest is given, and all
+stretches that meet it are named. Beside the answer stand other ways to meet the same limit, each computed:
 they keep the radius that the part has now, or half of the answer where it has
 none, and --bare leaves them out.
 
 --json prints value with valueUncertainty in unit, factor with uncertainty,
 rounded, keeps (the stretches that meet the limit), scanned, alternatives (what,
-sizes, factor, uncertainty, meets, costs, length along the axis). value is null
-where nothing meets the limit, and best is what comes nearest.
+sizes, factor, uncertainty, meets, costs, length along the axis), unsettled (what
+else was tried, and why it came to nothing). value is null where nothing meets
+the limit, and best is what comes nearest.
 
 Exit status: 0 met, 1 no value meets it, 2 bad input, 3 undecided, 130 interrupted.
 `,
@@ -70,7 +71,15 @@ func runSize(c *call) (int, error) {
 	s.question.Progress = bar.tell
 	s.answer, err = s.question.Find(c.ctx)
 	if err == nil && !*bare {
-		s.alternatives, err = s.question.Alternatives(c.ctx, s.answer)
+		var all []sizing.Alternative
+		all, err = s.question.Alternatives(c.ctx, s.answer)
+		for _, a := range all {
+			if a.Decided {
+				s.alternatives = append(s.alternatives, a)
+			} else {
+				s.unsettled = append(s.unsettled, a)
+			}
+		}
 	}
 	bar.clear()
 	if err != nil {

@@ -23,6 +23,7 @@ type sizeQuestion struct {
 	question     *sizing.Question
 	answer       *sizing.Answer
 	alternatives []sizing.Alternative
+	unsettled    []sizing.Alternative // of which it can only be said why
 }
 
 // A goal is what the dimension must meet: the flags as they were written, and

@@ -32,6 +32,13 @@ type jsonSize struct {
 	Drawable         jsonInterval      `json:"drawable"`
 	Scanned          []jsonSized       `json:"scanned"`
 	Alternatives     []jsonAlternative `json:"alternatives"`
+	Unsettled        []jsonUnsettled   `json:"unsettled,omitempty"`
+}
+
+// A jsonUnsettled is an alternative that could not be settled.
+type jsonUnsettled struct {
+	What string `json:"what"`
+	Why  string `json:"why"`
 }
 
 type jsonLimit struct {
@@ -144,6 +151,9 @@ func writeSizeJSON(w io.Writer, s *sizeQuestion) error {
 	}
 	for _, x := range a.Scanned {
 		out.Scanned = append(out.Scanned, s.sized(x))
+	}
+	for _, u := range s.unsettled {
+		out.Unsettled = append(out.Unsettled, jsonUnsettled{u.What, oneLine(u.Why)})
 	}
 	encoder := json.NewEncoder(w)
 	encoder.SetEscapeHTML(false)

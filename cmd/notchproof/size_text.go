@@ -23,6 +23,7 @@ func writeSizeText(w io.Writer, s *sizeQuestion, st style) error {
 	s.answerText(&b, st)
 	s.searchText(&b, st)
 	s.alternativesText(&b, st)
+	s.unsettledText(&b, st)
 	b.WriteString("\n" + caution)
 	_, err := io.WriteString(w, b.String())
 	return err
@@ -190,6 +191,17 @@ func (s *sizeQuestion) alternativesText(b *strings.Builder, st style) {
 			line = st.bold(line)
 		}
 		fmt.Fprintf(b, "  %s\n", line)
+	}
+}
+
+// unsettledText says what else was tried, and why nothing is known of it.
+func (s *sizeQuestion) unsettledText(b *strings.Builder, st style) {
+	var words []string
+	for _, u := range s.unsettled {
+		words = append(words, u.What+" ("+oneLine(u.Why)+")")
+	}
+	if len(words) > 0 {
+		fmt.Fprintf(b, "  %s not settled: %s\n", st.weak("warning"), strings.Join(words, "; "))
 	}
 }
 

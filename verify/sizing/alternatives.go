@@ -1,6 +1,7 @@
 package sizing
 
 import (
+	"cmp"
 	"context"
 	"maps"
 	"math"
@@ -10,7 +11,8 @@ import (
 	"notchproof/verify/specimen"
 )
 
-// An Alternative is another way to meet the limit in the same envelope.
+// An Alternative is another way to meet the limit in the same envelope. One
+// that could not be settled is not Decided, has no sizes, and says Why.
 type Alternative struct {
 	What string // in words, without sizes
 	// Sizes are the dimensions that tell it from the answer.
@@ -41,6 +43,7 @@ type way struct {
 	sought  string
 	within  Interval // from the part as it is, towards what helps
 	guess   float64  // where to begin
+	below   float64  // what the size closes in on; 0: nothing
 	known   *Reading // the measure at within.From, nil where it is not known
 	draw    func(x float64) (*specimen.Part, error)
 	changes func(x float64) []Size
@@ -54,45 +57,39 @@ func (q *Question) Alternatives(ctx context.Context, a *Answer) ([]Alternative, 
 	if err != nil {
 		return nil, err
 	}
-	out, errs := make([]*Alternative, len(ways)), make([]error, len(ways))
+	list, errs := make([]Alternative, len(ways)), make([]error, len(ways))
 	var failed atomic.Bool
 	each(len(ways), q.workers(), func(i int) {
 		if failed.Load() {
 			return
 		}
-		if out[i], errs[i] = q.try(ctx, &ways[i]); errs[i] != nil {
+		if list[i], errs[i] = q.try(ctx, &ways[i]); errs[i] != nil {
 			failed.Store(true)
 		}
 	})
-	var list []Alternative
-	for i := range ways {
-		if errs[i] != nil {
-			return nil, errs[i]
-		}
-		if out[i] != nil {
-			list = append(list, *out[i])
-		}
-	}
-	return list, nil
+	return list, cmp.Or(errs...)
 }
 
-// try makes one alternative; nil where it cannot be drawn or judged.
-func (q *Question) try(ctx context.Context, w *way) (*Alternative, error) {
+// try makes one alternative.
+func (q *Question) try(ctx context.Context, w *way) (Alternative, error) {
 	sub := *q
 	sub.draw, sub.Workers, sub.Dimension = w.draw, 1, w.what
-	alt := &Alternative{What: w.what, Sizes: w.sizes, Sought: w.sought}
+	alt := Alternative{What: w.what, Sizes: w.sizes, Sought: w.sought}
 	var s Sample
 	var err error
 	if w.sought == "" {
-		s, err = sub.sample(ctx, w.within.From, sub.full())
+		s, err = sub.sample(ctx, w.within.From, sub.told())
 	} else {
 		s, alt.Bar, err = sub.local(ctx, w)
 		alt.Sizes = append(alt.Sizes, Size{w.sought, s.At})
 	}
-	if err != nil || !s.Decided {
-		return nil, err
+	if err != nil {
+		return Alternative{}, err
 	}
 	alt.Reading = s.Reading
+	if !s.Decided {
+		return Alternative{What: w.what, Reading: s.Reading}, nil
+	}
 	alt.Meets = s.Value-s.Uncertainty <= q.Limit
 	if p, err := w.draw(s.At); err == nil {
 		alt.Length = Length(p)
@@ -107,20 +104,22 @@ func (q *Question) try(ctx context.Context, w *way) (*Alternative, error) {
 // part as it is, towards the second. It begins at a guess and steps out until
 // the limit lies between two samples; where it never does the best is returned.
 func (q *Question) local(ctx context.Context, w *way) (Sample, float64, error) {
-	c := coordinate{}
-	s := &scan{}
+	c := coordinate{to: w.below}
+	s := &scan{closer: q.close()}
 	if w.known != nil {
 		s.add(q, c, Sample{w.within.From, *w.known})
 	}
-	from, to := c.of(w.within.From), c.of(w.within.To)
-	u, stride := c.of(w.guess), math.Copysign(0.2, to-from)
+	ends := Interval{c.of(w.within.From), c.of(w.within.To)}
+	u, stride := c.of(w.guess), math.Copysign(0.2, ends.To-ends.From)
+	if ends.From > ends.To {
+		ends = Interval{ends.To, ends.From}
+	}
 	before := -1
 	for range 12 {
-		sample, err := q.sample(ctx, c.back(u), q.rough())
+		sample, err := q.sure(ctx, s, c, c.back(u))
 		if err != nil {
 			return Sample{}, 0, err
 		}
-		s.add(q, c, sample)
 		if before, _ = s.crossing(); before >= 0 {
 			break
 		}
@@ -128,7 +127,7 @@ func (q *Question) local(ctx context.Context, w *way) (Sample, float64, error) {
 		if sample.Decided && sample.Value <= q.Limit {
 			next = u - stride
 		}
-		next = math.Max(math.Min(next, math.Max(from, to)), math.Min(from, to))
+		next = math.Max(math.Min(s.overshoot(u, next), ends.To), ends.From)
 		if next == u {
 			break
 		}
@@ -136,20 +135,57 @@ func (q *Question) local(ctx context.Context, w *way) (Sample, float64, error) {
 	}
 	switch {
 	case len(s.nodes) == 0:
-		return Sample{}, 0, nil
+		return s.undecided[0], 0, nil
 	case before < 0:
-		x, err := q.extreme(ctx, s, c, q.rough(), 1, 3)
-		if err != nil {
-			return Sample{}, 0, err
-		}
-		sample, err := q.sample(ctx, x, q.full())
-		return sample, 0, err
+		best, err := q.extreme(ctx, s, c, 1)
+		return best, 0, err
 	}
-	end, others, ok, err := q.polish(ctx, c, s, before, q.rough())
-	if err != nil || !ok || !end.Decided {
-		return Sample{At: end.At}, 0, err
+	end, others, ok, err := q.polish(ctx, c, s, before, ends)
+	if err == nil && !ok {
+		end.Reading = undecided(errJumps)
+	}
+	if err != nil || !end.Decided {
+		return end.Sample, 0, err
 	}
 	return end.Sample, q.bar(c, end, others), nil
+}
+
+// sure adds a sample to a scan, solved well enough to tell its side of the limit.
+func (q *Question) sure(ctx context.Context, s *scan, c coordinate, x float64) (Sample, error) {
+	sample, err := q.sample(ctx, x, q.rough())
+	if err != nil {
+		return sample, err
+	}
+	s.add(q, c, sample)
+	if err := q.firm(ctx, s, c, s.closer); err != nil {
+		return sample, err
+	}
+	for _, n := range s.nodes {
+		if n.At == x {
+			sample = n.Sample
+		}
+	}
+	return sample, nil
+}
+
+// overshoot is the place on the way from u to next and a little beyond at which
+// the chord through the two last nodes is past the limit by more than a single
+// solve may be wrong, next where they tell of none.
+func (s *scan) overshoot(u, next float64) float64 {
+	const past = 3 * scanAllowance
+	if len(s.nodes) != 2 {
+		return next
+	}
+	a, b := s.nodes[0], s.nodes[1]
+	if a.u == u {
+		a, b = b, a
+	}
+	slope := (b.f - a.f) / (b.u - a.u)
+	step := -(b.f + math.Copysign(past, b.f)) / slope
+	if far := 4 * (next - u); b.u == u && step*far > 0 && math.Abs(step) < math.Abs(far) {
+		return u + step
+	}
+	return next
 }
 
 // Length is how far the notch reaches along the axis; of a shoulder, whose face

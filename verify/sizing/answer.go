@@ -2,6 +2,7 @@ package sizing
 
 import (
 	"context"
+	"errors"
 	"math"
 
 	"notchproof/scf"
@@ -53,6 +54,9 @@ type Answer struct {
 	Skipped []Sample // places of the scan that could not be judged
 }
 
+// errJumps is why there is no answer where full ladders do not come to the limit.
+var errJumps = errors.New("the measure jumps at the limit")
+
 // Find answers the question. Its error is a *scf.DimensionError where the other
 // dimensions make no shape, and the context's when interrupted.
 func (q *Question) Find(ctx context.Context) (*Answer, error) {
@@ -73,7 +77,7 @@ func (q *Question) Find(ctx context.Context) (*Answer, error) {
 		a, err = q.search(ctx, kind, in, Effort{Target: scanTarget, Workers: q.workers()})
 	}
 	if err == nil && a == nil {
-		a = &Answer{Drawable: in, At: Sample{Reading: Reading{Why: "the measure jumps at the limit"}}}
+		a = &Answer{Drawable: in, At: Sample{Reading: undecided(errJumps)}}
 	}
 	return a, err
 }
@@ -85,55 +89,66 @@ func (q *Question) search(ctx context.Context, kind scf.Dimension, in Interval, 
 	if err != nil {
 		return nil, err
 	}
-	a := &Answer{Drawable: in, Skipped: s.undecided}
+	a := &Answer{Drawable: in}
 	if len(s.nodes) == 0 {
-		a.At = s.undecided[0]
+		a.At, a.Skipped = s.undecided[0], s.undecided
 		return a, nil
 	}
 	a.Searched = Interval{s.nodes[0].At, s.nodes[len(s.nodes)-1].At}
-	before, falling := s.crossing()
-	if before < 0 && s.nodes[0].f <= 0 && e.Order > 0 {
-		if err = q.confirmHighest(ctx, s, c, e); err != nil {
-			return nil, err
-		}
-		before, falling = s.crossing()
-	}
 	ok := true
-	switch {
-	case before >= 0:
+	if before, _ := s.crossing(); before < 0 {
+		ok, err = q.finish(ctx, a, s, c)
+	}
+	if before, falling := s.crossing(); err == nil && before >= 0 {
 		a.Falling = falling
-		ok, err = q.settle(ctx, kind, a, s, c, before, e)
-	case s.nodes[0].f <= 0:
-		ok, err = q.finish(ctx, a, s.nodes[0].At, Throughout)
-	default:
-		var x float64
-		if x, err = q.extreme(ctx, s, c, e, 1, 8); err == nil {
-			ok, err = q.finish(ctx, a, x, Beyond)
-		}
+		ok, err = q.settle(ctx, kind, a, s, c, before)
 	}
 	for _, n := range s.nodes {
 		a.Scanned = append(a.Scanned, n.Sample)
 	}
+	a.Skipped = s.undecided
 	if !ok {
 		return nil, err
 	}
 	return a, err
 }
 
-// finish solves the answer as well as was asked for; false where it lies on the
-// other side of the limit than the scan had it.
-func (q *Question) finish(ctx context.Context, a *Answer, x float64, o Outcome) (ok bool, err error) {
-	a.At, err = q.sample(ctx, x, q.full())
+// finish answers where all that is known lies on one side of the limit. That is
+// believed when the place that comes nearest has been solved in full; it may
+// turn out that the limit is passed there after all, which the scan then shows.
+func (q *Question) finish(ctx context.Context, a *Answer, s *scan, c coordinate) (ok bool, err error) {
+	if s.nodes[0].f > 0 {
+		a.Outcome = Beyond
+		a.At, err = q.extreme(ctx, s, c, 1)
+	} else {
+		const near = 0.05 // ten times what a single solve is good for
+		var top Sample
+		if s.nodes[s.best(-1)].f > -near {
+			if top, err = q.extreme(ctx, s, c, -1); err != nil {
+				return true, err
+			}
+			if !top.Decided {
+				a.At = top
+				return true, nil
+			}
+		}
+		a.Outcome = Throughout
+		a.At = s.nodes[0].Sample
+		if a.At.Rough {
+			a.At, err = q.sample(ctx, a.At.At, q.full())
+		}
+	}
 	if err != nil || !a.At.Decided {
+		a.Outcome = Undecided
 		return true, err
 	}
-	a.Outcome = o
-	return (o == Throughout) == (a.At.Value <= q.Limit), nil
+	return (a.Outcome == Throughout) == (a.At.Value <= q.Limit), nil
 }
 
 // settle finds the value in the bracket and rounds it.
-func (q *Question) settle(ctx context.Context, kind scf.Dimension, a *Answer, s *scan, c coordinate, before int, e Effort) (ok bool, err error) {
-	end, others, ok, err := q.polish(ctx, c, s, before, e)
+func (q *Question) settle(ctx context.Context, kind scf.Dimension, a *Answer, s *scan, c coordinate, before int) (ok bool, err error) {
+	first, last := max(0, before-1), min(before+2, len(s.nodes)-1)
+	end, others, ok, err := q.polish(ctx, c, s, before, Interval{s.nodes[first].u, s.nodes[last].u})
 	a.At = end.Sample
 	if err != nil || !ok || !end.Decided {
 		return ok, err
@@ -141,60 +156,25 @@ func (q *Question) settle(ctx context.Context, kind scf.Dimension, a *Answer, s 
 	a.Outcome, a.Bar = Met, q.bar(c, end, others)
 	a.Rounded, err = q.round(ctx, kind, a)
 	end.f = 0 // the limit itself
-	s.nodes = append(s.nodes, end)
-	s.add(q, c)
+	s.put(end)
 	a.Keeps = s.keeps(c)
 	return true, err
 }
 
 // bar is how well the value at the limit is known: the bar of the measure there,
-// and what it is still off the limit by, over its slope.
+// and what it is still off the limit by, over its slope. Where the curve
+// flattens towards an extremum the value is known less well than the slope says;
+// where the extremum itself is within the bar the value may as well be the one
+// beyond it.
 func (q *Question) bar(c coordinate, end node, others []node) float64 {
-	slope := math.Abs(steepness(end, others)) * end.Value / c.stretch(end.At)
-	return (end.Uncertainty + math.Abs(end.Value-q.Limit)) / slope
-}
-
-// confirmHighest solves the highest place of a scan in full, where it is so
-// near to the limit that a single solve may have missed that it lies above.
-func (q *Question) confirmHighest(ctx context.Context, s *scan, c coordinate, e Effort) error {
-	const near = 0.05
-	if s.nodes[s.best(-1)].f < -near {
-		return nil
+	slope, second := steepness(end, others)
+	slope, second = math.Abs(slope), math.Abs(second)
+	off := (end.Uncertainty + math.Abs(end.Value-q.Limit)) / end.Value
+	step := off / slope
+	if flat := 2 * second * off; second > 0 && flat < slope*slope {
+		step = 2 * off / (slope + math.Sqrt(slope*slope-flat))
+	} else if second > 0 {
+		step = (slope + math.Sqrt(slope*slope+flat)) / second
 	}
-	x, err := q.extreme(ctx, s, c, e, -1, 8)
-	if err != nil {
-		return err
-	}
-	sample, err := q.sample(ctx, x, q.full())
-	if err == nil && sample.Decided {
-		s.nodes[s.best(-1)] = q.node(c, sample)
-	}
-	return err
-}
-
-// extreme finds where the measure is lowest (sign 1) or highest (−1), when none
-// of the values known lies on the other side of the limit: by halves of the
-// bracket around the extreme one, until neither the value nor its neighbours
-// differ by more than the error of a single solve, or for a number of rounds.
-func (q *Question) extreme(ctx context.Context, s *scan, c coordinate, e Effort, sign float64, rounds int) (float64, error) {
-	i := s.best(sign)
-	for range rounds {
-		if i == 0 || i == len(s.nodes)-1 {
-			break // at the end of what can be drawn
-		}
-		low, old := s.nodes[i], s.nodes[i].f
-		more, err := q.samples(ctx, []float64{c.back((s.nodes[i-1].u + low.u) / 2), c.back((low.u + s.nodes[i+1].u) / 2)}, e)
-		if err != nil {
-			return 0, err
-		}
-		s.add(q, c, more...)
-		if i = s.best(sign); i == 0 || i == len(s.nodes)-1 {
-			break
-		}
-		flat := math.Max(sign*s.nodes[i-1].f, sign*s.nodes[i+1].f) - sign*s.nodes[i].f
-		if sign*(old-s.nodes[i].f) < 1e-3 && flat < 1e-3 {
-			break
-		}
-	}
-	return s.nodes[i].At, nil
+	return math.Max(c.back(end.u+step)-end.At, end.At-c.back(end.u-step))
 }

@@ -134,44 +134,61 @@ func (q *Question) edge(good, bad float64) float64 {
 	return good
 }
 
-// Sizes of features, relative to the part, between which the search begins. It
-// goes on below as long as all keep the limit and above as long as none does.
+// The search begins at features of a thousandth of the part and goes on below
+// as long as all keep the limit, above as long as none does. Beside an end that
+// another dimension sets a thousandth is left out: less than anybody makes.
 const (
 	leastSize = 1e-3
-	mostSize  = 10
-	almost    = 1e-3 // of the interval, left out before an end that another dimension sets
+	almost    = 1e-3
 )
 
-// grid is a coarse row of values that covers an interval: about two a decade
-// and a few towards an upper end that another dimension sets, where a net size
-// closes in on the gross one; evenly spaced where zero or both signs are allowed.
-func (q *Question) grid(kind scf.Dimension, in Interval) []float64 {
-	switch {
-	case kind.Signed:
-		return evenly(q.oneSide(in), 7)
-	case kind.Angle || kind.Zero:
+// grid is a coarse row of values that covers an interval, even in the
+// coordinate: about two for every factor of ten in the size, or in the distance
+// from an end that another dimension sets. The value given takes the place of the
+// one that is next to it.
+func (q *Question) grid(kind scf.Dimension, c coordinate, in Interval) []float64 {
+	if c.linear {
+		if kind.Signed {
+			in = q.oneSide(in)
+		}
 		return evenly(in, 7)
 	}
 	size := q.size()
-	from := math.Min(math.Max(in.From, leastSize*size), in.To)
-	to := math.Max(math.Min(in.To, mostSize*size), from)
-	n := max(2, int(math.Ceil(2*math.Log10(to/from)))+1)
-	var xs []float64
-	for i := range n {
-		xs = append(xs, from*math.Pow(to/from, float64(i)/float64(n-1)))
+	from, to := math.Max(in.From, leastSize*size), math.Min(in.To, mostSize*size)
+	if c.from > 0 {
+		from = c.from + almost*c.from
 	}
-	xs[n-1] = to
-	if to == in.To {
-		for _, share := range []float64{0.5, 0.1, 0.01} {
-			xs = append(xs, to-share*(to-from))
-		}
-		// What is left between the last value and the end is less than anybody makes.
-		xs[n-1] = to - almost*(to-from)
+	if c.to > 0 {
+		to = c.to - almost*(c.to-c.from)
 	}
-	if x, given := q.given(); given && in.From <= x && x <= in.To {
-		xs = append(xs, x)
+	if !(from < to) {
+		return []float64{in.From + (in.To-in.From)/2}
 	}
-	return apart(xs)
+	span := Interval{c.of(from), c.of(to)}
+	us := evenly(span, max(2, int(math.Ceil(2*(span.To-span.From)/math.Ln10))+1))
+	xs := make([]float64, len(us))
+	for i, u := range us {
+		xs[i] = c.back(u)
+	}
+	xs[0], xs[len(xs)-1] = from, to
+	if x, given := q.given(); given && from < x && x < to {
+		xs = placed(xs, us, x, c.of(x))
+	}
+	return xs
+}
+
+// placed puts a value into a row: for the nearest of the inner ones where that
+// is close, else between.
+func placed(xs, us []float64, x, u float64) []float64 {
+	step := us[1] - us[0]
+	i := int(math.Round((u - us[0]) / step))
+	if i > 0 && i < len(us)-1 && math.Abs(us[i]-u) < 0.3*step {
+		xs[i] = x
+		return xs
+	}
+	xs = append(xs, x)
+	slices.Sort(xs)
+	return slices.Compact(xs)
 }
 
 // oneSide is the half of an interval around zero on which the dimension is now,
@@ -191,12 +208,4 @@ func evenly(in Interval, n int) []float64 {
 		xs[i] = in.From + (in.To-in.From)*float64(i)/float64(n-1)
 	}
 	return xs
-}
-
-// apart sorts values and drops those that hardly differ from their neighbour
-// below; the last stays.
-func apart(xs []float64) []float64 {
-	slices.Sort(xs)
-	last := xs[len(xs)-1]
-	return slices.CompactFunc(xs, func(next, kept float64) bool { return next-kept <= 1e-3*math.Abs(next) && next != last })
 }

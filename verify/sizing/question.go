@@ -173,8 +173,14 @@ func (q *Question) samples(ctx context.Context, xs []float64, e Effort) ([]Sampl
 	return out, errors.Join(errs...)
 }
 
-// full is the effort of an answer, rough that of a scan.
+// full is the effort of an answer, told that of a part that is only described,
+// close that of a search for a root, rough that
+// of a scan.
 func (q *Question) full() Effort { return Effort{Target: q.target(), Workers: q.workers()} }
+func (q *Question) told() Effort { return Effort{Target: 3 * q.target(), Workers: q.workers()} }
+func (q *Question) close() Effort {
+	return Effort{Target: q.target(), Workers: q.workers(), Order: rootOrder}
+}
 func (q *Question) rough() Effort {
 	return Effort{Target: scanTarget, Workers: q.workers(), Order: scanOrder}
 }

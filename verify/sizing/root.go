@@ -3,40 +3,22 @@ package sizing
 import (
 	"context"
 	"math"
+	"slices"
 )
-
-// A coordinate is what the search moves in: the logarithm of a length, in
-// which factors are nearly straight lines, or the value itself where it may be
-// zero.
-type coordinate struct{ linear bool }
-
-func (c coordinate) of(x float64) float64 {
-	if c.linear {
-		return x
-	}
-	return math.Log(x)
-}
-
-func (c coordinate) back(u float64) float64 {
-	if c.linear {
-		return u
-	}
-	return math.Exp(u)
-}
-
-// stretch is dx/du.
-func (c coordinate) stretch(x float64) float64 {
-	if c.linear {
-		return 1
-	}
-	return x
-}
 
 // A node is a sample as the root finder sees it.
 type node struct {
 	u float64 // the dimension, in the coordinate of the search
 	f float64 // how far the measure is above the limit, logarithmic
 	Sample
+}
+
+// relative is the bar, or the allowance, of a node in the measure of f.
+func (n *node) relative() float64 { return n.Uncertainty / n.Value }
+
+// worse tells that a node was solved with less effort than that.
+func (n *node) worse(e Effort) bool {
+	return n.Rough && (e.Order == 0 || n.relative() > 1.5*e.allowance())
 }
 
 func (q *Question) node(c coordinate, s Sample) node {
@@ -55,8 +37,8 @@ const mostSteps = 50
 // side of the limit; beyond is a third point, on the far side of a as seen from
 // b, or a itself where there is none.
 //
-// It ends when the measure is at the limit to a quarter of its own bar: what
-// is closer is not known. A rough measure is taken to a share of the target. The
+// It ends when the measure is there: what is closer than its bar is not known. A
+// rough measure is taken to a share of the target. The
 // trail holds all points that were solved.
 func (q *Question) refine(ctx context.Context, c coordinate, e Effort, a, b, beyond node) (end node, trail []node, err error) {
 	for range mostSteps {
@@ -71,11 +53,11 @@ func (q *Question) refine(ctx context.Context, c coordinate, e Effort, a, b, bey
 		}
 		end = q.node(c, s)
 		trail = append(trail, end)
-		enough, closed := s.Uncertainty/4, 1e-12
+		enough, closed := q.there(s), 1e-12
 		if s.Rough {
-			enough, closed = rootResolution*q.target()*q.Limit, 1e-4
+			enough, closed = math.Abs(end.f) <= rootResolution*q.target(), 1e-4
 		}
-		if math.Abs(s.Value-q.Limit) <= enough || math.Abs(b.u-a.u) <= closed*math.Max(1, math.Abs(u)) {
+		if enough || math.Abs(b.u-a.u) <= closed*math.Max(1, math.Abs(u)) {
 			return end, trail, nil
 		}
 		if (end.f > 0) == (a.f > 0) {
@@ -88,28 +70,58 @@ func (q *Question) refine(ctx context.Context, c coordinate, e Effort, a, b, bey
 }
 
 // polish closes a bracket of a scan: by single solves first, then by full
-// ladders, which begin where those ended and go on by the slope. ok is false
-// when the ladders do not bear the bracket out. others are all points known.
-// Where the scan itself was one of full ladders so are the first steps.
-func (q *Question) polish(ctx context.Context, c coordinate, s *scan, before int, scanned Effort) (end node, others []node, ok bool, err error) {
+// ladders, which begin where those ended and go on by the slope, within an
+// interval of the coordinate. ok is false when the ladders do not bear the bracket out. others are all points known.
+func (q *Question) polish(ctx context.Context, c coordinate, s *scan, before int, within Interval) (end node, others []node, ok bool, err error) {
 	a, b, beyond := s.ends(before)
-	e := q.full()
-	if scanned.Order > 0 {
-		e.Order = rootOrder
+	for _, n := range []node{a, b} {
+		if !n.Rough && q.there(n.Sample) {
+			return n, s.nodes, true, nil
+		}
 	}
-	end, trail, err := q.refine(ctx, c, e, a, b, beyond)
-	others = append(trail, s.nodes...)
+	if end, ok = q.nearly(a, b); !ok {
+		var trail []node
+		end, trail, err = q.refine(ctx, c, s.closer, a, b, beyond)
+		others = append(trail, s.nodes...)
+	} else {
+		others = slices.Clone(s.nodes)
+	}
 	if err != nil || !end.Decided || !end.Rough {
 		return end, others, err == nil, err
 	}
-	slope, last := steepness(end, others), end
+	return q.confirm(ctx, c, end, others, within)
+}
+
+// nearly finds an end of a bracket at which a rough search would end.
+func (q *Question) nearly(ends ...node) (n node, ok bool) {
+	for _, n := range ends {
+		if n.Rough && !n.worse(q.close()) && math.Abs(n.f) <= rootResolution*q.target() {
+			return n, true
+		}
+	}
+	return n, false
+}
+
+// there tells that a full ladder is at the limit: nearer than half its bar, or
+// within it and nearer than matters.
+func (q *Question) there(s Sample) bool {
+	off := math.Abs(s.Value - q.Limit)
+	return off <= s.Uncertainty/2 || off <= math.Min(s.Uncertainty, rootResolution/2*q.target()*q.Limit)
+}
+
+// confirm goes on with full ladders from where single solves found the limit,
+// within an interval of the coordinate.
+func (q *Question) confirm(ctx context.Context, c coordinate, from node, known []node, within Interval) (end node, others []node, ok bool, err error) {
+	others = known
+	slope, _ := steepness(from, others)
+	u := from.u
 	for range 5 {
-		next, err := q.sample(ctx, c.back(last.u), q.full())
+		next, err := q.sample(ctx, c.back(u), q.full())
 		if err != nil || !next.Decided {
 			return node{Sample: next}, others, err == nil, err
 		}
 		end = q.node(c, next)
-		if math.Abs(end.Value-q.Limit) <= end.Uncertainty/4 {
+		if q.there(next) {
 			return end, others, true, nil
 		}
 		for _, o := range others { // the secant of full ladders where there are two
@@ -120,10 +132,9 @@ func (q *Question) polish(ctx context.Context, c coordinate, s *scan, before int
 		}
 		others = append([]node{end}, others...)
 		step := -end.f / slope
-		if !(math.Abs(step) < math.Abs(b.u-a.u)/4) {
+		if u = math.Min(math.Max(end.u+step, within.From), within.To); u == end.u {
 			break
 		}
-		last.u = math.Min(math.Max(end.u+step, s.nodes[0].u), s.nodes[len(s.nodes)-1].u)
 	}
 	return end, others, false, nil
 }
@@ -143,11 +154,11 @@ func fraction(a, b, c node) float64 {
 	return math.Min(math.Max(t, least), 1-least)
 }
 
-// steepness is df/du at a node, from the parabola through it and the two
-// nearest of the others that differ from it by more than the noise of the
-// meshes; where there is but one, or none, from the one that differs most.
-func steepness(at node, others []node) float64 {
-	const noise = 0.03 // several times the error of a single solve
+// steepness is df/du and d²f/du² at a node, from the parabola through it and
+// the two nearest of the others that differ from it by several times the noise of
+// the meshes; where there is but one, or none, the chord to the one that differs
+// most, and no second derivative.
+func steepness(at node, others []node) (slope, second float64) {
 	var x, y, most *node
 	for i := range others {
 		o := &others[i]
@@ -157,7 +168,7 @@ func steepness(at node, others []node) float64 {
 		if most == nil || math.Abs(o.f-at.f) > math.Abs(most.f-at.f) {
 			most = o
 		}
-		if math.Abs(o.f-at.f) < noise {
+		if math.Abs(o.f-at.f) < 3*(o.relative()+at.relative()) {
 			continue
 		}
 		gap := math.Abs(o.u - at.u)
@@ -168,12 +179,11 @@ func steepness(at node, others []node) float64 {
 			y = o
 		}
 	}
-	slope := func(p, q *node) float64 { return (p.f - q.f) / (p.u - q.u) }
 	switch {
 	case most == nil:
-		return 0
+		return 0, 0
 	case y == nil:
-		return slope(&at, most)
+		return (at.f - most.f) / (at.u - most.u), 0
 	}
-	return slope(&at, x) + slope(&at, y) - slope(x, y)
+	return parabola(at, *x, *y)
 }

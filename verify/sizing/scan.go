@@ -2,11 +2,7 @@ package sizing
 
 import (
 	"cmp"
-	"context"
-	"math"
 	"slices"
-
-	"notchproof/scf"
 )
 
 // A scan is what is known of the measure over the whole interval, by rising
@@ -14,93 +10,27 @@ import (
 type scan struct {
 	nodes     []node
 	undecided []Sample
+	closer    Effort // with which extrema and roots are sought
 }
 
+// add takes samples in, in the place of what was known at the same value.
 func (s *scan) add(q *Question, c coordinate, samples ...Sample) {
 	for _, x := range samples {
 		if !x.Decided || !(x.Value > 0) {
 			s.undecided = append(s.undecided, x)
 			continue
 		}
-		s.nodes = append(s.nodes, q.node(c, x))
+		s.put(q.node(c, x))
 	}
-	slices.SortFunc(s.nodes, func(a, b node) int { return cmp.Compare(a.u, b.u) })
-	s.nodes = slices.CompactFunc(s.nodes, func(a, b node) bool { return a.u == b.u })
 }
 
-// survey solves the part on the coarse grid, and closer where the measure has
-// an extremum that may reach over the limit unseen.
-func (q *Question) survey(ctx context.Context, kind scf.Dimension, in Interval, e Effort) (*scan, coordinate, error) {
-	c := coordinate{linear: kind.Angle || kind.Zero || kind.Signed}
-	s := &scan{}
-	samples, err := q.samples(ctx, q.grid(kind, in), e)
-	if err != nil {
-		return nil, c, err
+func (s *scan) put(n node) {
+	i, there := slices.BinarySearchFunc(s.nodes, n, func(a, b node) int { return cmp.Compare(a.At, b.At) })
+	if there {
+		s.nodes[i] = n
+		return
 	}
-	s.add(q, c, samples...)
-	if err := q.extend(ctx, s, c, in, e); err != nil {
-		return nil, c, err
-	}
-	for range 2 {
-		more := s.doubtful(c)
-		if len(more) == 0 {
-			break
-		}
-		samples, err := q.samples(ctx, more, e)
-		if err != nil {
-			return nil, c, err
-		}
-		s.add(q, c, samples...)
-	}
-	return s, c, nil
-}
-
-// extend goes on beyond the grid, decade by decade, down while all values keep
-// the limit and up while none does.
-func (q *Question) extend(ctx context.Context, s *scan, c coordinate, in Interval, e Effort) error {
-	for !c.linear && len(s.nodes) > 0 {
-		low, high := s.nodes[0], s.nodes[len(s.nodes)-1]
-		before, _ := s.crossing()
-		var x float64
-		switch {
-		case before >= 0:
-			return nil
-		case low.f <= 0 && low.At > in.From:
-			x = math.Max(low.At/10, in.From)
-		case low.f > 0 && high.At < in.To-2*almost*(in.To-in.From):
-			x = math.Min(high.At*10, in.To)
-		default:
-			return nil
-		}
-		next, err := q.sample(ctx, x, e)
-		if err != nil {
-			return err
-		}
-		if s.add(q, c, next); !next.Decided {
-			return nil
-		}
-	}
-	return nil
-}
-
-// doubtful lists the middles beside a local extremum that lies on one side of
-// the limit by no more than the measure changes from there to a neighbour: the
-// true extremum, which may lie between, could reach over.
-func (s *scan) doubtful(c coordinate) (xs []float64) {
-	n := s.nodes
-	for i := 1; i+1 < len(n); i++ {
-		low := n[i].f < n[i-1].f && n[i].f < n[i+1].f && n[i].f > 0
-		high := n[i].f > n[i-1].f && n[i].f > n[i+1].f && n[i].f < 0
-		if !low && !high {
-			continue
-		}
-		reach := math.Max(math.Abs(n[i-1].f-n[i].f), math.Abs(n[i+1].f-n[i].f))
-		if math.Abs(n[i].f) < reach {
-			xs = append(xs, c.back((n[i-1].u+n[i].u)/2), c.back((n[i].u+n[i+1].u)/2))
-		}
-	}
-	slices.Sort(xs)
-	return slices.Compact(xs)
+	s.nodes = slices.Insert(s.nodes, i, n)
 }
 
 // best is the node at which the measure is lowest (sign 1) or highest (−1).

@@ -111,7 +111,7 @@ func (l *wayList) largerNet() {
 		return
 	}
 	w, ok := l.q.familyWay("larger net size", l.q.Family, l.dims, l.keep(), "d", Interval{d, D - 0.01*(D-d)})
-	w.known, w.guess = l.known, D-0.25*(D-d)
+	w.known, w.guess, w.below = l.known, D-0.25*(D-d), D
 	w.changes = func(x float64) []Size { return []Size{{"d", x - d}} }
 	l.add(w, ok)
 }
