@@ -44,8 +44,7 @@ func (c *climb) checks(s *shape, out *Computed) []Check {
 		list[i].discretisation = true
 	}
 	for _, plain := range c.part.Plain {
-		length := math.Abs(plain.To-plain.From) / plainSize(c.part, plain)
-		list = append(list, above("length of the plain "+plain.Name+" in sizes", length, plainLimit))
+		list = append(list, above("length of the plain "+plain.Name+" in sizes", plainLength(c.part, plain), plainLimit))
 	}
 	return append(list,
 		below("share of the error left by one order more", contraction(out.Factor), extrapolate.WeakestShare),
@@ -79,6 +78,11 @@ func contraction(e Estimate) float64 {
 func apartLimit(e Estimate, target float64) float64 {
 	open := (e.Signals.Ladder + e.Signals.Witness) / e.Value
 	return math.Max(secondLimit*open, target/2)
+}
+
+// plainLength is the length of a plain stretch in units of its size.
+func plainLength(p *specimen.Part, plain specimen.Plain) float64 {
+	return math.Abs(plain.To-plain.From) / plainSize(p, plain)
 }
 
 // plainSize is the width or diameter of a plain stretch.

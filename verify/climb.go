@@ -21,7 +21,7 @@ const (
 	// uncertainty can be told.
 	enoughRungs = 3
 	// mostRounds bounds how often the mesh is refined where the error sits.
-	mostRounds = 5
+	mostRounds = 3
 )
 
 // A climb is the ladder of one part under one load. Beside the mesh of the
@@ -53,7 +53,7 @@ func (c *climb) run(ctx context.Context) (Computed, *shape, error) {
 		if at == nil || out.supersedes(&best) {
 			best, at = out, s
 		}
-		if c.done(at, &best) || round == mostRounds || c.endless || out.Factor.Status == extrapolate.Diverging || c.spoiled(s, &out) {
+		if c.done(at, &best) || round == mostRounds || c.endless || out.Factor.Status == extrapolate.Diverging || c.cramped() {
 			return best, at, nil
 		}
 		next, err := c.refined(p, s, &out)
@@ -119,13 +119,9 @@ func (c *climb) done(s *shape, out *Computed) bool {
 	return true
 }
 
-// spoiled tells that a check has failed which no finer rung mends: ends that are
-// too near, a part that rounding rules.
-func (c *climb) spoiled(s *shape, out *Computed) bool {
-	if out.checks == nil {
-		out.checks = c.checks(s, out)
-	}
-	return slices.ContainsFunc(out.checks, func(k Check) bool { return !k.Passed && !k.discretisation })
+// cramped tells that an end is too near for any mesh to mend it.
+func (c *climb) cramped() bool {
+	return slices.ContainsFunc(c.part.Plain, func(plain specimen.Plain) bool { return plainLength(c.part, plain) < plainLimit })
 }
 
 // hopeless tells that the orders which are left will not bring a settled ladder

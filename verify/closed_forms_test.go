@@ -33,8 +33,12 @@ func closedForms(t *testing.T) []*calibrationCase {
 	}
 	for _, nu := range []float64{0.2, 0.3} {
 		// Goodier 1933, J. Appl. Mech. 55, 39: spherical cavity on the axis.
-		p := readPart(t, fmt.Sprintf(`{"shape": {"model": "shaft", "outline": "M -3000 0 H -1 A 1 1 0 0 0 1 0 H 3000 V 1000 H -3000 Z", "nominal": {"x": -1500}}, "material": {"nu": %g}}`, nu))
-		list = append(list, &calibrationCase{group: "closed forms", part: p, load: scf.Tension, truth: (27 - 15*nu) / (2 * (7 - 5*nu))})
+		p := readPart(t, fmt.Sprintf(`{"shape": {"model": "shaft", "outline": "M -4000 0 H -1 A 1 1 0 0 0 1 0 H 4000 V 1000 H -4000 Z", "nominal": {"x": -1500}}, "material": {"nu": %g}}`, nu))
+		list = append(list, &calibrationCase{group: "closed forms", part: p, load: scf.Tension, truth: scf.Goodier(nu).EquatorMeridional})
+		// The same in torsion: u_θ = α r x (1 + a⁵/4ρ⁵) is harmonic and leaves the
+		// sphere free; the shear on it is 5/4 of that of the plain shaft at its radius.
+		p = readPart(t, fmt.Sprintf(`{"shape": {"model": "shaft", "outline": "M -4000 0 H -1 A 1 1 0 0 0 1 0 H 4000 V 1000 H -4000 Z", "nominal": {"x": 0, "fibre": 1}}, "material": {"nu": %g}}`, nu))
+		list = append(list, &calibrationCase{group: "closed forms", part: p, load: scf.Torsion, truth: 1.25})
 	}
 	return list
 }

@@ -13,7 +13,7 @@ import (
 
 // Work limits of a ladder.
 const (
-	mostOfRound = 400_000 // unknowns of a rung of the ladder, about 1 GB of factor
+	mostOfRound = 200_000 // unknowns of a rung of the ladder, about half a GB of factor
 	bulk        = 0.8     // share of the estimated influence on the factor that is refined
 	finer       = 0.35    // size of a refined element, as a share of what it was
 )
