@@ -9,19 +9,20 @@ func chartCommand() *command {
 		short: "compute a design chart, with a formula fitted to it",
 		long: `Solves the part over a range of one ratio of its dimensions, or of one dimension,
 with a curve for each value of another, and prints the factors with their bars
-and a formula fitted to them. Its error is stated as measured at points between
-the fitted ones too; it says nothing outside its range.
+and a formula fitted to them, the shortest that cross-validation finds close
+enough (--within). Its error is the largest at the fitted points and at others
+solved for that alone; it says nothing outside its range.
 
   notchproof chart shaft-shoulder --load bending --along r/d=0.02:0.3 --curves D/d=1.1,1.5,2 -o chart.png
-  notchproof chart bar-collar L/d=0.4 --load tension --along r/d=0.05:0.3:8 --curves D/d=1.5,2,3 -o collar.csv
-  notchproof chart shaft-groove d/D=0.8 r/D=0.05 --load torsion --along angle=0:120:9 --curves d/D=0.7,0.8
+  notchproof chart bar-collar D/d=2 --load tension --along r/d=0.05:0.3:8 --curves L/d=0.2,0.4,1 -o collar.csv
+  notchproof chart shaft-groove r/D=0.05 --load torsion --along angle=0:120:9 --curves d/D=0.7,0.8
 
 A range is low:high or low:high:points (12 points along, 4 curves unless said),
 by equal factors, for angles and offsets by equal steps; a list is a,b,c. What
 else the shape needs follows as dimensions or ratios. Of a part file the
 dimension that an axis gives, of a ratio the one above the line, need not be
-there and is replaced where it is.
-Points that cannot be drawn are left out and named.
+there and is replaced where it is. Points that cannot be drawn are left out and
+named.
 
 -o may be repeated: .png and .svg are the chart, with the best published fit as
 a faint band as wide as its accuracy; .csv is the table (--csv FILE too), whose

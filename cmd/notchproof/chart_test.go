@@ -79,6 +79,29 @@ func TestChartGoesOn(t *testing.T) {
 	}
 }
 
+// TestChartManual: the examples of the manual are good questions; they are
+// interrupted before any work is done.
+func TestChartManual(t *testing.T) {
+	t.Chdir(t.TempDir())
+	ctx, stop := context.WithCancel(context.Background())
+	stop()
+	examples := 0
+	for _, line := range strings.Split(chartCommand().long, "\n") {
+		words, ok := strings.CutPrefix(line, "  notchproof chart ")
+		if !ok || strings.HasPrefix(words, "--join") {
+			continue
+		}
+		examples++
+		var out, errs bytes.Buffer
+		if status := run(ctx, append([]string{"chart"}, strings.Fields(words)...), &out, &errs); status != exitInterrupted {
+			t.Errorf("%s: exit status %d\n%s", line, status, &errs)
+		}
+	}
+	if examples < 3 {
+		t.Errorf("%d examples", examples)
+	}
+}
+
 // TestChartGaps: a point that is undecided is a gap, named, and makes the exit
 // status that of an undecided check.
 func TestChartGaps(t *testing.T) {
