@@ -142,9 +142,6 @@ func (e extent) with(v float64) extent {
 
 func nowhere() extent { return extent{math.Inf(1), math.Inf(-1)} }
 
-// Holds tells that a value lies in the range.
-func (e extent) holds(v float64) bool { return v >= e.low && v <= e.high }
-
 // A scaling takes an inner variable to about −1 … 1: the least squares are well
 // conditioned, and few digits of the coefficients will do.
 type scaling struct{ middle, half float64 }
