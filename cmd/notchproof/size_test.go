@@ -7,6 +7,8 @@ import (
 	"path/filepath"
 	"strings"
 	"testing"
+
+	"notchproof/verify/sizing"
 )
 
 // TestSizeAndToleranceStatuses runs both commands to every exit status that a
@@ -117,6 +119,21 @@ func TestDeviations(t *testing.T) {
 		if isDeviation(word) {
 			t.Errorf("%s is taken for a tolerance", word)
 		}
+	}
+}
+
+// TestSizeNamesTheUnsettled: in one line, and only where there are any.
+func TestSizeNamesTheUnsettled(t *testing.T) {
+	var s sizeQuestion
+	var b strings.Builder
+	if s.unsettledText(&b, style{}); b.Len() > 0 {
+		t.Errorf("nothing to say, but %q", b.String())
+	}
+	for _, what := range []string{"undercut", "chamfer"} {
+		s.unsettled = append(s.unsettled, sizing.Alternative{What: what, Reading: sizing.Reading{Why: "too steep"}})
+	}
+	if s.unsettledText(&b, style{}); b.String() != "  warning not settled: undercut (too steep); chamfer (too steep)\n" {
+		t.Errorf("%q", b.String())
 	}
 }
 

@@ -5,6 +5,7 @@ import (
 	"context"
 	"maps"
 	"math"
+	"slices"
 	"sync/atomic"
 
 	"notchproof/scf"
@@ -59,15 +60,34 @@ func (q *Question) Alternatives(ctx context.Context, a *Answer) ([]Alternative, 
 	}
 	list, errs := make([]Alternative, len(ways)), make([]error, len(ways))
 	var failed atomic.Bool
-	each(len(ways), q.workers(), func(i int) {
+	order := longestFirst(ways)
+	each(len(ways), q.workers(), func(k int) {
 		if failed.Load() {
 			return
 		}
+		i := order[k]
 		if list[i], errs[i] = q.try(ctx, &ways[i]); errs[i] != nil {
 			failed.Store(true)
 		}
 	})
 	return list, cmp.Or(errs...)
+}
+
+// longestFirst is the order in which ways are begun: those with a size to seek,
+// which take several solves, before those of one, so that none is left alone at
+// the end.
+func longestFirst(ways []way) (order []int) {
+	for i := range ways {
+		order = append(order, i)
+	}
+	sought := func(i int) int {
+		if ways[i].sought == "" {
+			return 1
+		}
+		return 0
+	}
+	slices.SortStableFunc(order, func(a, b int) int { return cmp.Compare(sought(a), sought(b)) })
+	return order
 }
 
 // try makes one alternative.
@@ -79,6 +99,9 @@ func (q *Question) try(ctx context.Context, w *way) (Alternative, error) {
 	var err error
 	if w.sought == "" {
 		s, err = sub.sample(ctx, w.within.From, sub.told())
+		if err == nil && math.Abs(s.Value-q.Limit) <= s.Uncertainty { // on which side?
+			s, err = sub.sample(ctx, w.within.From, sub.full())
+		}
 	} else {
 		s, alt.Bar, err = sub.local(ctx, w)
 		alt.Sizes = append(alt.Sizes, Size{w.sought, s.At})

@@ -71,6 +71,34 @@ func TestAlternativesAreChecks(t *testing.T) {
 	}
 }
 
+// TestAlternativesThatFailSayWhy: what cannot be judged is listed with the reason.
+func TestAlternativesThatFailSayWhy(t *testing.T) {
+	q := question(t, "bar-shoulder", "r", scf.Dims{"D": 60, "d": 40, "r": 2}, scf.Tension, 1.8)
+	measure := q.Measure
+	q.Measure = func(ctx context.Context, p *specimen.Part, e sizing.Effort) (sizing.Reading, error) {
+		if p.Family == nil { // the undercut is no family
+			return sizing.Reading{Why: "too steep"}, nil
+		}
+		return measure(ctx, p, e)
+	}
+	list, err := q.Alternatives(context.Background(), find(t, q))
+	if err != nil {
+		t.Fatal(err)
+	}
+	failed := 0
+	for _, a := range list {
+		if !a.Decided {
+			failed++
+			if a.Why != "too steep" || a.Meets || len(a.Sizes) > 0 {
+				t.Errorf("%+v", a)
+			}
+		}
+	}
+	if failed != 1 || len(list) < 4 {
+		t.Errorf("%d of %d alternatives failed", failed, len(list))
+	}
+}
+
 // TestEllipticHoleInAWideBar: for a hole small in its bar the factor on the
 // gross section is 1 + 2a/b (Inglis 1913), on the net section (1 − 2a/W) times
 // that. The width counts beyond it with the square of 2a/W alone.
