@@ -44,8 +44,8 @@ type Answer struct {
 	// Falling tells that larger values keep the limit, so that At is the smallest
 	// that does; else smaller ones do and At is the largest.
 	Falling bool
-	// Keeps are the stretches that keep the limit, rising, as the scan shows them:
-	// ends other than At are interpolated, or those of the search.
+	// Keeps are the stretches that keep the limit, rising. Ends other than At rest
+	// on single solves, or are those of the search.
 	Keeps []Interval
 	// Rounded is At taken to the next drawing step on the safe side, nil where
 	// none keeps the limit.
@@ -155,10 +155,40 @@ func (q *Question) settle(ctx context.Context, kind scf.Dimension, a *Answer, s 
 	}
 	a.Outcome, a.Bar = Met, q.bar(c, end, others)
 	a.Rounded, err = q.round(ctx, kind, a)
+	if err == nil {
+		err = q.closeOthers(ctx, s, c, before)
+	}
 	end.f = 0 // the limit itself
 	s.put(end)
 	a.Keeps = s.keeps(c)
 	return true, err
+}
+
+// closeOthers finds the other places where the measure passes the limit, by
+// single solves alone.
+func (q *Question) closeOthers(ctx context.Context, s *scan, c coordinate, but int) error {
+	var found []node
+	for i := 0; i+1 < len(s.nodes); i++ {
+		if i == but || (s.nodes[i].f > 0) == (s.nodes[i+1].f > 0) {
+			continue
+		}
+		a, b, beyond := s.ends(i)
+		if a.f == 0 || b.f == 0 {
+			continue
+		}
+		end, _, err := q.refine(ctx, c, s.closer, a, b, beyond)
+		if err != nil {
+			return err
+		}
+		if end.Decided {
+			end.f = 0
+			found = append(found, end)
+		}
+	}
+	for _, n := range found {
+		s.put(n)
+	}
+	return nil
 }
 
 // bar is how well the value at the limit is known: the bar of the measure there,

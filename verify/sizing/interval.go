@@ -134,8 +134,8 @@ func (q *Question) edge(good, bad float64) float64 {
 	return good
 }
 
-// The search begins at features of a thousandth of the part and goes on below
-// as long as all keep the limit, above as long as none does. Beside an end that
+// The search begins at features of a thousandth of the part and ends at ten
+// times its size; it goes on where the limit may lie beyond. Beside an end that
 // another dimension sets a thousandth is left out: less than anybody makes.
 const (
 	leastSize = 1e-3

@@ -41,20 +41,21 @@ func (q *Question) survey(ctx context.Context, kind scf.Dimension, in Interval, 
 	return s, c, q.firm(ctx, s, c, s.closer, q.full())
 }
 
-// extend goes on beyond the grid, decade by decade, down while all values keep
-// the limit and up while none does.
+// extend goes on beyond the grid, decade by decade, while all values lie on one
+// side of the limit and come nearer to it towards that end.
 func (q *Question) extend(ctx context.Context, s *scan, c coordinate, in Interval, e Effort) error {
-	for !c.linear && len(s.nodes) > 0 {
-		low, high := s.nodes[0], s.nodes[len(s.nodes)-1]
+	for !c.linear && len(s.nodes) > 1 {
+		n := s.nodes
+		last := len(n) - 1
 		before, _ := s.crossing()
 		var x float64
 		switch {
 		case before >= 0:
 			return nil
-		case low.f <= 0 && low.At > in.From && c.from == 0:
-			x = math.Max(low.At/10, in.From)
-		case low.f > 0 && high.At < in.To && c.to == 0:
-			x = math.Min(high.At*10, in.To)
+		case math.Abs(n[0].f) < math.Abs(n[1].f) && n[0].At > in.From && c.from == 0:
+			x = math.Max(n[0].At/10, in.From)
+		case math.Abs(n[last].f) < math.Abs(n[last-1].f) && n[last].At < in.To && c.to == 0:
+			x = math.Min(n[last].At*10, in.To)
 		default:
 			return nil
 		}
