@@ -8,6 +8,7 @@ import (
 
 	"notchproof/mesh/outline"
 	"notchproof/render/number"
+	"notchproof/verify"
 	"notchproof/verify/specimen"
 )
 
@@ -167,18 +168,32 @@ func outside(b box, center point, radius float64) bool {
 	return distance(point{x, y}, center) > radius
 }
 
+// topEstimate is what is known of the largest value of the field that is drawn.
+// Of other fields than these two no ladder was climbed.
+func (p *plate) topEstimate() (verify.Estimate, bool) {
+	c := &p.finding.Computed
+	if p.plain() {
+		return c.Factor, true
+	}
+	mises := p.options.Field == FieldMises && p.options.Style != StyleFringe && len(p.options.Terms) == 0
+	return c.VonMises, mises && math.Abs(p.top-c.VonMises.Value) <= c.VonMises.Uncertainty
+}
+
 // peakTexts is the value at the peak, and the angle at which it sits.
 func (p *plate) peakTexts() []string {
 	e := p.finding.Computed.Factor
 	texts := []string{number.Decimal(p.top, 3)}
+	if len(p.options.Terms) == 0 {
+		texts[0] = "about " + number.Significant(p.top, 3)
+	}
 	if !e.Status.Settled() { // no number stands without a bound on its error
 		return []string{"no factor"}
 	}
 	if f, ok := p.look.(*fringes); ok {
 		texts[0] = "order " + f.order(p.top)
 	}
-	if p.plain() && e.Status.Settled() {
-		v, bar := number.UncertainParts(e.Value, e.Uncertainty)
+	if top, known := p.topEstimate(); known {
+		v, bar := number.UncertainParts(top.Value, top.Uncertainty)
 		texts = []string{v}
 		if bar != "" {
 			texts = append(texts, "± "+bar)

@@ -289,7 +289,11 @@ func comparisonTexts(f *verify.Finding) [][4]string {
 		say(who, c.Claim.Factor, c.Comparison)
 	}
 	for _, h := range f.Handbook {
-		say("handbook "+h.Value.ID, h.Value.Factor, h.Comparison)
+		who := "handbook "
+		if h.Value.Hint { // of a neighbouring shape
+			who = "hint "
+		}
+		say(who+h.Value.ID, h.Value.Factor, h.Comparison)
 	}
 	return lines
 }

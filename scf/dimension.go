@@ -45,13 +45,24 @@ func (n Dimension) check(v float64) error {
 	case n.Angle || v == 0 && (n.Zero || n.Sharp):
 		return nil
 	case v <= 0 && !n.Signed:
-		return fault("must be greater than zero", "")
+		return fault("must be greater than zero", n.zeroHint())
 	case math.Abs(v) > largestSize:
 		return fault("larger than "+short(largestSize), "choose a unit in which the part has ordinary numbers")
 	case math.Abs(v) < smallestSize:
 		return fault("smaller than "+short(smallestSize), "choose a unit in which the part has ordinary numbers")
 	}
 	return nil
+}
+
+// zeroHint says what may be written instead of a size below zero.
+func (n Dimension) zeroHint() string {
+	switch {
+	case n.Sharp:
+		return "give the size as drawn; 0 is a sharp corner, which has no factor"
+	case n.Zero:
+		return "give the size as drawn, or 0 where there is none"
+	}
+	return "give the size as drawn"
 }
 
 // checkDimensions holds the names and single values against the list of a

@@ -44,7 +44,7 @@ func holeBendingNominal(W, d, offset, small float64) Nominal {
 	// exceeds the ratio of the two linear stresses.
 	if ratio := edge / hole; ratio > small {
 		n.Warnings = append(n.Warnings, fmt.Sprintf(
-			"the strip's edge carries %.3g times the nominal stress: it is stressed higher than the hole unless the factor exceeds %.3g", ratio, ratio))
+			"the strip's edge carries %s times the nominal stress: it is stressed higher than the hole unless the factor exceeds %[1]s", three(ratio)))
 	}
 	return n
 }

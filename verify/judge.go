@@ -107,6 +107,8 @@ func (f *Finding) explain(who string, c Comparison) {
 	}
 	room := 100 * (c.Tolerance + e.Uncertainty) / e.Value
 	switch {
+	case c.Verdict == Agrees && share < 0.05:
+		f.because("%s is the computed factor to 0.1 %%, within the %.1f %% that the two are good for", who, room)
 	case c.Verdict == Agrees:
 		f.because("%s is %.1f %% %s than the computed factor, within the %.1f %% that the two are good for", who, share, side, room)
 	case c.Unsafe():

@@ -3,6 +3,7 @@ package verify
 import (
 	"fmt"
 	"math"
+	"strconv"
 
 	"gonum.org/v1/gonum/spatial/r2"
 
@@ -39,9 +40,18 @@ func (f *Finding) places(p *specimen.Part) {
 		}
 		found := peak(f.Load, c.Last, at, known)
 		c.Others = append(c.Others, found)
-		f.Warnings = append(f.Warnings, fmt.Sprintf("the %s is stressed higher than the notch: about %.3g times the nominal stress against %.3g",
-			found.Side, found.Factor, c.Factor.Value))
+		f.Warnings = append(f.Warnings, fmt.Sprintf("the %s is stressed higher than the notch: about %s times the nominal stress against %s",
+			found.Side, threeDigits(found.Factor), threeDigits(c.Factor.Value)))
 	}
+}
+
+// threeDigits writes a factor without an exponent: 1.99, 100000.
+func threeDigits(v float64) string {
+	if v < 1000 {
+		return strconv.FormatFloat(v, 'g', 3, 64)
+	}
+	step := math.Pow(10, math.Floor(math.Log10(v))-2)
+	return strconv.FormatFloat(math.Round(v/step)*step, 'f', 0, 64)
 }
 
 // highest is the most stressed place on a side off the notch. Where the side

@@ -35,8 +35,8 @@ func BySize(ctx context.Context, p *specimen.Part, l *specimen.Load, o StudyOpti
 		if err := b.next(k); err != nil {
 			return nil, err
 		}
-		if n := estimateUnknowns(len(b.made.mesh.Triangles), b.order, l.Model.Unknowns()); n > mostUnknowns {
-			return nil, fmt.Errorf("rung %d would have about %d unknowns, more than %d: ask for fewer rungs, larger elements or a lower order", k+1, n, mostUnknowns)
+		if err := b.affordable(k, rungs); err != nil {
+			return nil, err
 		}
 		if err := s.add(ctx, b.drawn, b.made, b.order, &w, o); err != nil {
 			return nil, err
@@ -89,6 +89,31 @@ func (b *bySize) next(k int) error {
 	return err
 }
 
+// affordable refuses a study that one of its rungs would make too large, before
+// the first of them is solved: halving makes four triangles of one.
+func (b *bySize) affordable(k, rungs int) error {
+	triangles := len(b.made.mesh.Triangles)
+	for rung := k; rung < rungs; rung++ {
+		n := estimateUnknowns(triangles, b.order, b.study.Load.Model.Unknowns())
+		if n > mostUnknowns {
+			return &beyondMachine{text: fmt.Sprintf("rung %d would have about %d unknowns, more than %d", rung+1, n, mostUnknowns)}
+		}
+		if b.blind { // the next mesh may be a new one
+			return nil
+		}
+		triangles *= 4
+	}
+	return nil
+}
+
+// A beyondMachine error: the study asks for more than the machine is given.
+type beyondMachine struct{ text string }
+
+func (e *beyondMachine) Error() string { return e.text }
+
+// Hint says what to do.
+func (e *beyondMachine) Hint() string { return "ask for fewer rungs, larger elements or a lower order" }
+
 // mostEdges bounds the elements along a notch that is meshed with one size.
 const mostEdges = 20_000
 
@@ -109,7 +134,7 @@ func evenShape(p *specimen.Part, size float64) (*shape, error) {
 		}
 	}
 	if edges > mostEdges {
-		return nil, fmt.Errorf("elements of %.3g along the notch would be %.0f, more than %d: ask for larger ones", size, edges, mostEdges)
+		return nil, &beyondMachine{text: fmt.Sprintf("elements of %.3g along the notch would be %.0f, more than %d", size, edges, mostEdges)}
 	}
 	m, err := mesh.Generate(p.Region, wish)
 	if err != nil {

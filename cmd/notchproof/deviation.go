@@ -32,24 +32,43 @@ func equalDeviation(text string) (string, bool) {
 	return "", false
 }
 
-// twoDeviations parts "+0.3/-0.1" at the bar before the second sign; a bar
-// without a sign after it belongs to a fraction of an inch.
+// twoDeviations parts "+0.3/-0.1" at the bar before the second sign. A zero needs
+// no sign, "+0.2/0" and "0/-0.2"; any other bar without a sign after it belongs to
+// a fraction of an inch.
 func twoDeviations(text string) (first, second string, ok bool) {
-	if !strings.HasPrefix(text, "+") && !strings.HasPrefix(text, "-") && !strings.HasPrefix(text, "−") {
+	at := strings.LastIndex(text, "/")
+	if at < 0 {
 		return "", "", false
 	}
-	for _, sign := range []string{"/-", "/+", "/−"} {
-		if i := strings.LastIndex(text, sign); i > 0 {
-			return text[:i], text[i+1:], true
-		}
+	first, second = strings.TrimSpace(text[:at]), strings.TrimSpace(text[at+1:])
+	if !hasSign(first) && !hasSign(second) {
+		return "", "", false
 	}
-	return "", "", false
+	return first, second, deviationAlone(first) && deviationAlone(second)
+}
+
+// deviationAlone: a deviation has a sign, or is nothing.
+func deviationAlone(text string) bool {
+	return hasSign(text) || nothing(text)
+}
+
+func nothing(text string) bool {
+	l, err := specimen.ParseLength(text)
+	if err != nil {
+		a, wrong := specimen.ParseAngle(text)
+		return wrong == nil && a == 0
+	}
+	return l.Value == 0
+}
+
+func hasSign(text string) bool {
+	return strings.HasPrefix(text, "+") || strings.HasPrefix(text, "-") || strings.HasPrefix(text, "−")
 }
 
 // loneDeviation is the fault of a word such as r=+0.2 after r=3mm.
 func loneDeviation(word string, before []string) error {
 	name, text, _ := strings.Cut(word, "=")
-	if !strings.HasPrefix(text, "+") && !strings.HasPrefix(text, "-") && !strings.HasPrefix(text, "−") {
+	if !hasSign(text) {
 		return nil
 	}
 	for _, b := range before {
@@ -79,6 +98,9 @@ func (s *shape) deviation(word string) (tolerance.Deviation, error) {
 	var err error
 	text = strings.TrimSpace(text)
 	if half, equal := equalDeviation(text); equal {
+		if hasSign(strings.TrimSpace(half)) {
+			return none, &inputError{text: quoted(word) + ": a sign behind ±", hint: "write r=±0.2mm, or both deviations, as in r=+0.3/-0.1mm"}
+		}
 		d.Upper, err = read(word, half, half)
 		d.Lower = -d.Upper
 	} else {

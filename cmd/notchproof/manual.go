@@ -30,6 +30,7 @@ func manual() string {
 		fmt.Fprintf(&b, "  %-9s %s\n", c.name, c.short)
 	}
 	b.WriteString("  help      the manual of a command: notchproof help check\n")
+	b.WriteString("  --version name and version of this build\n")
 	b.WriteString("\n" + caution)
 	return b.String()
 }
@@ -44,7 +45,13 @@ func (c *command) manual(flags *pflag.FlagSet) string {
 }
 
 func help(args []string, stdout, stderr io.Writer) int {
-	if len(args) == 0 {
+	if len(args) > 1 {
+		return fail(stderr, &inputError{
+			text: "help " + quoted(strings.Join(args, " ")) + ": one command at a time",
+			hint: "notchproof help " + oneLine(args[0]),
+		})
+	}
+	if len(args) == 0 || args[0] == "help" {
 		fmt.Fprint(stdout, manual())
 		return exitAgrees
 	}
@@ -67,9 +74,11 @@ func commandNames() string {
 	return strings.Join(names, ", ")
 }
 
-func nearestCommand(word string) string {
-	if n := specimen.Nearest(word, strings.Split(commandNames(), ", "), 3); n != "" {
-		return n
+// nearCommand is the end of a hint, empty where no command is near.
+func nearCommand(word string) string {
+	word = strings.ToLower(word)
+	if n := specimen.Nearest(word, strings.Split(commandNames(), ", "), min(3, len(word)/2)); n != "" {
+		return "; did you mean " + n + "?"
 	}
-	return "check"
+	return ""
 }

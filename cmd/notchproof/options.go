@@ -38,6 +38,11 @@ func (q *questions) loadFlag(f *pflag.FlagSet) {
 	f.StringSliceVar(&q.load, "load", nil, "tension, bending or torsion; all that the part carries when left out")
 }
 
+// oneLoadFlag is that of commands that look at one load.
+func (q *questions) oneLoadFlag(f *pflag.FlagSet) {
+	f.StringSliceVar(&q.load, "load", nil, "tension, bending or torsion; the first that the part carries when left out")
+}
+
 func (q *questions) targetFlag(f *pflag.FlagSet) {
 	f.StringVar(&q.target, "target", "0.1%", "uncertainty wished for, relative to the factor")
 }
@@ -103,6 +108,9 @@ func (q *questions) verify(loads []scf.Load) (verify.Options, error) {
 		}
 		if q.claimMesh != "" {
 			return o, &inputError{text: "--claim-mesh without --claim", hint: "give the factor itself with --claim"}
+		}
+		if q.flags.Changed("claim-tolerance") {
+			return o, &inputError{text: "--claim-tolerance without --claim", hint: "give the factor itself with --claim"}
 		}
 		return o, nil
 	}

@@ -59,5 +59,8 @@ func writeFile(name string, write func(io.Writer) error) (err error) {
 	if err = f.Close(); err != nil {
 		return err
 	}
-	return os.Rename(f.Name(), name)
+	if err = os.Rename(f.Name(), name); err != nil {
+		return &inputError{text: "-o " + quoted(name) + ": cannot be written", hint: "choose another name"}
+	}
+	return nil
 }

@@ -60,7 +60,7 @@ func runPicture(c *call) (int, error) {
 	var q questions
 	var d drawing
 	d.flags(c.flags)
-	q.loadFlag(c.flags)
+	q.oneLoadFlag(c.flags)
 	q.claimFlags(c.flags)
 	q.targetFlag(c.flags)
 	q.partFlags(c.flags)

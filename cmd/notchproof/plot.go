@@ -56,7 +56,7 @@ func runPlot(c *call) (int, error) {
 	var out figureFile
 	kind := c.flags.String("of", "section", "what is plotted: section, surface or ladder")
 	out.flags(c.flags, "the .png or .svg file to write")
-	q.loadFlag(c.flags)
+	q.oneLoadFlag(c.flags)
 	q.claimFlags(c.flags)
 	q.targetFlag(c.flags)
 	q.partFlags(c.flags)

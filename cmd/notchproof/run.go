@@ -5,6 +5,8 @@ import (
 	"errors"
 	"fmt"
 	"io"
+	"slices"
+	"strings"
 
 	"github.com/spf13/pflag"
 )
@@ -55,6 +57,9 @@ func run(ctx context.Context, args []string, stdout, stderr io.Writer) int {
 	switch args[0] {
 	case "help", "-h", "--help":
 		return help(args[1:], stdout, stderr)
+	case "--version":
+		fmt.Fprintln(stdout, edition())
+		return exitAgrees
 	}
 	for _, c := range commands() {
 		if c.name == args[0] {
@@ -63,7 +68,7 @@ func run(ctx context.Context, args []string, stdout, stderr io.Writer) int {
 	}
 	return fail(stderr, &inputError{
 		text: fmt.Sprintf("%s: no such command", quoted(args[0])),
-		hint: "the commands are " + commandNames() + "; did you mean " + nearestCommand(args[0]) + "?",
+		hint: "the commands are " + commandNames() + nearCommand(args[0]),
 	})
 }
 
@@ -93,5 +98,26 @@ func (c *call) parse() ([]string, error) {
 		}
 		return nil, &inputError{text: lowerFirst(err.Error()), hint: fmt.Sprintf("notchproof help %s lists the flags", c.flags.Name())}
 	}
-	return c.flags.Args(), nil
+	return c.flags.Args(), c.blank()
 }
+
+// blank refuses a flag that is given nothing. An empty variable of a script would
+// else leave its question unasked, and the answer would look like one to it.
+func (c *call) blank() (err error) {
+	c.flags.Visit(func(f *pflag.Flag) {
+		if slices.Contains(mayBeBlank, f.Name) || err != nil {
+			return
+		}
+		empty := f.Value.Type() == "string" && strings.TrimSpace(f.Value.String()) == ""
+		if list, ok := f.Value.(pflag.SliceValue); ok {
+			empty = strings.TrimSpace(strings.Join(list.GetSlice(), "")) == ""
+		}
+		if empty {
+			err = &inputError{text: "--" + f.Name + ` "": empty`, hint: "give it a value, or leave the flag out"}
+		}
+	})
+	return err
+}
+
+// mayBeBlank are words of the sheet, which may have none.
+var mayBeBlank = []string{"title", "by", "date", "claim-from"}

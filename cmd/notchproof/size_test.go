@@ -108,14 +108,15 @@ func TestDeviations(t *testing.T) {
 		"r=±0.2mm": {-0.2, 0.2}, "r=+-0.2mm": {-0.2, 0.2}, "r=+/-0.2": {-0.2, 0.2}, "r=±1/64in": {-0.396875, 0.396875},
 		"r=+0.3/-0": {0, 0.3}, "r=+0.3mm/-0.1mm": {-0.1, 0.3}, "r=+0.3/-0.1mm": {-0.1, 0.3}, "r=-0.1/+0.3": {-0.1, 0.3},
 		"r=+0.3/+0.1": {0.1, 0.3}, "r=-0.1/−0.3mm": {-0.3, -0.1}, "r=+1/64in/-0": {0, 0.396875},
-		"angle=±2": {-2, 2}, "angle=+2deg/-1": {-1, 2},
+		"r=+0.2/0": {0, 0.2}, "r=0/-0.2": {-0.2, 0}, "r=+0.2mm/0mm": {0, 0.2}, "r=±20µm": {-0.02, 0.02}, "r=+20um/0": {0, 0.02},
+		"angle=±2": {-2, 2}, "angle=+2/0": {0, 2}, "angle=+2deg/-1": {-1, 2},
 	} {
 		d, err := s.deviation(word)
 		if !isDeviation(word) || err != nil || math.Abs(d.Lower-want[0]) > 1e-12 || math.Abs(d.Upper-want[1]) > 1e-12 {
 			t.Errorf("%s: %+v, %v, want %v", word, d, err, want)
 		}
 	}
-	for _, word := range []string{"r=3mm", "e=-3", "r=1/64in", "r", "r=+1/64in", "r=-1-1/4in"} {
+	for _, word := range []string{"r=3mm", "e=-3", "r=1/64in", "r", "r=+1/64in", "r=-1-1/4in", "r=0/0", "r=0/3in", "r=+0.2/", "r=/0"} {
 		if isDeviation(word) {
 			t.Errorf("%s is taken for a tolerance", word)
 		}

@@ -35,6 +35,9 @@ of arc for errors of 5, 2 and 1 % at order 1 and 2, read at the nodes as usual.
 
   notchproof study bar-shoulder D=60mm d=40mm r=4mm --load tension --by size -o study.png
   notchproof study bar-shoulder D=60mm d=40mm r=0 -o corner.png
+
+Exit status: 0 the ladder has a limit, 2 bad input, 3 it has none or shows none
+yet, 130 interrupted.
 `,
 		run: runStudy,
 	}
@@ -48,7 +51,7 @@ func runStudy(c *call) (int, error) {
 	rungs := c.flags.Int("rungs", 0, "number of meshes in a study by size, 3 to 6 (default 4)")
 	size := c.flags.String("size", "", "length of the elements at the notch that a study by size begins with, as in 1mm")
 	out.flags(c.flags, "write the plot to this .png or .svg file")
-	q.loadFlag(c.flags)
+	q.oneLoadFlag(c.flags)
 	q.partFlags(c.flags)
 	args, err := c.parse()
 	if err != nil {

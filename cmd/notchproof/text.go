@@ -170,7 +170,7 @@ func checksText(b *strings.Builder, checks []verify.Check, s style) {
 	fmt.Fprintf(b, "  checks     %d of %d passed\n", passed, len(checks))
 	for _, c := range checks {
 		if !c.Passed {
-			fmt.Fprintf(b, "             %s %s: %.3g, limit %.3g\n", s.bad("failed"), c.Name, c.Value, c.Limit)
+			fmt.Fprintf(b, "             %s %s: %s, limit %s\n", s.bad("failed"), c.Name, number.Compact(c.Value, 3), number.Compact(c.Limit, 3))
 		}
 	}
 }

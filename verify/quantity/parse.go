@@ -99,11 +99,17 @@ func (k kind) odd(number, name string) (reason, hint string) {
 		return quote(name) + " is a mass", hint
 	}
 	for _, u := range k.units {
-		if strings.EqualFold(folded(u.name), folded(name)) {
+		if strings.EqualFold(folded(u.name), folded(name)) && !milli(u.name, name) {
 			return "unknown unit " + quote(name), "did you mean " + number + u.name + "?"
 		}
 	}
 	return "unknown unit " + quote(name), hint
+}
+
+// milli: of a force or a moment mN is a thousandth and MN a million, and neither
+// is a slip for the other. Nobody means millipascals.
+func milli(unit, written string) bool {
+	return strings.HasPrefix(unit, "MN") && strings.HasPrefix(written, "m")
 }
 
 // word is the kind without its article.

@@ -4,9 +4,11 @@ import (
 	"errors"
 	"math"
 	"math/big"
+	"slices"
 	"strconv"
 	"strings"
 	"unicode"
+	"unicode/utf8"
 )
 
 // An InputError says what is wrong with something the user wrote. Error gives
@@ -39,15 +41,23 @@ type Length struct {
 	Text  string // as written
 }
 
-// units in tenths of a millimetre, whole numbers all. The inch is 25.4 mm
-// exactly (international yard and pound agreement, 1959).
+// units in micrometres, whole numbers all. The inch is 25.4 mm exactly
+// (international yard and pound agreement, 1959).
 var units = []struct {
 	name   string
-	tenths int64
-}{{"mm", 10}, {"cm", 100}, {"m", 10000}, {"in", 254}}
+	micros int64
+}{{"mm", 1000}, {"cm", 10_000}, {"m", 1_000_000}, {"in", 25_400}}
 
 // unitNames lists the units for hints.
 const unitNames = "mm, cm, m or in"
+
+// micrometres are read, as tolerances are often given in them, and become
+// millimetres: U+00B5, U+03BC and what a keyboard without either has.
+var micrometres = []string{"\u00b5m", "\u03bcm", "um"}
+
+// otherUnits are lengths too. A hint that took them for a slip would be wrong by
+// powers of ten.
+var otherUnits = []string{"km", "hm", "dm", "ft", "yd", "mi", "nmi", "mil", "thou"}
 
 // alsoWritten are spellings that are not accepted but understood in a hint.
 var alsoWritten = map[string]string{
@@ -56,17 +66,17 @@ var alsoWritten = map[string]string{
 	"centimetre": "cm", "centimeter": "cm", "metre": "m", "meter": "m", "metres": "m", "meters": "m",
 }
 
-func tenthsOf(unit string) int64 {
+func microsOf(unit string) int64 {
 	for _, u := range units {
 		if u.name == unit {
-			return u.tenths
+			return u.micros
 		}
 	}
 	return 0
 }
 
 // ParseLength reads a decimal number with an optional unit (60mm, 0.125 in,
-// 1e3mm, 60) or inches with a fraction (3/8in, 1-3/8in, 1 3/8 in). A sign is
+// 1e3mm, 20µm, 60) or inches with a fraction (3/8in, 1-3/8in, 1 3/8 in). A sign is
 // read; whether it makes sense is the caller's to say. What the number means
 // must be beyond doubt: no decimal comma, no separators, no hexadecimal, no
 // value beyond a float64. The error is an *InputError.
@@ -78,7 +88,8 @@ func ParseLength(s string) (Length, error) {
 	if number == "" {
 		return refuse("no number", "write a number with an optional unit, such as 60mm or 0.125in")
 	}
-	if unit != "" && tenthsOf(unit) == 0 {
+	micro := slices.Contains(micrometres, unit)
+	if unit != "" && microsOf(unit) == 0 && !micro {
 		return refuse("unknown unit "+quote(unit), unitHint(number, unit))
 	}
 	value, problem := parseNumber(number)
@@ -91,6 +102,9 @@ func ParseLength(s string) (Length, error) {
 	}
 	if problem != nil {
 		return refuse(problem.Reason, strings.ReplaceAll(problem.Hint, "{unit}", unit))
+	}
+	if micro {
+		value, unit = scaled(value, big.NewRat(1, 1000)), "mm"
 	}
 	return Length{Value: value, Unit: unit, Text: s}, nil
 }
@@ -105,6 +119,7 @@ func splitUnit(s string) (number, unit string) {
 
 const (
 	reasonFraction = "fraction of something that is not inches"
+	ordinaryHint   = "choose a unit in which the part has ordinary numbers"
 	decimalHint    = "write decimal digits with a point, such as 12.5"
 )
 
@@ -124,11 +139,11 @@ func parseNumber(s string) (float64, *InputError) {
 	mantissa, _, _ := strings.Cut(strings.ToLower(s), "e")
 	switch {
 	case errors.Is(err, strconv.ErrRange):
-		return 0, &InputError{Reason: "number too large"}
+		return 0, &InputError{Reason: "number too large", Hint: ordinaryHint}
 	case err != nil:
 		return 0, &InputError{Reason: "not a number", Hint: decimalHint}
 	case x == 0 && strings.Trim(mantissa, "+-0.") != "":
-		return 0, &InputError{Reason: "number too small"}
+		return 0, &InputError{Reason: "number too small", Hint: ordinaryHint}
 	case x == 0:
 		x = 0 // no minus zero
 	}
@@ -154,10 +169,10 @@ func unitHint(number, unit string) string {
 		names[i] = u.name
 	}
 	best := Nearest(lower, names, 1) // more than one slip away is no longer a slip
-	if best == "" {
-		return "lengths are in " + unitNames + ", or plain numbers"
+	if best == "" || utf8.RuneCountInString(lower) < 2 || slices.Contains(otherUnits, lower) {
+		return "lengths are in µm, " + unitNames + ", or plain numbers"
 	}
-	return "did you mean " + number + best + "? lengths are in " + unitNames
+	return "did you mean " + number + best + "? lengths are in µm, " + unitNames
 }
 
 // In converts to another unit. The decimal number is multiplied as it reads and
@@ -167,16 +182,21 @@ func (l Length) In(unit string) float64 {
 	if l.Unit == unit {
 		return l.Value
 	}
-	from, to := tenthsOf(l.Unit), tenthsOf(unit)
+	from, to := microsOf(l.Unit), microsOf(unit)
 	if from == 0 || to == 0 {
 		panic("specimen: conversion between a named and an unnamed unit")
 	}
 	if math.IsNaN(l.Value) || math.IsInf(l.Value, 0) {
 		return l.Value
 	}
-	x, _ := new(big.Rat).SetString(strconv.FormatFloat(l.Value, 'g', -1, 64))
-	converted, _ := x.Mul(x, big.NewRat(from, to)).Float64()
-	return converted
+	return scaled(l.Value, big.NewRat(from, to))
+}
+
+// scaled multiplies a finite number as it reads and rounds once.
+func scaled(v float64, by *big.Rat) float64 {
+	x, _ := new(big.Rat).SetString(strconv.FormatFloat(v, 'g', -1, 64))
+	product, _ := x.Mul(x, by).Float64()
+	return product
 }
 
 func (l Length) number() string { return strconv.FormatFloat(l.Value, 'g', -1, 64) }

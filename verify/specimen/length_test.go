@@ -27,6 +27,18 @@ func TestParseLength(t *testing.T) {
 	}
 }
 
+// Micrometres are read in every spelling and become millimetres, exactly.
+func TestMicrometres(t *testing.T) {
+	for _, text := range []string{"20\u00b5m", "20 \u03bcm", "20um"} {
+		if l, err := ParseLength(text); err != nil || l.Value != 0.02 || l.Unit != "mm" {
+			t.Errorf("%s: %+v, %v, want 0.02 mm", text, l, err)
+		}
+	}
+	if l, err := ParseLength("3um"); err != nil || l.In("mm") != 0.003 {
+		t.Errorf("3um: %v mm, %v", l.In("mm"), err)
+	}
+}
+
 func TestParseLengthRefuses(t *testing.T) {
 	for _, c := range []struct{ text, reason, hint string }{
 		{"", "no number", "60mm"}, {"  ", "no number", ""}, {"mm", "no number", ""}, {"NaN", "no number", ""}, {"nan mm", "no number", ""},
@@ -57,6 +69,12 @@ func TestParseLengthRefuses(t *testing.T) {
 			t.Errorf("%q: error %q, hint %q", c.text, e.Error(), e.Hint)
 		}
 	}
+	for _, far := range []string{"5km", "5dm", "5%", "5k", "5ft", "5mil"} {
+		var e *InputError
+		if _, err := ParseLength(far); !errors.As(err, &e) || strings.Contains(e.Hint, "did you mean") {
+			t.Errorf("%s: %v, with a guess that is wrong by powers of ten", far, e)
+		}
+	}
 	_, err := ParseLength(strings.Repeat("9", 50) + "\nfurlong")
 	if got := err.Error(); len(got) > 130 || strings.Contains(got, "\n") {
 		t.Errorf("error is not one short line: %q", got)
@@ -78,7 +96,7 @@ func FuzzParseLength(f *testing.F) {
 			}
 			return
 		}
-		if math.IsNaN(l.Value) || math.IsInf(l.Value, 0) || l.Unit != "" && tenthsOf(l.Unit) == 0 {
+		if math.IsNaN(l.Value) || math.IsInf(l.Value, 0) || l.Unit != "" && microsOf(l.Unit) == 0 {
 			t.Fatalf("%q: %+v", s, l)
 		}
 		if _, err := ParseAngle(s); err == nil && l.Unit != "" {

@@ -4,6 +4,7 @@ import (
 	"fmt"
 	"math"
 	"strconv"
+	"strings"
 
 	"gonum.org/v1/gonum/spatial/r2"
 
@@ -213,7 +214,11 @@ func coordinate(name string, x float64, unit string) string {
 	if unit != "" {
 		unit = " " + unit
 	}
-	return name + " = " + text(x) + unit
+	number := text(x)
+	if size, negative := strings.CutPrefix(number, "-"); negative {
+		number = "−" + size
+	}
+	return name + " = " + number + unit
 }
 
 func point(q r2.Vec, unit string) string {

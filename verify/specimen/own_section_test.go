@@ -42,7 +42,7 @@ func TestNominalStressOfOutlines(t *testing.T) {
 		{"hole off the middle", strip, scf.Tension, 1. / 44, 1. / 60, 20, middle, "x = 0", ""},
 		{"hole off the middle", strip, scf.Bending, (20 - middle) / inertia, 6. / 3600, 20, middle, "x = 0", "y = 20, the end of the section nearest to the notch"},
 		{"gross line", strip + `, "forceLine": "gross"`, scf.Tension, 1. / 44, 1. / 60, 20, 0, "x = 0", "the larger end section, y = 0"},
-		{"given fibre", strip + `, "nominal": {"x": 0, "fibre": -30}`, scf.Bending, (30 + middle) / inertia, 6. / 3600, -30, middle, "as given", "y = -30, as given"},
+		{"given fibre", strip + `, "nominal": {"x": 0, "fibre": -30}`, scf.Bending, (30 + middle) / inertia, 6. / 3600, -30, middle, "as given", "y = −30, as given"},
 		{"given section", strip + `, "nominal": {"x": 100, "fibre": 30}`, scf.Bending, 6. / 3600, 6. / 3600, 30, 0, "x = 100", ""},
 		{"ligament", strip + `, "nominal": {"from": [0, 31], "to": [0, 19]}`, scf.Tension, 1. / 10, 1. / 60, 20, 25, "from (0, 31) to (0, 19)", ""},
 		{"slanting ligament", strip + `, "nominal": {"from": [0, 12], "to": [18, 30]}`, scf.Tension, 1 / (18*math.Sqrt2 - 8), 1. / 60, 12 + 8/math.Sqrt2, (30 + 12 + 8/math.Sqrt2) / 2, "", ""},

@@ -2,8 +2,8 @@ package specimen
 
 import (
 	"bytes"
-	"fmt"
 	"slices"
+	"strings"
 
 	"notchproof/scf"
 )
@@ -181,7 +181,7 @@ func (d *document) load(n *node, among []scf.Load) (scf.Load, error) {
 		}
 		names = append(names, string(l))
 	}
-	hint := fmt.Sprintf("the loads here are %v", names)
+	hint := "the loads here are " + strings.Join(names, ", ")
 	if near := Nearest(s, names, 3); near != "" {
 		hint = "did you mean " + near + "?"
 	}

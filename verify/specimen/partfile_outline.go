@@ -65,7 +65,7 @@ func (d *document) model(n *node) (scf.Kind, error) {
 
 func (d *document) unit(n *node) (string, error) {
 	s, err := d.text(n)
-	if err == nil && tenthsOf(s) == 0 {
+	if err == nil && microsOf(s) == 0 {
 		err = d.refuse(n, "unknown unit", "lengths are in "+unitNames+"; leave the key out for an unnamed unit")
 	}
 	return s, err

@@ -23,7 +23,7 @@ func (d *document) object(n *node, keys ...string) error {
 			continue
 		}
 		hint := "the keys here are " + strings.Join(keys, ", ")
-		if near := Nearest(m.name, keys, max(1, len(m.name)/3)); near != "" {
+		if near := Nearest(m.name, keys, max(1, len(m.name)/3)); near != "" && len(m.name) > 1 {
 			hint = "did you mean " + near + "? " + hint
 		}
 		where := "key"
