@@ -66,12 +66,7 @@ func ByOrder(ctx context.Context, p *specimen.Part, l *specimen.Load, o StudyOpt
 			return nil, err
 		}
 	}
-	c := Computed{}
-	for _, r := range s.Rows {
-		c.Ladder = append(c.Ladder, r.Rung)
-	}
-	c.estimate()
-	s.Estimate = c.Factor
+	s.Estimate = s.climbed()
 	if err := s.seeCorners(ctx, p, &w, o); err != nil {
 		return nil, err
 	}
@@ -79,6 +74,28 @@ func ByOrder(ctx context.Context, p *specimen.Part, l *specimen.Load, o StudyOpt
 		s.Estimate = noFactor()
 	}
 	return s, nil
+}
+
+// climbed is what the orders say together, by the rule of a check: where rounding
+// rules and the last ones come to nothing, what the ladder had settled to before
+// stands as long as they lie within its bar.
+func (s *Study) climbed() Estimate {
+	var best Computed
+	for k := range s.Rows {
+		c := Computed{}
+		for _, r := range s.Rows[:k+1] {
+			c.Ladder = append(c.Ladder, r.Rung)
+		}
+		c.estimate()
+		if k == 0 || c.supersedes(&best) {
+			best = c
+		}
+	}
+	e := best.Factor
+	if n := len(best.Ladder); n < len(s.Rows) && e.Status.Settled() {
+		e.Notes = append(e.Notes, fmt.Sprintf("the limit is that of order %d: later ones add nothing to it and lie within its bar", best.Ladder[n-1].Order))
+	}
+	return e
 }
 
 func (s *Study) add(ctx context.Context, drawn *specimen.Part, made *shape, order int, w *fem.Workspace, o StudyOptions) error {
