@@ -155,40 +155,46 @@ func (q *Question) settle(ctx context.Context, kind scf.Dimension, a *Answer, s 
 	}
 	a.Outcome, a.Bar = Met, q.bar(c, end, others)
 	a.Rounded, err = q.round(ctx, kind, a)
-	if err == nil {
-		err = q.closeOthers(ctx, s, c, before)
+	if err != nil {
+		return true, err
 	}
-	end.f = 0 // the limit itself
-	s.put(end)
-	a.Keeps = s.keeps(c)
+	roots := map[float64]float64{s.nodes[before].At: end.At}
+	found, err := q.closeOthers(ctx, s, c, roots)
+	a.Keeps = s.keeps(c, roots)
+	for _, n := range append(found, end) {
+		s.put(n)
+	}
 	return true, err
 }
 
 // closeOthers finds the other places where the measure passes the limit, by
-// single solves alone.
-func (q *Question) closeOthers(ctx context.Context, s *scan, c coordinate, but int) error {
-	var found []node
+// single solves alone, and adds them to the roots by the value that is known
+// before each.
+func (q *Question) closeOthers(ctx context.Context, s *scan, c coordinate, roots map[float64]float64) (found []node, err error) {
 	for i := 0; i+1 < len(s.nodes); i++ {
-		if i == but || (s.nodes[i].f > 0) == (s.nodes[i+1].f > 0) {
+		a, b, beyond := s.ends(i)
+		left := s.nodes[i].At
+		if _, known := roots[left]; known || (a.f > 0) == (b.f > 0) {
 			continue
 		}
-		a, b, beyond := s.ends(i)
-		if a.f == 0 || b.f == 0 {
+		for _, n := range []node{a, b} {
+			if n.f == 0 {
+				roots[left] = n.At
+			}
+		}
+		if _, known := roots[left]; known {
 			continue
 		}
 		end, _, err := q.refine(ctx, c, s.closer, a, b, beyond)
 		if err != nil {
-			return err
+			return nil, err
 		}
 		if end.Decided {
-			end.f = 0
 			found = append(found, end)
+			roots[left] = end.At
 		}
 	}
-	for _, n := range found {
-		s.put(n)
-	}
-	return nil
+	return found, nil
 }
 
 // bar is how well the value at the limit is known: the bar of the measure there,

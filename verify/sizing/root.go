@@ -16,6 +16,9 @@ type node struct {
 // relative is the bar, or the allowance, of a node in the measure of f.
 func (n *node) relative() float64 { return n.Uncertainty / n.Value }
 
+// unsure tells that a node cannot be told from the limit.
+func (n *node) unsure() bool { return math.Abs(n.f) <= n.relative() }
+
 // worse tells that a node was solved with less effort than that.
 func (n *node) worse(e Effort) bool {
 	return n.Rough && (e.Order == 0 || n.relative() > 1.5*e.allowance())

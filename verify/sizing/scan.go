@@ -61,13 +61,19 @@ func (s *scan) crossing() (before int, falling bool) {
 	return before, false
 }
 
-// keeps lists the stretches of the scan that keep the limit.
-func (s *scan) keeps(c coordinate) (list []Interval) {
+// keeps lists the stretches of the scan that keep the limit. Roots are the ends
+// between two nodes, by the value of the one before; where none is known the end is
+// interpolated.
+func (s *scan) keeps(c coordinate, roots map[float64]float64) (list []Interval) {
 	for i, n := range s.nodes {
 		cross := n.At
 		if i > 0 {
 			o := s.nodes[i-1]
-			cross = c.back(o.u + (n.u-o.u)*o.f/(o.f-n.f))
+			if root, known := roots[o.At]; known {
+				cross = root
+			} else {
+				cross = c.back(o.u + (n.u-o.u)*o.f/(o.f-n.f))
+			}
 		}
 		inside, was := n.f <= 0, i > 0 && s.nodes[i-1].f <= 0
 		switch {

@@ -76,7 +76,7 @@ func (q *Question) firm(ctx context.Context, s *scan, c coordinate, efforts ...E
 	for _, e := range efforts {
 		var xs []float64
 		for _, n := range s.nodes {
-			if math.Abs(n.f) < n.relative() && n.worse(e) {
+			if n.unsure() && n.worse(e) {
 				xs = append(xs, n.At)
 			}
 		}
@@ -106,7 +106,16 @@ func (s *scan) doubtful(c coordinate) (xs []float64) {
 	for i := 0; i+1 < len(n); i++ {
 		a, b := n[i], n[i+1]
 		h := b.u - a.u
-		if (a.f > 0) != (b.f > 0) || h < narrow {
+		if h < narrow {
+			continue
+		}
+		if a.unsure() || b.unsure() {
+			if u, ok := s.excursion(i); ok {
+				xs = append(xs, c.back(u))
+			}
+			continue
+		}
+		if (a.f > 0) != (b.f > 0) {
 			continue
 		}
 		side := 1.0
@@ -129,6 +138,27 @@ func (s *scan) doubtful(c coordinate) (xs []float64) {
 		xs = append(xs, c.back(vertex))
 	}
 	return xs
+}
+
+// excursion finds where the curve may leave the limit between a node that cannot
+// be told from it and the next, on a stretch of the scan, and come back: the
+// vertex of a parabola through neighbours, where that lies farther off than the
+// bar of that node.
+func (s *scan) excursion(i int) (u float64, ok bool) {
+	n := s.nodes
+	at := n[i]
+	if !at.unsure() || n[i+1].unsure() && n[i+1].relative() > at.relative() {
+		at = n[i+1]
+	}
+	margin := (n[i+1].u - n[i].u) / 20
+	for j := max(1, i); j <= min(i+1, len(n)-2); j++ {
+		slope, second := parabola(n[j], n[j-1], n[j+1])
+		u = n[j].u - slope/second
+		if u > n[i].u+margin && u < n[i+1].u-margin && math.Abs(second)*(u-at.u)*(u-at.u)/2 > at.relative() {
+			return u, true
+		}
+	}
+	return 0, false
 }
 
 // parabola through three nodes: its first and second derivative at the first.

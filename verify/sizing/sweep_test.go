@@ -90,7 +90,7 @@ func inverted(a *sizing.Answer, part sizing.Sample) string {
 		if math.Abs(a.At.At-part.At) <= a.Bar*(1+part.FactorBar/a.At.FactorBar) {
 			return "is the part"
 		}
-		if keeps, not := says(a, part.At); !keeps && !not {
+		if atAnEnd(a, part) {
 			return "is another, the part where the limit is passed too"
 		}
 		if touched(a, part) {
@@ -124,7 +124,10 @@ func touched(a *sizing.Answer, part sizing.Sample) bool {
 // contradictions solves a dense row of places and returns those whose full
 // ladder lies clearly on the other side of the limit than the answer says.
 func contradictions(t *testing.T, q *sizing.Question, a *sizing.Answer, n int) (list []sizing.Sample) {
-	const sure = 0.004 // twice what a single solve of order 4 is taken to be good for
+	const (
+		sure = 0.004 // twice what a single solve of order 4 is taken to be good for
+		ends = 0.002 // which ends of stretches other than the answer rest on
+	)
 	xs := row(a.Searched, n)
 	values := make([]float64, len(xs))
 	var group sync.WaitGroup
@@ -154,7 +157,7 @@ func contradictions(t *testing.T, q *sizing.Question, a *sizing.Answer, n int) (
 			continue
 		}
 		r := measure(x, sizing.Effort{Target: 1e-3})
-		if r.Decided && (low && r.Value-r.Uncertainty > q.Limit*(1+1e-3) || high && r.Value+r.Uncertainty < q.Limit*(1-1e-3)) {
+		if r.Decided && (low && r.Value-r.Uncertainty > q.Limit*(1+ends) || high && r.Value+r.Uncertainty < q.Limit*(1-ends)) {
 			list = append(list, sizing.Sample{At: x, Reading: r})
 		}
 	}
@@ -162,30 +165,33 @@ func contradictions(t *testing.T, q *sizing.Question, a *sizing.Answer, n int) (
 }
 
 // says tells whether an answer means that a value keeps the limit or that it does
-// not: what holds of the two places around it that the search looked at. Both are
-// false where the limit lies between those and within the bar of the answer.
+// not; neither within the bar of the answer.
 func says(a *sizing.Answer, x float64) (keeps, not bool) {
-	if a.Outcome == sizing.Undecided || a.Outcome == sizing.Met && math.Abs(x-a.At.At) <= a.Bar {
+	switch {
+	case a.Outcome == sizing.Undecided || a.Outcome == sizing.Met && math.Abs(x-a.At.At) <= a.Bar:
 		return false, false
-	}
-	inside := func(at float64) bool {
-		return slices.ContainsFunc(a.Keeps, func(k sizing.Interval) bool { return k.From <= at && at <= k.To })
-	}
-	if a.Outcome != sizing.Met {
+	case a.Outcome != sizing.Met:
 		return a.Outcome == sizing.Throughout, a.Outcome == sizing.Beyond
 	}
-	i := slices.IndexFunc(a.Scanned, func(s sizing.Sample) bool { return s.At >= x })
-	if i <= 0 {
-		return false, false
+	keeps = slices.ContainsFunc(a.Keeps, func(k sizing.Interval) bool { return k.From <= x && x <= k.To })
+	return keeps, !keeps
+}
+
+// atAnEnd tells that a stretch that keeps the limit ends at the part, or with
+// nothing between that the search could tell from the limit.
+func atAnEnd(a *sizing.Answer, part sizing.Sample) bool {
+	for _, k := range a.Keeps {
+		for _, end := range []float64{k.From, k.To} {
+			low, high := math.Min(end, part.At), math.Max(end, part.At)
+			told := slices.ContainsFunc(a.Scanned, func(s sizing.Sample) bool {
+				return low < s.At && s.At < high && math.Abs(s.Factor-part.Factor) > s.FactorBar+part.FactorBar
+			})
+			if !told && end != a.Searched.From && end != a.Searched.To {
+				return true
+			}
+		}
 	}
-	low, high := inside(a.Scanned[i-1].At), inside(a.Scanned[i].At)
-	if a.Scanned[i-1].At == a.At.At {
-		low = high
-	}
-	if a.Scanned[i].At == a.At.At {
-		high = low
-	}
-	return low && high, !low && !high
+	return false
 }
 
 // row is dense towards zero and towards both ends.
