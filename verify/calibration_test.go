@@ -212,7 +212,9 @@ func summarise(t *testing.T, cases []*calibrationCase, k int, target float64, lo
 }
 
 func (s summary) demand(t *testing.T, target float64, long bool) {
-	if s.inside < leastInside {
+	// Of a few dozen cases one may lie outside by the odds that are asked for.
+	outside := math.Round(float64(s.cases) * (1 - s.inside))
+	if s.inside < leastInside && (long || outside > 1) {
 		t.Errorf("target %g: only %.2f %% of the true errors lie inside the bar", target, 100*s.inside)
 	}
 	if s.worst > worstMiss {

@@ -2,6 +2,7 @@ package verify
 
 import (
 	"math"
+	"strings"
 
 	"gonum.org/v1/gonum/spatial/r2"
 
@@ -24,6 +25,12 @@ const (
 	jacobianLimit = 0.05 // smallest Jacobian of a bent triangle over that of the straight one
 )
 
+// Beginnings of the names of checks that a user can mend.
+const (
+	farField = "far-field stress in the "
+	plainEnd = "length of the plain "
+)
+
 // checks are the conditions beside the answer.
 func (c *climb) checks(s *shape, out *Computed) []Check {
 	sol := out.Last
@@ -35,7 +42,7 @@ func (c *climb) checks(s *shape, out *Computed) []Check {
 		below("free-surface traction at the root", last.Leftover/last.Factor, leftoverLimit),
 	}
 	for i, plain := range c.part.Plain {
-		list = append(list, below("far-field stress in the "+plain.Name, farError(c.part, c.load, sol, i), farLimit))
+		list = append(list, below(farField+plain.Name, farError(c.part, c.load, sol, i), farLimit))
 	}
 	if out.Factor.Status.Settled() {
 		list = append(list, below("distance to the factor of a second mesh, relative", out.Factor.Signals.Second/out.Factor.Value, out.apart))
@@ -44,7 +51,7 @@ func (c *climb) checks(s *shape, out *Computed) []Check {
 		list[i].discretisation = true
 	}
 	for _, plain := range c.part.Plain {
-		list = append(list, above("length of the plain "+plain.Name+" in sizes", plainLength(c.part, plain), plainLimit))
+		list = append(list, above(plainEnd+plain.Name+" in sizes", plainLength(c.part, plain), plainLimit))
 	}
 	return append(list,
 		below("share of the error left by one order more", contraction(out.Factor), extrapolate.WeakestShare),
@@ -69,6 +76,14 @@ func contraction(e Estimate) float64 {
 		return math.Inf(1)
 	}
 	return e.Order
+}
+
+// remedy is what a user can do about a failed check.
+func (c Check) remedy() string {
+	if strings.HasPrefix(c.Name, farField) || strings.HasPrefix(c.Name, plainEnd) {
+		return ": draw the ends longer"
+	}
+	return ""
 }
 
 // apartLimit is how far the second mesh may be from the first, relative. Both err

@@ -31,6 +31,8 @@ func (g grading) sizing(p *specimen.Part) mesh.Sizing {
 	for _, side := range p.Notch {
 		s.Sides = append(s.Sides, mesh.SideWish{Side: side, PerQuarter: g.perQuarter, Size: g.piece(sides[side].Curve)})
 	}
+	box := p.Region.Bounds()
+	least := tiny * r2.Norm(r2.Sub(box.Max, box.Min))
 	for _, j := range p.Joints {
 		size := j.Radius * quarter / g.perQuarter
 		for _, side := range p.Notch {
@@ -38,10 +40,8 @@ func (g grading) sizing(p *specimen.Part) mesh.Sizing {
 				size = math.Min(size, g.piece(c))
 			}
 		}
-		s.Spots = append(s.Spots, mesh.SpotWish{At: j.At, Size: g.joint * size})
+		s.Spots = append(s.Spots, mesh.SpotWish{At: j.At, Size: math.Max(g.joint*size, least)})
 	}
-	box := p.Region.Bounds()
-	least := tiny * r2.Norm(r2.Sub(box.Max, box.Min))
 	for _, c := range p.Region.Corners() {
 		if share := g.cornerShare(c); share < 1 {
 			s.Spots = append(s.Spots, mesh.SpotWish{At: c.At, Size: math.Max(share*g.around(p, sides, c.At), least)})
@@ -83,9 +83,9 @@ func (g grading) around(p *specimen.Part, sides []outline.Side, at r2.Vec) float
 	return least
 }
 
-// tiny is the smallest size at a corner, as a share of the part's: coordinates
-// have few digits left below it.
-const tiny = 1e-8
+// tiny is the smallest size at a joint or corner, as a share of the part's:
+// coordinates have few digits left below it.
+const tiny = 2e-9
 
 // ends tells whether a curve begins or ends at a point.
 func ends(c outline.Curve, at r2.Vec) bool {

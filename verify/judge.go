@@ -55,7 +55,7 @@ func (f *Finding) settle(p *specimen.Part, o Options) bool {
 	}
 	for _, c := range f.Checks {
 		if !c.Passed {
-			f.because("the check of the %s failed: %.3g against a limit of %.3g", c.Name, c.Value, c.Limit)
+			f.because("the check of the %s failed: %.3g against a limit of %.3g%s", c.Name, c.Value, c.Limit, c.remedy())
 			settled = false
 		}
 	}

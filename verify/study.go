@@ -15,7 +15,8 @@ type StudyOptions struct {
 	// Order is the order of the elements of a study by size; 0: 2, the order
 	// most meshes in use have.
 	Order int
-	// Rungs is the number of meshes of a study by size; 0: 4.
+	// Rungs is the number of meshes of a study by size; 0: 4, and a fifth where
+	// these leave it undecided.
 	Rungs int
 	// Size is the length of the elements at the notch with which a study by size
 	// begins, in the part's unit; 0: three of them on 90° of its arc.

@@ -32,22 +32,37 @@ func BySize(ctx context.Context, p *specimen.Part, l *specimen.Load, o StudyOpti
 	}
 	var w fem.Workspace
 	for k := range rungs {
-		if err := b.next(k); err != nil {
+		if err := b.rung(ctx, k, rungs, &w); err != nil {
 			return nil, err
 		}
-		if err := b.affordable(k, rungs); err != nil {
-			return nil, err
-		}
-		if err := s.add(ctx, b.drawn, b.made, b.order, &w, o); err != nil {
-			return nil, err
-		}
-		s.Rows[k].Blind = b.blind
 	}
 	if err := s.seeCorners(ctx, b.drawn, &w, o); err != nil {
 		return nil, err
 	}
 	s.observe(b.order)
+	// Where nobody said how many, one rung more may tell what these do not.
+	if o.Rungs == 0 && s.Estimate.Status == extrapolate.Undecided && b.affordable(rungs-1, rungs+1) == nil {
+		if err := b.rung(ctx, rungs, rungs+1, &w); err != nil {
+			return nil, err
+		}
+		s.observe(b.order)
+	}
 	return s, nil
+}
+
+// rung solves rung k of so many.
+func (b *bySize) rung(ctx context.Context, k, rungs int, w *fem.Workspace) error {
+	if err := b.next(k); err != nil {
+		return err
+	}
+	if err := b.affordable(k, rungs); err != nil {
+		return err
+	}
+	if err := b.study.add(ctx, b.drawn, b.made, b.order, w, b.options); err != nil {
+		return err
+	}
+	b.study.Rows[k].Blind = b.blind
+	return nil
 }
 
 // A bySize makes the meshes of a study by size, one after the other.

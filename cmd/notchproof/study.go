@@ -48,7 +48,7 @@ func runStudy(c *call) (int, error) {
 	var out figureFile
 	by := c.flags.String("by", "size", "what is refined: size or order")
 	order := c.flags.Int("order", 0, "order of the elements in a study by size, 1 to 8 (default 2)")
-	rungs := c.flags.Int("rungs", 0, "number of meshes in a study by size, 3 to 6 (default 4)")
+	rungs := c.flags.Int("rungs", 0, "number of meshes in a study by size, 3 to 6 (default 4, and one more where these leave it undecided)")
 	size := c.flags.String("size", "", "length of the elements at the notch that a study by size begins with, as in 1mm")
 	out.flags(c.flags, "write the plot to this .png or .svg file")
 	q.oneLoadFlag(c.flags)

@@ -63,8 +63,12 @@ func findingText(b *strings.Builder, f *verify.Finding, part *specimen.Part, s s
 		fmt.Fprintf(b, "             von Mises %s; on the gross section %s\n",
 			number.Uncertain(c.VonMises.Value, c.VonMises.Uncertainty), number.Uncertain(c.Gross, c.Gross/c.Factor.Value*c.Factor.Uncertainty))
 	}
-	fmt.Fprintf(b, "             peak on the %s at x = %s, y = %s, %.1f° %s\n", c.Peak.Side,
-		number.Length(round(c.Peak.X, 4), unit), number.Length(round(c.Peak.Y, 4), unit), c.Peak.ArcDegrees, part.AngleFrom())
+	at := fmt.Sprintf("on the %s at x = %s, y = %s", c.Peak.Side, number.Length(round(c.Peak.X, 4), unit), number.Length(round(c.Peak.Y, 4), unit))
+	if c.Factor.Status.Settled() {
+		fmt.Fprintf(b, "             peak %s, %.1f° %s\n", at, c.Peak.ArcDegrees, part.AngleFrom())
+	} else {
+		fmt.Fprintf(b, "             highest %s\n", at)
+	}
 	if k := len(c.Ladder); k > 0 {
 		last := c.Ladder[k-1]
 		fmt.Fprintf(b, "             %s: %d rungs to order %d on %s, %s unknowns; %s\n",
