@@ -90,6 +90,9 @@ func inverted(a *sizing.Answer, part sizing.Sample) string {
 		if math.Abs(a.At.At-part.At) <= a.Bar*(1+part.FactorBar/a.At.FactorBar) {
 			return "is the part"
 		}
+		if part.At < a.Searched.From || part.At > a.Searched.To {
+			return "is another, the part beyond what was searched"
+		}
 		if atAnEnd(a, part) {
 			return "is another, the part where the limit is passed too"
 		}
