@@ -7,10 +7,11 @@ import (
 )
 
 // Gradings of the two meshes that a ladder begins with: the first as coarse as
-// high orders like it, the second a little finer and graded to joints by another
-// share, so that no element of the one is one of the other.
+// high orders like it, the second a little coarser and graded to joints by another
+// share, so that no element of the one is one of the other. Their distance is then
+// about the larger error of the two, the one that is not stated.
 func firstGrading() grading  { return grading{perQuarter: 6, growth: 0.6, joint: 0.2} }
-func secondGrading() grading { return grading{perQuarter: 7, growth: 0.6, joint: 0.15} }
+func secondGrading() grading { return grading{perQuarter: 5, growth: 0.7, joint: 0.15} }
 
 // longer is by how many of their sizes the ends of the second mesh's part are
 // longer. Where the place of an end matters to the factor, the second mesh has
