@@ -4,6 +4,7 @@ import (
 	"errors"
 	"fmt"
 	"io"
+	"runtime/debug"
 	"strings"
 
 	"github.com/spf13/pflag"
@@ -90,8 +91,14 @@ func runPicture(c *call) (int, error) {
 	return statusOf(result), nil
 }
 
+// collectOften lets the layers of a picture use the same memory one after the
+// other: each is larger than all of a solve, and fresh pages cost more than the
+// collector does.
+func collectOften() { debug.SetGCPercent(100) }
+
 // draw draws and writes the picture.
 func (d *drawing) draw(r *verify.Result) error {
+	collectOften()
 	im, err := render.Picture(&r.Findings[0], r.Part, d.o)
 	if fault := (*render.FieldError)(nil); errors.As(err, &fault) {
 		return &inputError{text: "--field " + fault.Field + ": " + fault.Reason, hint: "leave --field out, or choose another of " + strings.Join(render.Fields(), ", ")}

@@ -142,6 +142,7 @@ func makeSheet(c *call, bar *progress, job *job, input report.Input, labels repo
 	})
 	if drawn {
 		bar.tell("drawing")
+		collectOften()
 		made.pictures, err = report.Draw(made.content, result)
 	}
 	return made, err
