@@ -5,7 +5,6 @@ import (
 	"math"
 	"runtime"
 	"strings"
-	"sync"
 
 	"notchproof/scf"
 	"notchproof/verify"
@@ -63,7 +62,7 @@ func (q *Question) solveAll(ctx context.Context, points []*Point, e Effort, keep
 	errs := make([]error, len(points))
 	go func() {
 		defer close(done)
-		each(len(points), e.workers(), func(k int) {
+		verify.SideBySide(len(points), e.workers(), func(k int) {
 			if points[k].Status == Missing {
 				errs[k] = q.solve(ctx, points[k])
 			}
@@ -153,22 +152,4 @@ func (o *order) rest() error {
 		}
 	}
 	return nil
-}
-
-// each calls f for 0 … n−1 on a number of goroutines, in order of start.
-func each(n, workers int, f func(k int)) {
-	var group sync.WaitGroup
-	next := make(chan int)
-	for range min(n, workers) {
-		group.Go(func() {
-			for k := range next {
-				f(k)
-			}
-		})
-	}
-	for k := range n {
-		next <- k
-	}
-	close(next)
-	group.Wait()
 }

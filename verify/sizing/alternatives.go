@@ -9,6 +9,7 @@ import (
 	"sync/atomic"
 
 	"notchproof/scf"
+	"notchproof/verify"
 	"notchproof/verify/specimen"
 )
 
@@ -61,7 +62,7 @@ func (q *Question) Alternatives(ctx context.Context, a *Answer) ([]Alternative, 
 	list, errs := make([]Alternative, len(ways)), make([]error, len(ways))
 	var failed atomic.Bool
 	order := longestFirst(ways)
-	each(len(ways), q.workers(), func(k int) {
+	verify.SideBySide(len(ways), q.workers(), func(k int) {
 		if failed.Load() {
 			return
 		}

@@ -7,9 +7,9 @@ import (
 	"maps"
 	"math"
 	"runtime"
-	"sync"
 
 	"notchproof/scf"
+	"notchproof/verify"
 	"notchproof/verify/specimen"
 )
 
@@ -169,7 +169,7 @@ func undecided(err error) Reading {
 func (q *Question) samples(ctx context.Context, xs []float64, e Effort) ([]Sample, error) {
 	out, errs := make([]Sample, len(xs)), make([]error, len(xs))
 	e.Workers = 1
-	each(len(xs), q.workers(), func(i int) { out[i], errs[i] = q.sample(ctx, xs[i], e) })
+	verify.SideBySide(len(xs), q.workers(), func(i int) { out[i], errs[i] = q.sample(ctx, xs[i], e) })
 	return out, errors.Join(errs...)
 }
 
@@ -183,22 +183,4 @@ func (q *Question) close() Effort {
 }
 func (q *Question) rough() Effort {
 	return Effort{Target: scanTarget, Workers: q.workers(), Order: scanOrder}
-}
-
-// each calls f for 0 … n−1 on a number of goroutines, in order of start.
-func each(n, workers int, f func(i int)) {
-	var group sync.WaitGroup
-	next := make(chan int)
-	for range min(n, workers) {
-		group.Go(func() {
-			for i := range next {
-				f(i)
-			}
-		})
-	}
-	for i := range n {
-		next <- i
-	}
-	close(next)
-	group.Wait()
 }
