@@ -22,8 +22,8 @@ const (
 )
 
 // A ramp takes values to tones. Where a field has a sign the lightness falls
-// in the same straight line from the lowest value, through zero, to the highest:
-// one tone is one value in grey print too, which no ramp that darkens both ways
+// in the same straight line from the lowest value, through zero, to the highest,
+// or the other way round where the lowest is the larger: one tone is one value in grey print too, which no ramp that darkens both ways
 // can say. On top of that the hue turns from sand through green, at zero, to
 // petrol and violet, and the zero line is drawn.
 type ramp struct {
@@ -33,10 +33,19 @@ type ramp struct {
 
 type rampTable [rampSteps + 1]color.RGBA
 
-// newRamp gives the ramp from a low to a high value, low ≤ 0 < high.
+// newRamp gives the ramp from a low to a high value, low ≤ 0 ≤ high, not both 0.
 func newRamp(low, high float64) *ramp {
 	if low == 0 {
 		return &ramp{0, high, plainRamp()}
+	}
+	if -low > high {
+		// Mostly below zero: dark is what is large, so that the plain part of the
+		// sheet stays paper.
+		table := new(rampTable)
+		for i, c := range newRamp(-high, -low).table {
+			table[rampSteps-i] = c
+		}
+		return &ramp{low, high, table}
 	}
 	table, zero := new(rampTable), -low/(high-low)
 	curve := func(t float64) oklab { return signedCurve(t, zero) }

@@ -59,11 +59,20 @@ func ramps() map[string]*ramp {
 	}
 }
 
+// sampledRamp goes from the end that is light, the smaller one, to the dark one.
 func sampledRamp(r *ramp) (light [rampSamples][3]float64) {
+	from, to := lightToDark(r)
 	for i := range light {
-		light[i] = lightOf(r.tone(r.low + (r.high-r.low)*float64(i)/(rampSamples-1)))
+		light[i] = lightOf(r.tone(from + (to-from)*float64(i)/(rampSamples-1)))
 	}
 	return light
+}
+
+func lightToDark(r *ramp) (from, to float64) {
+	if -r.low > r.high {
+		return r.high, r.low
+	}
+	return r.low, r.high
 }
 
 // Equal steps of value look about equally large: no step differs from the mean
@@ -120,7 +129,8 @@ func TestRampLightnessFalls(t *testing.T) {
 // print reads signed values too.
 func TestZeroHasOneTone(t *testing.T) {
 	for _, r := range ramps() {
-		zero := -r.low / (r.high - r.low)
+		from, to := lightToDark(r)
+		zero := -from / (to - from)
 		want := lightEnd + zero*(darkEnd-lightEnd)
 		linear := lightOf(r.tone(0))
 		grey := cielab(linear)[0]
