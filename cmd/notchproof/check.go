@@ -73,10 +73,7 @@ func runCheck(c *call) (int, error) {
 	if err := checkExports(*files, job.loads); err != nil {
 		return 0, err
 	}
-	bar := c.progress()
-	job.options.Progress = bar.tell
-	result, err := verify.Run(c.ctx, job.part, job.loads, job.options)
-	bar.clear()
+	result, err := c.verified(job)
 	if err != nil {
 		return 0, err
 	}
@@ -94,6 +91,14 @@ func runCheck(c *call) (int, error) {
 		fmt.Fprintf(c.stdout, "written to %s\n", file)
 	}
 	return statusOf(result), nil
+}
+
+// verified runs the ladders of a job and tells how far they are.
+func (c *call) verified(j *job) (*verify.Result, error) {
+	bar := c.progress()
+	defer bar.clear()
+	j.options.Progress = bar.tell
+	return verify.Run(c.ctx, j.part, j.loads, j.options)
 }
 
 // A job is a part with what is asked about it.

@@ -78,10 +78,7 @@ func runPlot(c *call) (int, error) {
 	if err != nil {
 		return 0, err
 	}
-	bar := c.progress()
-	job.options.Progress = bar.tell
-	result, err := verify.Run(c.ctx, job.part, job.loads, job.options)
-	bar.clear()
+	result, err := c.verified(job)
 	if err != nil {
 		return 0, err
 	}

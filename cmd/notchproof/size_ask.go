@@ -46,16 +46,8 @@ func (s *sizeQuestion) define(f *pflag.FlagSet) {
 	f.StringVar(&s.stress, "stress", "", "the largest stress allowed, as in 120MPa")
 	f.StringVar(&s.nominal, "nominal", "", "nominal stress of the one load in the part as given, as in 60MPa")
 	l := &s.loads
-	l.flags = f
 	f.StringVar(&l.safety, "safety", "", "the smallest safety allowed, as in 2")
-	f.StringVar(&l.axial, "axial", "", "axial force, positive in tension, as in 12kN")
-	f.StringVar(&l.bending, "bending", "", "bending moment, as in 300N·m")
-	f.StringVar(&l.torque, "torque", "", "torque of a shaft, as in 450N·m")
-	f.StringVar(&l.thickness, "thickness", "", "thickness of a bar, as in 8mm")
-	f.StringVar(&l.yield, "yield", "", "yield stress, as in 355MPa")
-	f.StringVar(&l.tensile, "tensile", "", "tensile strength, of brittle materials")
-	f.StringVar(&l.elongation, "elongation", "", "elongation after fracture, as in 18%")
-	f.BoolVar(&l.brittle, "brittle", false, "cast or otherwise brittle, whatever the elongation")
+	l.act(f)
 }
 
 // ask puts the question together.

@@ -5,6 +5,8 @@ import (
 	"math"
 	"os"
 	"path/filepath"
+	"regexp"
+	"strconv"
 	"strings"
 	"testing"
 
@@ -25,10 +27,10 @@ func TestSizeAndToleranceStatuses(t *testing.T) {
 		status int
 		out    string
 	}{
-		{"size shaft-shoulder D=72mm d=48mm --kt 1.5 --load torsion", exitAgrees, "where Kts = 1."},
+		{"size shaft-shoulder D=72mm d=48mm --kt 1.5 --load torsion", exitAgrees, "where Kts = "},
 		{"size shaft-shoulder D=72mm d=48mm r=3mm --kt 1 --load torsion", exitNotMet, "no r meets it"},
 		{"size shaft-shoulder D=72mm d=48mm r=3mm --kt 100 --load torsion", exitAgrees, "every r"},
-		{"size shaft-shoulder D=72mm d=48mm r=0 --kt 1.5 --load torsion --bare", exitAgrees, "where Kts = 1."},
+		{"size shaft-shoulder D=72mm d=48mm r=0 --kt 1.5 --load torsion --bare", exitAgrees, "where Kts = "},
 		{"size shaft-shoulder D=72mm d=48mm --stress 150MPa --load torsion --nominal 100MPa --bare", exitAgrees, "MPa nominal"},
 		{"size shaft-shoulder D=72mm d=48mm --safety 2 --torque 900N·m --yield 25ksi --bare", exitAgrees, "a safety of 2 against"},
 		{"size shaft-shoulder D=72mm d=48mm r=3mm --kt 1.4 --load torsion", exitAgrees, "elliptic fillet"},
@@ -159,5 +161,19 @@ func TestSizeJSON(t *testing.T) {
 	_, out, _ = program(t, "size shaft-shoulder D=72mm d=48mm --kt 1 --load torsion --json")
 	if !strings.Contains(out, `"value": null`) || !strings.Contains(out, `"outcome": "notMet"`) || !strings.Contains(out, `"best": {`) {
 		t.Errorf("a value where nothing meets the limit\n%s", out)
+	}
+}
+
+// The factor that the answer stands at is the one asked for, within its bar.
+func TestSizeStandsAtTheFactor(t *testing.T) {
+	status, out, errs := program(t, "size shaft-shoulder D=72mm d=48mm --kt 1.5 --load torsion --bare")
+	at := regexp.MustCompile(`answer .* where Kts\s*=[\s\x{a0}]*([0-9.]+)[\s\x{a0}]*±[\s\x{a0}]*([0-9.]+)`).FindStringSubmatch(out)
+	if status != exitAgrees || errs != "" || at == nil {
+		t.Fatalf("exit status %d\n%s%s", status, out, errs)
+	}
+	factor, _ := strconv.ParseFloat(at[1], 64)
+	bar, _ := strconv.ParseFloat(at[2], 64)
+	if math.Abs(factor-1.5) > bar || bar > 1.5e-3 {
+		t.Errorf("the answer stands at %g ± %g, asked for 1.5", factor, bar)
 	}
 }

@@ -71,7 +71,8 @@ type strengthFlags struct {
 	flags                  *pflag.FlagSet
 }
 
-func (s *strengthFlags) define(f *pflag.FlagSet) {
+// act takes what acts on a part and what it is made of.
+func (s *strengthFlags) act(f *pflag.FlagSet) {
 	s.flags = f
 	f.StringVar(&s.axial, "axial", "", "axial force, positive in tension, as in 12kN")
 	f.StringVar(&s.bending, "bending", "", "bending moment, as in 300N·m")
@@ -81,6 +82,10 @@ func (s *strengthFlags) define(f *pflag.FlagSet) {
 	f.StringVar(&s.tensile, "tensile", "", "tensile strength, as in 510MPa")
 	f.StringVar(&s.elongation, "elongation", "", "elongation after fracture, as in 18%")
 	f.BoolVar(&s.brittle, "brittle", false, "cast or otherwise brittle, whatever the elongation")
+}
+
+func (s *strengthFlags) define(f *pflag.FlagSet) {
+	s.act(f)
 	f.StringVar(&s.metal, "metal", "", "kind of metal for the rules of notch sensitivity (steel): stainless, cast-steel, nodular-iron, malleable-iron, grey-iron, annealed-aluminium, hardened-aluminium, cast-aluminium")
 	f.StringVar(&s.slipLayer, "slip-layer", "", "thickness of the slip layer of Siebel and Stieler, as in 0.05mm, to use their rule too")
 	f.StringVar(&s.safety, "safety", "", "smallest safety that is asked for, as in 1.8")

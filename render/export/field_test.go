@@ -186,7 +186,7 @@ func TestFieldReadsBack(t *testing.T) {
 		bent   float64 // share of the peak
 	}{
 		{"bar-hole", scf.Dims{"W": 60, "d": 20, "e": 5}, 1e-3, 1e-5},
-		{"bar-shoulder", scf.Dims{"D": 60, "d": 40, "r": 4}, 1e-8, 1e-8},
+		{"bar-shoulder", scf.Dims{"D": 60, "d": 40, "r": 4}, 1e-9, 1e-9},
 		{"shaft-shoulder", scf.Dims{"D": 72, "d": 48, "r": 3}, 1e-3, 1e-3},
 	} {
 		r := checked(t, row.name, row.dims, row.target)
